@@ -1,24 +1,9 @@
 import { spawn } from 'node:child_process';
-import { accessSync, constants } from 'node:fs';
 import { readdir, rename, rm } from 'node:fs/promises';
 import { userInfo } from 'node:os';
 import path from 'node:path';
+import { findProgram } from './programs.ts';
 import { StartupError, writeFault } from './startup-error.ts';
-
-/** Where a program is, looking also where Debian keeps servers, which is not in every user's PATH. */
-export function findProgram(name: string): string | undefined {
-  const folders = [...(process.env.PATH ?? '').split(path.delimiter), '/usr/sbin', '/usr/local/sbin'];
-  return folders.map((folder) => path.join(folder, name)).find(isExecutable);
-}
-
-function isExecutable(file: string): boolean {
-  try {
-    accessSync(file, constants.X_OK);
-    return true;
-  } catch {
-    return false;
-  }
-}
 
 /** MariaDB refuses to run as root unless it is told that root is meant; any other user must not name one. */
 export function userFlags(): string[] {

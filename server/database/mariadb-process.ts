@@ -2,7 +2,7 @@ import { spawn } from 'node:child_process';
 import { createWriteStream, renameSync, statSync } from 'node:fs';
 import path from 'node:path';
 import { createInterface } from 'node:readline';
-import { findProgram } from './mariadb-install.ts';
+import { findProgram } from './programs.ts';
 import { StartupError, writeFault } from './startup-error.ts';
 
 const secondsToComeUp = 120;

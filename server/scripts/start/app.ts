@@ -1,0 +1,93 @@
+import { startMariadb } from '../../database/mariadb.ts';
+import { readOrMakeSecrets } from '../../database/secrets.ts';
+import { StartupError } from '../../database/startup-error.ts';
+import { type DatabaseConnection, databaseOf, type Env, readEnv } from '../../env.ts';
+import { checkAddress } from './address.ts';
+import { type Cleanup, createCleanup } from './cleanup.ts';
+import { ensureClientBuilt } from './client-build.ts';
+import { takeDataFolder } from './data-folder.ts';
+import { ensurePrograms, ffmpeg, mariadb } from './debian.ts';
+import { closeWithin, greet, loadMain } from './serve.ts';
+
+interface Run {
+  root: string;
+  stop: AbortController;
+}
+
+/** Starts everything, serves until told to stop, and ends everything. Answers with the exit code. */
+export async function main({ root, stop }: Run): Promise<number> {
+  let exitCode = 0;
+  const report = (error: unknown) => {
+    exitCode = 1;
+    console.error(error instanceof StartupError ? error.message : error);
+  };
+  // Whatever goes wrong unseen, the database is closed in order before this process ends.
+  for (const event of ['uncaughtException', 'unhandledRejection'] as const) {
+    process.on(event, (error) => {
+      report(error);
+      stop.abort();
+    });
+  }
+  const cleanup = createCleanup(report);
+  try {
+    await serve(root, stop, cleanup, report);
+  } finally {
+    await cleanup.run();
+  }
+  return exitCode;
+}
+
+async function serve(root: string, stop: AbortController, cleanup: Cleanup, report: (error: unknown) => void) {
+  const { signal } = stop;
+  const settings = readEnv(process.env);
+  cleanup.add(await takeDataFolder(settings.DATA_DIR));
+  await checkAddress(settings.HOST, settings.PORT);
+  await ensurePrograms(settings.DATABASE_URL ? [ffmpeg] : [mariadb, ffmpeg], signal);
+  const { sessionSecret, databasePassword } = await readOrMakeSecrets(settings.DATA_DIR);
+  const env = { ...settings, SESSION_SECRET: settings.SESSION_SECRET ?? sessionSecret };
+
+  const [database, { startServer }] = await together([
+    openDatabase(settings, databasePassword, stop, cleanup, report),
+    loadMain(),
+    ensureClientBuilt(root, signal),
+  ]);
+  signal.throwIfAborted();
+  const server = await startServer({ env, database });
+  cleanup.add(() => closeWithin(server.close(), 10_000));
+  if (!signal.aborted) {
+    greet(server);
+    await new Promise((resolve) => signal.addEventListener('abort', resolve, { once: true }));
+  }
+  console.log('Stopping.');
+}
+
+/** The owner's own database when DATABASE_URL names one, otherwise a MariaDB of ours that ends with this run. */
+async function openDatabase(
+  { DATABASE_URL, DATA_DIR }: Env,
+  password: string,
+  stop: AbortController,
+  cleanup: Cleanup,
+  report: (error: unknown) => void,
+): Promise<DatabaseConnection> {
+  const given = DATABASE_URL && databaseOf(DATABASE_URL);
+  if (given) return given;
+  const running = await startMariadb({ dataDir: DATA_DIR, password, signal: stop.signal });
+  let asked = false;
+  cleanup.add(() => {
+    asked = true;
+    return running.stop();
+  });
+  running.ended.then((lastLine) => {
+    if (asked) return;
+    report(new StartupError(`The database ended by itself: ${lastLine} (its log: ${DATA_DIR}/db.log)`));
+    stop.abort();
+  });
+  return running.connection;
+}
+
+/** Like Promise.all, but lets every part come to its end, so that none starts something after the others gave up. */
+async function together<T extends readonly unknown[]>(parts: readonly [...{ [K in keyof T]: Promise<T[K]> }]) {
+  const results = await Promise.allSettled(parts);
+  for (const result of results) if (result.status === 'rejected') throw result.reason;
+  return results.map((result) => (result as PromiseFulfilledResult<unknown>).value) as unknown as T;
+}
