@@ -1,6 +1,6 @@
 import { mkdir } from 'node:fs/promises';
 import path from 'node:path';
-import sharp from 'sharp';
+import sharp, { type OverlayOptions, type Sharp } from 'sharp';
 import type { Point } from '../../../shared/reading/document.ts';
 import type { Prop } from './props.ts';
 
@@ -47,7 +47,7 @@ export async function drawStrip(drawing: StripDrawing, folder: string): Promise<
   return files;
 }
 
-function inFormat(picture: sharp.Sharp, format: StripDrawing['format']): sharp.Sharp {
+function inFormat(picture: Sharp, format: StripDrawing['format']): Sharp {
   if (format === 'png') return picture.png({ compressionLevel: 4 });
   if (format === 'webp') return picture.webp({ quality: 92, effort: 0 });
   return picture.jpeg({ quality: 93, chromaSubsampling: '4:4:4' });
@@ -58,7 +58,7 @@ function svgOf(width: number, height: number, inside: string): Buffer {
 }
 
 /** The thing on a small see-through sheet, laid so that the middle of its area falls on `place` to a fraction of a pixel. */
-function sprite(prop: Prop, middle: Point, place: Point, turn: number): sharp.OverlayOptions {
+function sprite(prop: Prop, middle: Point, place: Point, turn: number): OverlayOptions {
   const half = Math.ceil(prop.reach) + 4;
   const left = Math.floor(place.x) - half;
   const top = Math.floor(place.y) - half;
