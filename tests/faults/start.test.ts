@@ -4,7 +4,7 @@ import { createServer } from 'node:net';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { afterEach, beforeAll, beforeEach, describe, expect, it } from 'vitest';
-import { processesNaming } from '../../server/scripts/prove/processes.ts';
+import { leftRunning, processesNaming } from '../../server/scripts/prove/processes.ts';
 import { endAll, startSpandrel } from '../../server/scripts/prove/start-process.ts';
 import { ensureClientBuilt } from '../../server/scripts/start/client-build.ts';
 
@@ -35,7 +35,7 @@ describe('npm start', () => {
     first.signal('SIGINT');
     first.signal('SIGINT');
     expect(await first.exited).toMatchObject({ code: 0, stderr: '' });
-    expect(processesNaming(dataDir)).toEqual([]);
+    expect(await leftRunning(dataDir)).toEqual([]);
     expect(await logOf(dataDir)).toMatch(/Shutdown complete\s*$/);
     expect(await readdir(dataDir)).not.toContain('in-use');
 
@@ -52,7 +52,7 @@ describe('npm start', () => {
     const { code, stderr } = await starting.exited;
     expect([0, 130]).toContain(code);
     expect(stderr).toBe('');
-    expect(processesNaming(dataDir)).toEqual([]);
+    expect(await leftRunning(dataDir)).toEqual([]);
     expect((await readdir(dataDir)).filter((entry) => entry.startsWith('db.making') || entry === 'in-use')).toEqual([]);
   });
 
@@ -100,7 +100,7 @@ describe('npm start', () => {
     expect((await fetch(`${await next.ready}/api/health`)).status).toBe(200);
     next.signal('SIGINT');
     expect((await next.exited).code).toBe(0);
-    expect(processesNaming(dataDir)).toEqual([]);
+    expect(await leftRunning(dataDir)).toEqual([]);
   });
 
   it('says that the database ended when it does, and ends too', async () => {
@@ -110,7 +110,7 @@ describe('npm start', () => {
     const { code, stderr } = await starting.exited;
     expect(code).toBe(1);
     expect(stderr).toContain('The database ended by itself: ');
-    expect(processesNaming(dataDir)).toEqual([]);
+    expect(await leftRunning(dataDir)).toEqual([]);
   });
 
   it('says why when the database does not come up, and leaves nothing running', async () => {
@@ -122,7 +122,7 @@ describe('npm start', () => {
     const { code, stderr } = await start().exited;
     expect(code).toBe(1);
     expect(stderr).toMatch(/^The database did not come up: .+ \(its log: .+\/db\.log\)\n$/);
-    expect(processesNaming(dataDir)).toEqual([]);
+    expect(await leftRunning(dataDir)).toEqual([]);
   });
 
   it('refuses a data folder that cannot be written', async () => {

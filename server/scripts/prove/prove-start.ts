@@ -3,7 +3,7 @@ import { mkdtemp, readdir, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { promisify } from 'node:util';
-import { processesNaming } from './processes.ts';
+import { leftRunning } from './processes.ts';
 import { endAll, type StartProcess, startSpandrel } from './start-process.ts';
 
 const secondStartWithin = 3;
@@ -43,7 +43,7 @@ async function startAndStop(name: string, root: string, settings: Record<string,
   began = performance.now();
   await stopped(start);
   console.log(`${name} start: page after ${toPage.toFixed(1)} s, stopped in ${lap().toFixed(1)} s`);
-  const left = processesNaming(folder);
+  const left = await leftRunning(folder);
   if (left.length > 0) throw new Error(`Still running after the stop:\n${left.join('\n')}`);
   const files = await readdir(settings.DATA_DIR ?? folder);
   if (files.some((file) => /^(in-use|db\.pid|db\.making)/.test(file)))
