@@ -1,0 +1,92 @@
+import { createServer } from 'node:http';
+import type { AddressInfo } from 'node:net';
+import { availableParallelism } from 'node:os';
+import { pino } from 'pino';
+import { createAnalysisPool } from './analysis/pool.ts';
+import { createApp } from './app.ts';
+import { createDataSource } from './data-source.ts';
+import type { Deps } from './deps.ts';
+import type { DatabaseConnection, Env } from './env.ts';
+import { createPassport } from './http/passport.ts';
+import { createSessions } from './http/sessions.ts';
+import { createBroadcast } from './realtime/broadcast.ts';
+import { createLiveServer, openLiveServer } from './realtime/liveServer.ts';
+import { createReadingQueue } from './services/readingQueue.ts';
+
+export interface DemoSignIn {
+  name: string;
+  email: string;
+  password: string;
+  role: string;
+}
+
+export interface RunningServer {
+  url: string;
+  demoSignIns: DemoSignIn[];
+  /** Ends sockets, requests, readings and the connections to the database, in this order. */
+  close(): Promise<void>;
+}
+
+export interface StartOptions {
+  env: Pick<Env, 'HOST' | 'PORT' | 'DATA_DIR' | 'PUBLIC_ORIGIN' | 'LOG_LEVEL' | 'DEMO'> & { SESSION_SECRET: string };
+  database: DatabaseConnection;
+}
+
+/**
+ * Boots the server: data source, migrations, app, sockets, listen; then goes on with readings an earlier run left.
+ * Whatever fails, everything that was opened before is closed again.
+ */
+export async function startServer({ env, database }: StartOptions): Promise<RunningServer> {
+  const opened: (() => Promise<unknown>)[] = [];
+  const closeAll = async () => {
+    for (const close of opened.splice(0).reverse()) await close();
+  };
+  try {
+    const log = pino({ level: env.LOG_LEVEL });
+    const dataSource = await createDataSource(database).initialize();
+    opened.push(() => dataSource.destroy());
+    await dataSource.runMigrations();
+    const secure = env.PUBLIC_ORIGIN?.startsWith('https:') ?? false;
+    const sessions = createSessions({ database, secret: env.SESSION_SECRET, secure });
+    opened.push(() => sessions.close());
+    const analysis = createAnalysisPool();
+    opened.push(() => analysis.close());
+
+    const io = createLiveServer(env.PUBLIC_ORIGIN);
+    const parts = { dataSource, dataDir: env.DATA_DIR, broadcast: createBroadcast(io), log };
+    const lanes = Math.max(1, availableParallelism() - 1);
+    const readings = createReadingQueue(parts, { analysis, lanes });
+    opened.push(() => readings.close());
+    const deps: Deps = { ...parts, readings };
+    const passport = createPassport(deps);
+    const app = createApp(deps, { sessions, passport, publicOrigin: env.PUBLIC_ORIGIN });
+
+    const server = createServer(app);
+    io.attach(server);
+    const stopRechecks = openLiveServer(io, { deps, sessions, passport });
+    await new Promise<void>((resolve, reject) => {
+      server.once('error', reject);
+      server.listen(env.PORT, env.HOST, resolve);
+    });
+    opened.push(async () => {
+      stopRechecks();
+      // Closes the HTTP server too.
+      await io.close();
+      server.closeAllConnections();
+    });
+    await readings.resume();
+    return {
+      url: env.PUBLIC_ORIGIN ?? urlOf(env.HOST, server.address() as AddressInfo),
+      demoSignIns: [],
+      close: closeAll,
+    };
+  } catch (error) {
+    await closeAll();
+    throw error;
+  }
+}
+
+function urlOf(host: string, { port }: AddressInfo): string {
+  const name = host === '0.0.0.0' || host === '::' ? '127.0.0.1' : host;
+  return `http://${name.includes(':') ? `[${name}]` : name}:${port}`;
+}

@@ -1,0 +1,34 @@
+import path from 'node:path';
+import { TakeFrame } from '../entities/TakeFrame.ts';
+import type { Deps } from '../deps.ts';
+import { notFound } from '../errors.ts';
+import { takeFolder, thumbnailName } from '../storage/folders.ts';
+import { accessByTake } from './access.ts';
+
+/** A picture as it lies on disk: absolute path and media type. */
+export interface PictureFile {
+  path: string;
+  mediaType: string;
+}
+
+/** The picture of a frame, as posted. */
+export async function findPicture(deps: Deps, userId: string, takeId: string, frame: number): Promise<PictureFile> {
+  const row = await findFrame(deps, userId, takeId, frame);
+  return { path: path.join(takeFolder(deps.dataDir, takeId), row.file), mediaType: row.mediaType };
+}
+
+/** A small picture of a frame. */
+export async function findThumbnail(deps: Deps, userId: string, takeId: string, frame: number): Promise<PictureFile> {
+  const row = await findFrame(deps, userId, takeId, frame);
+  const file = path.join(takeFolder(deps.dataDir, takeId), thumbnailName(row.file));
+  return { path: file, mediaType: 'image/webp' };
+}
+
+/** Paths come from our own rows, never from a request. */
+async function findFrame(deps: Deps, userId: string, takeId: string, frame: number): Promise<TakeFrame> {
+  const { manager } = deps.dataSource;
+  await accessByTake(manager, userId, takeId);
+  const row = await manager.findOneBy(TakeFrame, { takeId, frame });
+  if (!row) throw notFound('frame');
+  return row;
+}
