@@ -47,6 +47,8 @@ async function runInstaller(folder: string, dataDir: string, signal?: AbortSigna
     '--auth-root-authentication-method=socket',
     `--auth-root-socket-user=${userInfo().username}`,
     '--skip-test-db',
+    // It would look up the names of this machine, which a bare one has none of, and which nothing here needs.
+    '--force',
     '--innodb-log-file-size=48M',
   ];
   // Its own process group, because the installer is a script whose children must go with it.
@@ -62,7 +64,7 @@ async function runInstaller(folder: string, dataDir: string, signal?: AbortSigna
   if (code === 0) return;
   const lines = output.trim().split('\n');
   // The first error is the cause, those after it are what followed.
-  const telling = lines.find((line) => line.includes('[ERROR]')) ?? lines.at(-1) ?? '';
+  const telling = lines.find((line) => line.includes('[ERROR]')) ?? lines[0] ?? '';
   throw (
     writeFault(output, dataDir) ?? new StartupError(`The database could not be made in ${dataDir}: ${telling.trim()}`)
   );

@@ -36,33 +36,37 @@ export async function ensurePrograms(programs: Program[], signal: AbortSignal): 
     );
   }
   const root = process.getuid?.() === 0;
-  if (!root && (await run(['sudo', '-n', 'true'], 'ignore').catch(() => 1)) !== 0) {
+  if (!root && !(await maySudo())) {
     throw new StartupError(`${names} ${are} missing; run this once as root, then start again: ${byHand}`);
   }
   console.log(`Installing ${names} from Debian's packages.`);
   signal.throwIfAborted();
   // Lists may be missing or old on a fresh machine. A failed refresh may still leave lists good enough to install from.
   await aptGet(['update'], root);
-  const code = await aptGet(install, root);
+  const { code, output } = await aptGet(install, root);
   signal.throwIfAborted();
   if (code !== 0 || missing.some(({ program }) => !findProgram(program))) {
+    console.error(output.trim().split('\n').slice(-15).join('\n'));
     throw new StartupError(`${names} could not be installed; apt-get says why above. By hand, as root: ${byHand}`);
   }
 }
 
-/**
- * Runs in a process group of its own: a Ctrl-C half-way would leave dpkg to be repaired by hand, so it finishes first.
- */
-function aptGet(args: string[], root: boolean): Promise<number> {
-  const command = ['apt-get', '-qq', '-o', 'DPkg::Lock::Timeout=120', '-o', 'Dpkg::Use-Pty=0', ...args];
-  const settings = ['DEBIAN_FRONTEND=noninteractive'];
-  return run(root ? ['env', ...settings, ...command] : ['sudo', '-n', 'env', ...settings, ...command], 'inherit');
+async function maySudo(): Promise<boolean> {
+  return findProgram('sudo') !== undefined && (await run(['sudo', '-n', 'true'])).code === 0;
 }
 
-function run([program = '', ...args]: string[], output: 'ignore' | 'inherit'): Promise<number> {
-  // apt's chatter belongs to the log of the terminal, not to the output of the command that was asked for.
-  const stdio: ('ignore' | 'inherit' | number)[] =
-    output === 'inherit' ? ['ignore', 2, 2] : ['ignore', 'ignore', 'ignore'];
-  const child = spawn(program, args, { stdio, detached: true });
-  return new Promise((resolve, reject) => child.once('error', reject).once('close', (code) => resolve(code ?? 1)));
+function aptGet(args: string[], root: boolean) {
+  const command = ['env', 'DEBIAN_FRONTEND=noninteractive', 'apt-get', '-q', '-o', 'DPkg::Lock::Timeout=120', ...args];
+  return run(root ? command : ['sudo', '-n', ...command]);
+}
+
+/** Runs in a process group of its own: a Ctrl-C half-way would leave dpkg to be repaired by hand, so it finishes first. */
+function run([program = '', ...args]: string[]): Promise<{ code: number; output: string }> {
+  const child = spawn(program, args, { stdio: ['ignore', 'pipe', 'pipe'], detached: true });
+  let output = '';
+  child.stdout.on('data', (chunk) => (output += chunk));
+  child.stderr.on('data', (chunk) => (output += chunk));
+  return new Promise((resolve, reject) =>
+    child.once('error', reject).once('close', (code) => resolve({ code: code ?? 1, output })),
+  );
 }
