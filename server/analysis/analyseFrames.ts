@@ -1,0 +1,26 @@
+import type { AnalysisRequest, AnalysisResult, ReportProgress } from '../../shared/finding/types.ts';
+import { readMotion } from '../../shared/motion/read.ts';
+import { findInFrames } from './findInFrames.ts';
+
+/**
+ * Reads a take from its frames on disk in the current thread: decodes, finds what moves, reads the motion.
+ * @param report told of every picture decoded and looked at
+ * @param signal stops the work between two pictures
+ * @throws PictureError when a frame is damaged or has another size than the first
+ */
+export async function analyseFrames(
+  request: AnalysisRequest,
+  report: ReportProgress,
+  signal?: AbortSignal,
+): Promise<AnalysisResult> {
+  const total = request.framePaths.length;
+  const { tracks, camera, cautions, width, height } = await findInFrames(request, report, signal);
+  report({ done: 0, total, phase: 'reading' });
+  const { id, kind, firstFrame, fps, hold, scale, tolerances } = request;
+  const reading = readMotion(
+    { id, kind, frames: total, width, height, firstFrame, fps, hold, scale, camera, tracks, cautions },
+    { tolerances },
+  );
+  report({ done: total, total, phase: 'reading' });
+  return { reading };
+}

@@ -1,0 +1,57 @@
+import { labelRegions, type Region } from './components.ts';
+import type { Box } from './grid.ts';
+import type { Measured } from './measure.ts';
+
+/** Something that stands out from the background on one frame. */
+export interface Candidate extends Measured {
+  /** Index of the frame, from 0. */
+  index: number;
+}
+
+/** Most things looked at on one frame; the largest and clearest come first. */
+const MOST = 10;
+/** Pixels of the reduced picture below which a region is dust. */
+const LEAST_AREA = 5;
+
+/**
+ * Regions of the reduced picture that differ from the background: neighbours up to two pixels apart count as one, so
+ * that an outline drawn with a pencil stays whole.
+ * @returns boxes in pixels of the reduced picture, strongest first
+ */
+export function regionsOf(differences: Uint8Array, width: number, height: number, threshold: number): Region[] {
+  const mask = new Uint8Array(differences.length);
+  for (let y = 0; y < height; y++) {
+    for (let x = 0; x < width; x++) {
+      if (differences[y * width + x] < threshold) continue;
+      // Grown by one to each side: pixels two apart touch.
+      for (let ny = Math.max(0, y - 1); ny <= Math.min(height - 1, y + 1); ny++) {
+        const row = ny * width;
+        mask[row + x] = 1;
+        if (x > 0) mask[row + x - 1] = 1;
+        if (x < width - 1) mask[row + x + 1] = 1;
+      }
+    }
+  }
+  const { labels, regions } = labelRegions(mask, width, height);
+  const strength = new Float64Array(regions.length);
+  const cores = new Uint32Array(regions.length);
+  for (let at = 0; at < differences.length; at++) {
+    if (labels[at] === 0 || differences[at] < threshold) continue;
+    strength[labels[at] - 1] += differences[at];
+    cores[labels[at] - 1]++;
+  }
+  return regions
+    .filter((region) => cores[region.label - 1] >= LEAST_AREA)
+    .toSorted((a, b) => strength[b.label - 1] - strength[a.label - 1])
+    .slice(0, MOST);
+}
+
+/** The window of the full picture in which a region of the reduced one is measured, with room around it. */
+export function windowOf(region: Region, factor: number, size: { width: number; height: number }): Box {
+  const room = 3 + Math.ceil(0.15 * Math.max(region.x1 - region.x0, region.y1 - region.y0));
+  const left = Math.max(0, (region.x0 - room) * factor);
+  const top = Math.max(0, (region.y0 - room) * factor);
+  const right = Math.min(size.width, (region.x1 + 1 + room) * factor);
+  const bottom = Math.min(size.height, (region.y1 + 1 + room) * factor);
+  return { left, top, width: right - left, height: bottom - top };
+}

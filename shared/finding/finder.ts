@@ -1,0 +1,118 @@
+import type { Mark, Reading } from '../reading/document.ts';
+import { type Candidate, regionsOf, windowOf } from './candidates.ts';
+import { coarseFactor, reduce } from './coarse.ts';
+import { difference, noiseThreshold } from './difference.ts';
+import { type Ground, stillGround } from './ground.ts';
+import { bestPath } from './link.ts';
+import { cut, measure } from './measure.ts';
+import { type FoundTrack, thingsAmong, trackOf } from './tracks.ts';
+import type { Picture, PointAt } from './types.ts';
+
+export interface FinderOptions {
+  width: number;
+  height: number;
+  /** Number of pictures of the take. */
+  frames: number;
+  camera?: 'still' | 'moving';
+  object?: PointAt;
+}
+
+export interface Found {
+  tracks: { id: string; marks: Mark[] }[];
+  camera: Reading['camera'];
+  cautions: string[];
+}
+
+/** Most pictures kept in full for the background; the benchmark of `stack.md` 5 uses as many. */
+const MOST_SAMPLES = 15;
+/** Paths taken out of the candidates before they are judged: the thing, its shadow, counters, a second thing. */
+const MOST_PATHS = 8;
+const NAMES = ['A', 'B', 'C'];
+
+/**
+ * Finds what moves in a take, one picture at a time: `sampleIndices` says which pictures to give to `learn` first, then
+ * every picture goes once through `look`, in any order, and `finish` links what stood out. Pictures are not kept.
+ */
+export class Finder {
+  readonly sampleIndices: number[];
+  readonly #frames: Candidate[][];
+  readonly #factor: number;
+  #ground: Ground | null = null;
+  #differences = new Uint8Array(0);
+
+  constructor(options: FinderOptions) {
+    this.#factor = coarseFactor(options.width, options.height);
+    this.#frames = Array.from({ length: options.frames }, () => []);
+    const count = Math.min(MOST_SAMPLES, options.frames);
+    const step = (options.frames - 1) / Math.max(1, count - 1);
+    this.sampleIndices = Array.from({ length: count }, (_, k) => Math.round(k * step));
+  }
+
+  /** Learns the background from the pictures at `sampleIndices`, in that order. They are kept until `finish`. */
+  learn(samples: Picture[]): void {
+    this.#ground = stillGround(samples, this.#factor);
+    this.#differences = new Uint8Array(this.#ground.coarse.width * this.#ground.coarse.height);
+  }
+
+  /**
+   * Looks for what stands out on one picture.
+   * @param index place of the picture in the take, from 0
+   * @throws Error when nothing was learned yet
+   */
+  look(index: number, picture: Picture): void {
+    const ground = this.#ground;
+    if (!ground) throw new Error('The finder has to learn the background before it looks at a picture.');
+    const coarse = reduce(picture, this.#factor);
+    difference(coarse, ground.coarse, this.#differences);
+    const threshold = noiseThreshold(this.#differences);
+    for (const region of regionsOf(this.#differences, coarse.width, coarse.height, threshold)) {
+      const box = windowOf(region, this.#factor, picture);
+      const measured = measure(cut(picture, box), ground.window(box), threshold, picture);
+      if (measured) this.#frames[index].push({ ...measured, index });
+    }
+  }
+
+  /** Links what stood out to tracks and names the things A, B and C. Frames of the marks count from 1. */
+  finish(): Found {
+    let rest = this.#frames;
+    const tracks: FoundTrack[] = [];
+    while (tracks.length < MOST_PATHS) {
+      const path = bestPath(rest);
+      if (path.length < 3) break;
+      const taken = new Set(path);
+      rest = rest.map((candidates) => candidates.filter((candidate) => !taken.has(candidate)));
+      tracks.push(trackOf(path));
+    }
+    const things = thingsAmong(tracks);
+    return {
+      tracks: things.map((thing, k) => ({ id: NAMES[k], marks: marksOf(thing) })),
+      camera: { moved: false, offsets: [] },
+      cautions: things.length === 0 ? ['Nothing moves in these frames, so there is no flight to read.'] : [],
+    };
+  }
+}
+
+function marksOf(track: FoundTrack): Mark[] {
+  return track.path.map((candidate, k) => {
+    const shape = track.shapes[k];
+    const radius = Math.sqrt(shape.area / Math.PI);
+    return {
+      frame: candidate.index + 1,
+      x: round(shape.x),
+      y: round(shape.y),
+      radius: round(radius),
+      origin: 'found',
+      confidence: confidenceOf(candidate, shape.area, track),
+    };
+  });
+}
+
+function confidenceOf(candidate: Candidate, area: number, track: FoundTrack): number {
+  const clear = Math.min(1, candidate.contrast / 40);
+  const whole = Math.exp(-Math.abs(Math.log(area / (Math.PI * track.radius ** 2))));
+  return Math.round(100 * Math.min(0.99, clear * whole)) / 100;
+}
+
+function round(value: number): number {
+  return Math.round(value * 1000) / 1000;
+}

@@ -1,0 +1,94 @@
+import type { Candidate } from './candidates.ts';
+
+/** Candidates of one thing, in order of frames, at most one a frame. */
+export type Path = Candidate[];
+
+/** Longest stretch of frames without a candidate that a path bridges. */
+const LONGEST_GAP = 8;
+/** What one more candidate is worth; costs are in the same unit. */
+const REWARD = 1;
+/** Most that one change of velocity costs: a bounce is a change that physics allows. */
+const BOUNCE = 1.6;
+const PER_HIDDEN_FRAME = 0.35;
+
+interface State {
+  score: number;
+  from: State | null;
+  at: Candidate;
+  /** First frame on which the drawing of `at` shows: on twos a step takes two frames, not one after a halt. */
+  since: number;
+  /** Velocity on arrival, px/frame; null at the start of a path. */
+  velocity: { x: number; y: number } | null;
+}
+
+/**
+ * The best path through the candidates of all frames by dynamic programming over pairs of neighbours, with a cost for
+ * every change of velocity (an acceleration that a fall explains is nearly free, a bounce costs a fixed price) and for
+ * every change of size and colour.
+ */
+export function bestPath(frames: Candidate[][]): Path {
+  const states = new Map<Candidate, State[]>();
+  let best: State | null = null;
+  for (let index = 0; index < frames.length; index++) {
+    for (const candidate of frames[index]) {
+      const own: State[] = [{ score: worth(candidate), from: null, at: candidate, since: index, velocity: null }];
+      for (let back = 1; back <= Math.min(LONGEST_GAP + 1, index); back++) {
+        for (const earlier of frames[index - back]) {
+          const link = extend(states.get(earlier) ?? [], earlier, candidate);
+          if (link) own.push(link);
+        }
+      }
+      states.set(candidate, own);
+      for (const state of own) if (!best || state.score > best.score) best = state;
+    }
+  }
+  const path: Path = [];
+  for (let state = best; state; state = state.from) path.unshift(state.at);
+  return path;
+}
+
+function extend(states: State[], earlier: Candidate, candidate: Candidate): State | null {
+  const gap = candidate.index - earlier.index;
+  const price = changeOfLook(earlier, candidate) + PER_HIDDEN_FRAME * (gap - 1);
+  const held = isSameDrawing(earlier, candidate);
+  let best: State | null = null;
+  for (const state of states) {
+    const steps = held ? 1 : candidate.index - state.since;
+    const velocity = {
+      x: (candidate.whole.x - earlier.whole.x) / steps,
+      y: (candidate.whole.y - earlier.whole.y) / steps,
+    };
+    const turn = held ? 0 : changeOfVelocity(state.velocity, velocity, earlier, steps);
+    const score = state.score + worth(candidate) - price - turn;
+    if (best && score <= best.score) continue;
+    best = { score, from: state, at: candidate, since: candidate.index, velocity };
+    if (held) Object.assign(best, { since: state.since, velocity: state.velocity });
+  }
+  return best;
+}
+
+/** A drawing shown again: on twos and threes, or a thing at rest. */
+function isSameDrawing(a: Candidate, b: Candidate): boolean {
+  return Math.hypot(b.whole.x - a.whole.x, b.whole.y - a.whole.y) < 0.6;
+}
+
+function worth(candidate: Candidate): number {
+  return REWARD * Math.min(1, 0.4 + candidate.contrast / 100);
+}
+
+function changeOfVelocity(was: State['velocity'], now: { x: number; y: number }, at: Candidate, steps: number): number {
+  const size = 2 * Math.sqrt(at.whole.area / Math.PI);
+  const speed = Math.hypot(now.x, now.y);
+  // Nothing crosses the picture in one frame: steps far beyond the thing's size are jumps between things.
+  const leap = Math.max(0, speed - 3 * size - 20) / (size + 10);
+  if (!was) return leap + Math.min(0.5, (0.1 * speed) / (size + 5));
+  const bend = Math.hypot(now.x - was.x, now.y - was.y) / Math.min(4, steps);
+  const expected = 2 + 0.12 * size + 0.1 * Math.hypot(was.x, was.y);
+  return leap + Math.min(BOUNCE + (0.02 * bend) / expected, 0.12 * (bend / expected) ** 2);
+}
+
+function changeOfLook(a: Candidate, b: Candidate): number {
+  const size = Math.min(1.5, Math.abs(Math.log(b.whole.area / a.whole.area)));
+  const colour = Math.hypot(b.colour[0] - a.colour[0], b.colour[1] - a.colour[1], b.colour[2] - a.colour[2]);
+  return 0.5 * size ** 2 + Math.min(0.8, (colour / 90) ** 2);
+}
