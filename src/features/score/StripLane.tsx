@@ -1,0 +1,89 @@
+import clsx from 'clsx';
+import { memo } from 'react';
+import { thumbnailUrl } from '../../../shared/api/takes.ts';
+import { shownFrame } from '../../../shared/reading/document.ts';
+import { type Playhead, useFrame } from '../../lib/playhead.ts';
+import type { Columns, FrameRange } from './columns.ts';
+import { Lane } from './Lane.tsx';
+
+interface StripLaneProps {
+  takeId: string;
+  firstFrame: number;
+  columns: Columns;
+  range: FrameRange;
+  playhead: Playhead;
+  /** Production numbers that are missing between the posted files. */
+  missing: readonly number[];
+}
+
+const THUMB = 34;
+const LANE = 54;
+
+const Thumbs = memo(function Thumbs({
+  takeId,
+  firstFrame,
+  columns,
+  from,
+  to,
+}: Omit<StripLaneProps, 'range' | 'playhead' | 'missing'> & FrameRange) {
+  const every = columns.width < 30 ? 2 : 1;
+  return Array.from({ length: to - from + 1 }, (_, index) => from + index).map((frame) => (
+    <div
+      key={frame}
+      className="absolute top-0 flex flex-col items-center"
+      style={{ left: (frame - 1) * columns.width, width: columns.width }}
+    >
+      <img
+        src={thumbnailUrl(takeId, frame)}
+        alt=""
+        loading="lazy"
+        decoding="async"
+        draggable={false}
+        className="mt-1 rounded-[3px] bg-well object-cover outline outline-rule select-none"
+        style={{ width: columns.width - 4, height: THUMB }}
+      />
+      {frame % every === 0 && (
+        <span className="mt-px font-mono text-2xs leading-tight text-graphite">{shownFrame(frame, firstFrame)}</span>
+      )}
+    </div>
+  ));
+});
+
+/** The frame of the playhead on the strip: a slider for keys and screen readers. */
+function Cursor({ firstFrame, columns, playhead }: Pick<StripLaneProps, 'firstFrame' | 'columns' | 'playhead'>) {
+  const frame = useFrame(playhead);
+  return (
+    <div
+      role="slider"
+      tabIndex={0}
+      aria-label="Frame"
+      aria-valuemin={shownFrame(1, firstFrame)}
+      aria-valuemax={shownFrame(columns.frames, firstFrame)}
+      aria-valuenow={shownFrame(frame, firstFrame)}
+      onKeyDown={(event) => {
+        const by = { PageUp: 10, PageDown: -10 }[event.key];
+        if (by === undefined) return;
+        event.preventDefault();
+        playhead.step(by);
+      }}
+      className={clsx('absolute top-0.5 z-10 flex flex-col items-center rounded-mark')}
+      style={{ width: columns.width, height: LANE - 3, transform: `translateX(${(frame - 1) * columns.width}px)` }}
+    >
+      <span className="rounded-[4px] border-2 border-ink" style={{ width: columns.width, height: THUMB + 4 }} />
+      <span className="bg-transparent font-mono text-2xs leading-tight font-bold text-ink">
+        <span className="rounded-mark bg-sheet px-0.5">{shownFrame(frame, firstFrame)}</span>
+      </span>
+    </div>
+  );
+}
+
+/** The posted frames in small, under the numbers the production gives them. */
+export function StripLane({ takeId, firstFrame, columns, range, playhead, missing }: StripLaneProps) {
+  const gap = missing.length > 0 ? `, ${missing.length} missing` : '';
+  return (
+    <Lane name="Strip" sub={`${columns.frames} frames${gap}`} height={LANE} width={columns.total} first>
+      <Thumbs takeId={takeId} firstFrame={firstFrame} columns={columns} from={range.from} to={range.to} />
+      <Cursor firstFrame={firstFrame} columns={columns} playhead={playhead} />
+    </Lane>
+  );
+}
