@@ -1,0 +1,138 @@
+import type { Drawing } from './drawings.ts';
+import type { PathFit, Samples } from './fit.ts';
+import { fitPath } from './fit.ts';
+import type { Path } from './path.ts';
+import type { ShapeName } from './shapes.ts';
+
+/** One account of a track: what is assumed wrong (or nothing), and how well the whole path then fits. */
+export interface Account {
+  /** null: nothing is wrong. */
+  fault: Fault | null;
+  depth: boolean;
+  fit: PathFit;
+  /** Weights the fit used; 0 for drawings left out as off the arc. */
+  weight: Float64Array;
+  left: number[];
+  /** Noise² per axis and mark, and the degrees of freedom behind it. */
+  noise2: number;
+  freedom: number;
+  /** Minus twice the log likelihood, with the price of what is assumed: what accounts are compared by; less is better. */
+  cost: number;
+  /** Covariance of the parameters over noise², worked out for the account that is chosen. */
+  covariance: Float64Array | null;
+}
+
+export type Fault =
+  | { kind: 'shape'; name: ShapeName; span: number }
+  | { kind: 'gravity'; span: number }
+  | { kind: 'held'; drawing: number; mode: 'inserted' | 'replaced' };
+
+/** Noise per axis taken for granted while the marks say nothing else, px, and how many marks' worth of belief it has. */
+const PRIOR_NOISE = 0.2;
+const PRIOR_FREEDOM = 2;
+
+/** What each thing that an account assumes must gain, in squared units of noise. */
+const PRICE = { shape: 16, gravity: 11, held: 20, depth: 12 };
+const PARAMETER_PRICE = 5;
+
+/** Cost of a drawing that nothing explains: spread evenly over (60 px)², one in thirty. */
+const LOST_PRICE = 2 * Math.log(60 * 60) - 2 * Math.log(2 * Math.PI * Math.E) + 2 * Math.log(30);
+
+export interface Field {
+  samples: Samples;
+  drawings: readonly Drawing[];
+  replicates: { sum: number; freedom: number };
+}
+
+/** Fits one account, leaving out drawings that cost more than they are worth. */
+export function fitAccount(
+  path: Path,
+  theta: Float64Array,
+  fault: Fault | null,
+  depth: boolean,
+  weight: Float64Array,
+  field: Field,
+): Account {
+  const used = Float64Array.from(weight);
+  const samples: Samples = { ...field.samples, weight: used };
+  let account = judge(fitPath(path, theta, samples), fault, depth, used, field);
+  const most = 1 + Math.floor(field.drawings.length / 6);
+  for (let round = 0; round < most; round += 1) {
+    const worst = worstDrawing(account, field);
+    if (worst < 0) break;
+    const kept = used[worst]!;
+    used[worst] = 0;
+    const next = judge(fitPath(path, account.fit.theta, samples), fault, depth, used, field);
+    if (next.cost >= account.cost) {
+      used[worst] = kept;
+      break;
+    }
+    account = next;
+  }
+  return readmit(account, field);
+}
+
+/** Takes drawings back in that the path passes through after all. */
+function readmit(account: Account, field: Field): Account {
+  let best = account;
+  for (const i of account.left) {
+    const off = (field.samples.x[i]! - best.fit.xs[i]!) ** 2 + (field.samples.y[i]! - best.fit.ys[i]!) ** 2;
+    if (off * field.drawings[i]!.weight > 30 * best.noise2) continue;
+    const weight = Float64Array.from(best.weight);
+    weight[i] = field.drawings[i]!.weight;
+    const next = judge(
+      fitPath(best.fit.path, best.fit.theta, { ...field.samples, weight }),
+      best.fault,
+      best.depth,
+      weight,
+      field,
+    );
+    if (next.cost < best.cost) best = next;
+  }
+  return best;
+}
+
+function worstDrawing(account: Account, field: Field): number {
+  let worst = -1;
+  let most = 9 * account.noise2;
+  const { xs, ys } = account.fit;
+  for (let i = 0; i < xs.length; i += 1) {
+    if (account.weight[i] === 0) continue;
+    const r = account.weight[i]! * ((field.samples.x[i]! - xs[i]!) ** 2 + (field.samples.y[i]! - ys[i]!) ** 2);
+    if (r > most) {
+      most = r;
+      worst = i;
+    }
+  }
+  return worst;
+}
+
+/**
+ * Weighs an account. Drawings left out count as spread over `LOST_AREA`; every parameter has its price, raised where few marks
+ * are left to say what the noise is (as the F test and Akaike's corrected criterion do).
+ */
+function judge(fit: PathFit, fault: Fault | null, depth: boolean, weight: Float64Array, field: Field): Account {
+  let used = 0;
+  const left: number[] = [];
+  for (let i = 0; i < weight.length; i += 1) {
+    if (weight[i]! > 0) used += 1;
+    else left.push(i);
+  }
+  const extra = fault?.kind === 'held' ? 1 : 0;
+  const free = Math.max(1, 2 * used + field.replicates.freedom - fit.path.size - extra);
+  const squares = fit.rss + field.replicates.sum + PRIOR_FREEDOM * PRIOR_NOISE ** 2;
+  const marks = 2 * used + field.replicates.freedom + PRIOR_FREEDOM;
+  const plain = fit.path.size - (fit.path.shape ? 1 : 0) - (depth ? 2 : 0);
+  const price = PARAMETER_PRICE * plain + (fault ? PRICE[fault.kind] : 0) + (depth ? PRICE.depth : 0);
+  return {
+    fault,
+    depth,
+    fit,
+    weight: Float64Array.from(weight),
+    left,
+    noise2: squares / (free + PRIOR_FREEDOM),
+    freedom: free,
+    cost: marks * Math.log(squares / marks) + (price * marks) / (free + PRIOR_FREEDOM) + left.length * LOST_PRICE,
+    covariance: null,
+  };
+}

@@ -1,0 +1,32 @@
+import { digits, percent } from '../words.ts';
+import type { FindingRule } from './rule.ts';
+import { severityOf, shapeOn } from './rule.ts';
+
+/** Horizontal spacing drifts: the thing slows in or out to a side, where nothing in the air pushes it. */
+export const acrossUneven: FindingRule = {
+  kind: 'across-uneven',
+  find(view) {
+    return view.flights.flatMap((flight) => {
+      const shape = shapeOn(view.account, flight, ['ease']);
+      if (!shape) return [];
+      const drift = 2 * shape.value;
+      const severity = severityOf(drift, 2 * shape.error, view.account.freedom, view.tolerances.acrossDrift);
+      if (!severity) return [];
+      const { knots } = view.account.fit;
+      const across = Math.abs(knots.x[flight.span + 1]! - knots.x[flight.span]!) / flight.length;
+      return [
+        {
+          kind: 'across-uneven' as const,
+          flight,
+          from: flight.start,
+          to: flight.end,
+          severity,
+          title: drift > 0 ? 'Speeds up across' : 'Slows down across',
+          detail:
+            `The spacing across ${drift > 0 ? 'grows' : 'shrinks'} by ${percent(drift)} of its mean over the flight; in the air nothing pushes it sideways. ` +
+            `Space the drawings evenly across: ${digits(across * view.hold)} px every ${view.hold > 1 ? 'drawing' : 'frame'}.`,
+        },
+      ];
+    });
+  },
+};

@@ -1,0 +1,162 @@
+import type { Shape } from './shapes.ts';
+import { warpTime } from './shapes.ts';
+
+/** One stretch of the path between two knots. */
+export interface Span {
+  kind: 'rest' | 'roll' | 'flight';
+  /** A flight that begins without a jump of speed up or down: it rolls off an edge, or is let go. */
+  tangent: boolean;
+  /** Which of the gravities in the parameters bends it. */
+  gravity: number;
+}
+
+/**
+ * The whole track as one continuous motion. Between knots (contacts, and the two ends of the strip) the thing rests, rolls or
+ * flies; knot times are unknowns like knot places, so a contact lies where the paths meet and not on a drawing.
+ *
+ * Parameters: gravities first, then for every knot its time (when free), x and y (when free), then the depth pair, then the
+ * parameter of the shape fault. px and frames, y grows downwards.
+ */
+export interface Path {
+  spans: Span[];
+  /** Per knot: index of its time in the parameters, or -1 with the fixed time in `fixedTime`. */
+  timeAt: Int32Array;
+  fixedTime: Float64Array;
+  /** Per knot: index of x and of y; -1 where it follows from the span before it. */
+  xAt: Int32Array;
+  yAt: Int32Array;
+  gravities: number;
+  /** Index of the depth pair: relative depth speed (1/frame) and the share of depth per px of height; -1 when flat. */
+  depthAt: number;
+  /** Index of the shape parameter, -1 without. */
+  shapeAt: number;
+  shape: Shape | null;
+  /** Drawings from this index on are shown late by `delay` frames (a drawing held too long). */
+  delayFrom: number;
+  delay: number;
+  size: number;
+}
+
+/** Lays out the parameters of a path whose spans are known. `fixed` are the times of the two outer knots. */
+export function layOut(spans: Span[], fixed: { start: number; end: number }, options: Partial<Path> = {}): Path {
+  const knots = spans.length + 1;
+  const gravities = 1 + spans.reduce((most, span) => Math.max(most, span.gravity), 0);
+  const path: Path = {
+    spans,
+    timeAt: new Int32Array(knots).fill(-1),
+    fixedTime: new Float64Array(knots),
+    xAt: new Int32Array(knots).fill(-1),
+    yAt: new Int32Array(knots).fill(-1),
+    gravities,
+    depthAt: -1,
+    shapeAt: -1,
+    shape: null,
+    delayFrom: Infinity,
+    delay: 0,
+    size: gravities,
+    ...options,
+  };
+  path.fixedTime[0] = fixed.start;
+  path.fixedTime[knots - 1] = fixed.end;
+  for (let k = 0; k < knots; k += 1) {
+    const before = spans[k - 1];
+    const after = spans[k];
+    if (before && after) path.timeAt[k] = path.size++;
+    const followsRest = before?.kind === 'rest';
+    if (!followsRest) path.xAt[k] = path.size++;
+    const followsY = followsRest || before?.kind === 'roll' || (before?.kind === 'flight' && before.tangent);
+    if (!followsY) path.yAt[k] = path.size++;
+  }
+  if (options.depthAt !== undefined && options.depthAt >= 0) {
+    path.depthAt = path.size;
+    path.size += 2;
+  }
+  if (path.shape) {
+    path.shapeAt = path.size;
+    path.size += path.shape.parameters;
+  }
+  return path;
+}
+
+/** Places of the knots for given parameters, written into the four arrays of `out`. */
+export interface Knots {
+  t: Float64Array;
+  x: Float64Array;
+  y: Float64Array;
+}
+
+export function placeKnots(path: Path, theta: Float64Array, out: Knots): void {
+  const knots = path.spans.length + 1;
+  for (let k = 0; k < knots; k += 1) {
+    out.t[k] = path.timeAt[k]! >= 0 ? theta[path.timeAt[k]!]! : path.fixedTime[k]!;
+    out.x[k] = path.xAt[k]! >= 0 ? theta[path.xAt[k]!]! : out.x[k - 1]!;
+    if (path.yAt[k]! >= 0) out.y[k] = theta[path.yAt[k]!]!;
+    else {
+      const before = path.spans[k - 1]!;
+      const span = out.t[k]! - out.t[k - 1]!;
+      out.y[k] = out.y[k - 1]! + (before.kind === 'flight' ? 0.5 * theta[before.gravity]! * span * span : 0);
+    }
+  }
+}
+
+/** Room for the places of a path's knots. */
+export function makeKnotsFor(path: Path): Knots {
+  const size = path.spans.length + 1;
+  return { t: new Float64Array(size), x: new Float64Array(size), y: new Float64Array(size) };
+}
+
+const warped = new Float64Array(2);
+
+/**
+ * Where the thing is at every time of `times` (ascending), written into `xs` and `ys` from `from` up to `to`.
+ * `knots` must hold the places of the knots for these parameters.
+ */
+export function follow(
+  path: Path,
+  theta: Float64Array,
+  knots: Knots,
+  times: Float64Array,
+  xs: Float64Array,
+  ys: Float64Array,
+): void {
+  const { spans, shape } = path;
+  const last = spans.length - 1;
+  const depth = path.depthAt;
+  const moveFrom = spans[0]!.kind === 'rest' ? knots.t[1]! : -Infinity;
+  const moveTo = spans[last]!.kind === 'rest' && last > 0 ? knots.t[last]! : Infinity;
+  let s = 0;
+  for (let i = 0; i < times.length; i += 1) {
+    const t = times[i]! - (i >= path.delayFrom ? path.delay : 0);
+    while (s < last && t > knots.t[s + 1]!) s += 1;
+    while (s > 0 && t <= knots.t[s]!) s -= 1;
+    const span = spans[s]!;
+    const x0 = knots.x[s]!;
+    const y0 = knots.y[s]!;
+    let x = x0;
+    let y = y0;
+    if (span.kind !== 'rest') {
+      const length = knots.t[s + 1]! - knots.t[s]!;
+      const dx = knots.x[s + 1]! - x0;
+      let ux = t - knots.t[s]!;
+      let uy = ux;
+      const g = span.kind === 'flight' ? theta[span.gravity]! : 0;
+      const dy = knots.y[s + 1]! - y0;
+      if (shape && shape.span === s) {
+        const across = Math.max(Math.abs(dx), 1e-3 * Math.abs(g) * length * length);
+        warpTime(shape, theta, path.shapeAt, ux, length, length / 2 - dy / (length * g), (g * length) / across, warped);
+        ux = warped[0]!;
+        uy = warped[1]!;
+      }
+      x = x0 + (dx * ux) / length;
+      y = y0 + (dy * uy) / length + 0.5 * g * uy * (uy - length);
+    }
+    if (depth >= 0) {
+      const moving = t < moveFrom ? moveFrom : t > moveTo ? moveTo : t;
+      const away = 1 + theta[depth]! * moving + theta[depth + 1]! * y;
+      x /= away;
+      y /= away;
+    }
+    xs[i] = x;
+    ys[i] = y;
+  }
+}

@@ -1,0 +1,117 @@
+/**
+ * The shape faults as changes of the time at which the true flight is shown: every kind bends the same flight by one number,
+ * so that the kinds compete on the same residuals. `nothing` is the value at which the flight is true.
+ */
+export interface Shape {
+  name: ShapeName;
+  /** Index of the span it bends. */
+  span: number;
+  parameters: number;
+  /** True where the flight's landing (or take-off) lies outside the strip, so that its own span is only what is seen. */
+  openStart: boolean;
+  openEnd: boolean;
+}
+export type ShapeName = 'apex' | 'power' | 'hang' | 'hang-up' | 'ease' | 'even-path' | 'even-steps';
+
+export const SHAPE_NOTHING: Record<ShapeName, number> = {
+  apex: 0,
+  power: 2,
+  hang: 0,
+  'hang-up': 0,
+  ease: 0,
+  'even-path': 0,
+  'even-steps': 0,
+};
+
+/**
+ * Time within the true flight at which its x and its y stand at time `u` after take-off, into `out`.
+ * `length` is the flight's duration, `apex` the time of its apex (frames after take-off, may lie outside) and `bend` its
+ * gravity over its speed across (1/frame).
+ */
+export function warpTime(
+  shape: Shape,
+  theta: Float64Array,
+  at: number,
+  u: number,
+  length: number,
+  apex: number,
+  bend: number,
+  out: Float64Array,
+): void {
+  const value = theta[at]!;
+  let wx = u;
+  let wy = u;
+  switch (shape.name) {
+    case 'ease':
+      wx = u + (value * u * (u - length)) / length;
+      break;
+    case 'apex': {
+      const shifted = apex + value * length;
+      if (u < shifted || shifted >= length) wy = (u * apex) / shifted;
+      else wy = apex + ((u - shifted) * (length - apex)) / (length - shifted);
+      break;
+    }
+    case 'power': {
+      const side = u < apex ? -1 : 1;
+      const reach = reachOf(shape, side, length, apex);
+      const share = Math.abs(u - apex) / reach;
+      wy = apex + side * reach * share ** (value / 2);
+      break;
+    }
+    case 'hang':
+    case 'hang-up': {
+      const side = u < apex ? -1 : 1;
+      const reach = reachOf(shape, side, length, apex);
+      const gone = Math.abs(u - apex) - value / 2;
+      const scale = reach / Math.max(0.25 * reach, reach - value / 2);
+      wy = gone > 0 ? apex + side * gone * scale : apex;
+      if (shape.name === 'hang') wx = wy;
+      break;
+    }
+    case 'even-steps': {
+      const side = u < apex ? -1 : 1;
+      const reach = reachOf(shape, side, length, apex);
+      const share = Math.abs(u - apex) / reach;
+      wy = apex + side * reach * ((1 - value) * share + value * Math.sqrt(share));
+      wx = wy;
+      break;
+    }
+    case 'even-path': {
+      const start = shape.openStart && !shape.openEnd ? 2 * apex - length : 0;
+      const end = shape.openEnd && !shape.openStart && apex > 1 ? 2 * apex : length;
+      const from = along((start - apex) * bend);
+      const to = along((end - apex) * bend);
+      const even = apex + alongInverse(from + ((to - from) * (u - start)) / (end - start)) / bend;
+      wy = (1 - value) * u + value * even;
+      wx = wy;
+      break;
+    }
+  }
+  out[0] = wx;
+  out[1] = wy;
+}
+
+/** Length of the parabola y = q²/2 from its apex to slope `q`, doubled (closed form of the arc length). */
+function along(q: number): number {
+  return Math.asinh(q) + q * Math.sqrt(1 + q * q);
+}
+
+/** The slope at which `along` reaches `length`, by Newton's method from the limits of short and long arcs. */
+function alongInverse(length: number): number {
+  const size = Math.abs(length);
+  let q = size < 1 ? size / 2 : Math.sqrt(size);
+  for (let i = 0; i < 6; i += 1) {
+    const step = (along(q) - size) / (2 * Math.sqrt(1 + q * q));
+    q -= step;
+    if (Math.abs(step) < 1e-9 * (1 + q)) break;
+  }
+  return length < 0 ? -q : q;
+}
+
+/** Time from the apex to the end of the flight on one side; where that end is not seen, the other side's. */
+function reachOf(shape: Shape, side: number, length: number, apex: number): number {
+  const rise = Math.max(apex, 0.5);
+  const fall = Math.max(length - apex, 0.5);
+  if (side < 0) return shape.openStart && !shape.openEnd ? fall : rise;
+  return shape.openEnd && !shape.openStart ? rise : fall;
+}

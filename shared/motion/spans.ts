@@ -1,0 +1,170 @@
+import type { Drawing } from './drawings.ts';
+import type { PolynomialFit } from './parabola.ts';
+import { fitQuadratic } from './parabola.ts';
+import type { Piece } from './partition.ts';
+
+/** A stretch of drawings with one way of moving, before the path is fitted. */
+export interface Stretch {
+  kind: 'rest' | 'roll' | 'flight';
+  tangent: boolean;
+  from: number;
+  to: number;
+  first: Motion;
+  last: Motion;
+}
+
+/** How a piece moves: one polynomial each for x and y, and the error of its speed at its ends over noise. */
+interface Motion {
+  piece: Piece;
+  x: PolynomialFit;
+  y: PolynomialFit;
+  speedError: number;
+}
+
+const valueAt = (fit: PolynomialFit, t: number): number => {
+  const u = (t - fit.middle) / fit.half;
+  return fit.c0 + u * (fit.c1 + u * fit.c2);
+};
+const speedAt = (fit: PolynomialFit, t: number): number => {
+  const u = (t - fit.middle) / fit.half;
+  return (fit.c1 + 2 * u * fit.c2) / fit.half;
+};
+
+/**
+ * Joins pieces to stretches. Contacts push up and nothing else does: a cut where the speed jumps upwards is a contact, a cut
+ * without such a jump lies inside one flight, however its spacing is drawn.
+ */
+export function stretchesOf(drawings: readonly Drawing[], pieces: readonly Piece[], noise: number): Stretch[] {
+  const motions = pieces.filter((piece) => piece.kind !== 'lost').map((piece) => motionOf(drawings, piece));
+  const out: Stretch[] = [];
+  motions.forEach((motion, index) => {
+    const before = out[out.length - 1];
+    const next = motions[index + 1];
+    const kind = kindOf(motion, before, next, noise);
+    const fresh: Stretch = {
+      kind,
+      tangent: false,
+      from: motion.piece.from,
+      to: motion.piece.to,
+      first: motion,
+      last: motion,
+    };
+    if (!before) {
+      out.push(fresh);
+      return;
+    }
+    const cut = cutBetween(before, fresh, drawings, noise);
+    if (cut === 'none') {
+      before.to = fresh.to;
+      before.last = motion;
+      return;
+    }
+    fresh.tangent = cut === 'let-go';
+    out.push(fresh);
+  });
+  return out;
+}
+
+function motionOf(drawings: readonly Drawing[], piece: Piece): Motion {
+  const part = drawings.slice(piece.from, piece.to + 1);
+  const times = part.map((d) => d.t);
+  const flat = piece.kind === 'rest';
+  const x = straight(part, 'x', flat);
+  const y =
+    piece.kind === 'flight'
+      ? fitQuadratic(
+          times,
+          part.map((d) => d.y),
+        )
+      : straight(part, 'y', flat);
+  const n = part.length;
+  const span = Math.max(1, times[n - 1]! - times[0]!);
+  const speedError = flat ? 0 : (piece.kind === 'flight' ? 12 : 3.5) / (span * Math.sqrt(n));
+  return { piece, x, y, speedError };
+}
+
+function straight(part: readonly Drawing[], axis: 'x' | 'y', flat: boolean): PolynomialFit {
+  const n = part.length;
+  const t0 = part.reduce((sum, d) => sum + d.t, 0) / n;
+  const v0 = part.reduce((sum, d) => sum + d[axis], 0) / n;
+  let stt = 0;
+  let stv = 0;
+  for (const d of part) {
+    stt += (d.t - t0) ** 2;
+    stv += (d.t - t0) * (d[axis] - v0);
+  }
+  return {
+    middle: t0,
+    half: 1,
+    c0: v0,
+    c1: flat || stt === 0 ? 0 : stv / stt,
+    c2: 0,
+    rss: 0,
+    freedom: Math.max(0, n - 2),
+  };
+}
+
+function kindOf(motion: Motion, before: Stretch | undefined, next: Motion | undefined, noise: number): Stretch['kind'] {
+  const { piece } = motion;
+  if (piece.kind === 'rest') {
+    const rising = before?.kind === 'flight' && speedAt(before.last.y, before.last.y.middle + before.last.y.half) < 0;
+    if (rising && next) return 'flight';
+    if (before && next && piece.to - piece.from < 2) return 'flight';
+    return 'rest';
+  }
+  if (piece.kind === 'line') {
+    const down = motion.y.c1;
+    const across = Math.abs(motion.x.c1);
+    const level = Math.abs(down) < 0.12 * across + 3 * noise * motion.speedError;
+    if (level && across > 0 && (!before || before.kind !== 'flight' || speedAt(before.last.y, motion.y.middle) > 0)) {
+      return 'roll';
+    }
+  }
+  return 'flight';
+}
+
+function cutBetween(
+  a: Stretch,
+  b: Stretch,
+  drawings: readonly Drawing[],
+  noise: number,
+): 'contact' | 'let-go' | 'none' {
+  const t = (drawings[a.last.piece.to]!.t + drawings[b.first.piece.from]!.t) / 2;
+  const va = a.kind === 'rest' ? 0 : speedAt(a.last.y, t);
+  const vb = b.kind === 'rest' ? 0 : speedAt(b.first.y, t);
+  const jump = vb - va;
+  const error = 3 * noise * Math.hypot(a.last.speedError, b.first.speedError);
+  const upward = jump < -error && -jump > 0.3 * (Math.abs(va) + Math.abs(vb));
+  if (upward) return 'contact';
+  if (a.kind !== b.kind) {
+    if (b.kind === 'flight') return 'let-go';
+    return a.kind === 'flight' && b.kind === 'rest' && a.to - a.from < 2 ? 'none' : 'contact';
+  }
+  return 'none';
+}
+
+/** First guess of the moment at which two stretches meet: where their heights cross between their nearest drawings. */
+export function meetingTime(a: Stretch, b: Stretch, drawings: readonly Drawing[]): number {
+  const low = drawings[a.to]!.t;
+  const high = drawings[b.from]!.t;
+  if (b.tangent) return low;
+  const gap = (t: number) =>
+    Math.hypot(valueAt(a.last.x, t) - valueAt(b.first.x, t), valueAt(a.last.y, t) - valueAt(b.first.y, t));
+  let best = (low + high) / 2;
+  let least = Infinity;
+  for (let k = 0; k <= 16; k += 1) {
+    const t = low + ((high - low) * k) / 16;
+    const distance = gap(t);
+    if (distance < least) {
+      least = distance;
+      best = t;
+    }
+  }
+  return best;
+}
+
+/** Place of a stretch at a time, px, by its nearest piece. */
+export function placeOf(stretch: Stretch, end: 'start' | 'end', t: number): { x: number; y: number } {
+  const motion = end === 'start' ? stretch.first : stretch.last;
+  return { x: valueAt(motion.x, t), y: valueAt(motion.y, t) };
+}
