@@ -34,7 +34,7 @@ function isTaken(event: KeyboardEvent): boolean {
   const target = event.target as Element | null;
   if (!target?.closest) return false;
   if (target.closest('dialog[open]') || target.closest('[role="menu"]')) return true;
-  if (target.closest('input, textarea, select, [contenteditable="true"]')) return true;
+  if (target.closest('input:not([type="range"]), textarea, select, [contenteditable="true"]')) return true;
   return (event.key === ' ' || event.key === 'Enter') && target.closest('button, a, summary, [role="button"]') !== null;
 }
 

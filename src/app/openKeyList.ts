@@ -1,0 +1,13 @@
+const listeners = new Set<() => void>();
+
+/** Opens the list of keys from a menu, also when single keys are switched off. */
+export function openKeyList(): void {
+  listeners.forEach((listener) => listener());
+}
+
+export function onOpenKeyList(listener: () => void): () => void {
+  listeners.add(listener);
+  return () => {
+    listeners.delete(listener);
+  };
+}

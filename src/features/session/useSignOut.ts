@@ -1,0 +1,23 @@
+import { useMutation, useQueryClient } from '@tanstack/react-query';
+import { sessionContracts } from '../../../shared/api/session.ts';
+import { call } from '../../lib/call.ts';
+import { sessionOptions } from '../../lib/queries/session.ts';
+import { socket } from '../../lib/socket.ts';
+
+/** Ends the session and forgets everything that was cached for this person. */
+export function useSignOut(onSignedOut: () => void) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: () => {
+      // The server ends this socket with the session; leaving first keeps that from looking like a lost line.
+      socket.disconnect();
+      return call(sessionContracts.signOut, {});
+    },
+    onSuccess: () => {
+      onSignedOut();
+      client.clear();
+      client.setQueryData(sessionOptions().queryKey, null);
+    },
+    onError: () => socket.connect(),
+  });
+}
