@@ -1,13 +1,13 @@
 import { readOrMakeSecrets } from '../../database/secrets.ts';
 import { databaseOf, readEnv } from '../../env.ts';
-import { closeWithin, greet, loadMain } from '../start/serve.ts';
+import { startServer } from '../../main.ts';
+import { closeWithin, greet } from '../start/serve.ts';
 
 // Started again by `npm run dev` on every change; the database is somebody else's business here.
 const settings = readEnv(process.env);
 const database = databaseOf(settings.DATABASE_URL ?? '');
 if (!database) throw new Error('server/scripts/dev/serve.ts is started by npm run dev, which names the database.');
 const { sessionSecret } = await readOrMakeSecrets(settings.DATA_DIR);
-const { startServer } = await loadMain();
 const server = await startServer({
   env: { ...settings, SESSION_SECRET: settings.SESSION_SECRET ?? sessionSecret },
   database,

@@ -13,7 +13,8 @@ export async function checkAddress(host: string, port: number): Promise<void> {
   }
 }
 
-function listenFault(error: NodeJS.ErrnoException, host: string, port: number): Error {
+/** The sentence for an address that cannot be listened on; any other error comes back as it is. */
+export function listenFault(error: NodeJS.ErrnoException, host: string, port: number): Error {
   switch (error.code) {
     case 'EADDRINUSE':
       return new StartupError(

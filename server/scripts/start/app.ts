@@ -2,12 +2,12 @@ import { startMariadb } from '../../database/mariadb.ts';
 import { readOrMakeSecrets } from '../../database/secrets.ts';
 import { StartupError } from '../../database/startup-error.ts';
 import { type DatabaseConnection, databaseOf, type Env, readEnv } from '../../env.ts';
-import { checkAddress } from './address.ts';
+import { checkAddress, listenFault } from './address.ts';
 import { type Cleanup, createCleanup } from './cleanup.ts';
 import { ensureClientBuilt } from './client-build.ts';
 import { takeDataFolder } from './data-folder.ts';
 import { ensurePrograms, ffmpeg, mariadb } from './debian.ts';
-import { closeWithin, greet, loadMain } from './serve.ts';
+import { closeWithin, greet } from './serve.ts';
 
 interface Run {
   root: string;
@@ -48,11 +48,14 @@ async function serve(root: string, stop: AbortController, cleanup: Cleanup, repo
 
   const [database, { startServer }] = await together([
     openDatabase(settings, databasePassword, stop, cleanup, report),
-    loadMain(),
+    import('../../main.ts'),
     ensureClientBuilt(root, signal),
   ]);
   signal.throwIfAborted();
-  const server = await startServer({ env, database });
+  const server = await startServer({ env, database }).catch((error) => {
+    // Another program may have taken the port since it was checked.
+    throw listenFault(error, env.HOST, env.PORT);
+  });
   cleanup.add(() => closeWithin(server.close(), 10_000));
   if (!signal.aborted) {
     greet(server);

@@ -1,18 +1,4 @@
-import type { DatabaseConnection, Env } from '../../env.ts';
-
-export interface RunningServer {
-  url: string;
-  close(): Promise<void>;
-  demoSignIns: { name: string; email: string; password: string; role: string }[];
-}
-export interface MainModule {
-  startServer(parts: { env: Env & { SESSION_SECRET: string }; database: DatabaseConnection }): Promise<RunningServer>;
-}
-/** Loads the application. */
-export async function loadMain(): Promise<MainModule> {
-  const file: string = new URL('../../main.ts', import.meta.url).href;
-  return import(file);
-}
+import type { RunningServer } from '../../main.ts';
 
 /** Prints where Spandrel is and who can sign in. */
 export function greet({ url, demoSignIns }: RunningServer): void {
