@@ -10,6 +10,7 @@ import { originCheck } from './http/originCheck.ts';
 import { signInLimits } from './http/rateLimits.ts';
 import { securityHeaders } from './http/securityHeaders.ts';
 import type { Sessions } from './http/sessions.ts';
+import { draftRoutes } from './routes/drafts.routes.ts';
 import { productionRoutes } from './routes/productions.routes.ts';
 import { sessionRoutes } from './routes/session.routes.ts';
 import { takeRoutes } from './routes/takes.routes.ts';
@@ -45,6 +46,7 @@ export function allEndpoints(deps: Deps, passport: PassportStatic): Endpoint[] {
     ...sessionRoutes(deps, passport.authenticate('local')),
     ...productionRoutes(deps),
     ...takeRoutes(deps),
+    ...draftRoutes(deps),
     ...threadRoutes(deps),
   ];
 }

@@ -10,7 +10,7 @@ export interface Deps {
   dataDir: string;
   broadcast: Broadcast;
   readings: ReadingQueue;
+  /** The time of what is written. The demo production tells days in seconds. */
+  now: () => Date;
   log: Logger;
-  /** The time of what is written; left out: the clock. The demo production tells days in seconds. */
-  now?: () => Date;
 }

@@ -23,6 +23,8 @@ export interface DemoSignIn {
 export interface RunningServer {
   url: string;
   demoSignIns: DemoSignIn[];
+  /** For scripts and tests that work with the services directly. */
+  deps: Deps;
   /** Ends sockets, requests, readings and the connections to the database, in this order. */
   close(): Promise<void>;
 }
@@ -31,6 +33,8 @@ export interface StartOptions {
   env: Pick<Env, 'HOST' | 'PORT' | 'DATA_DIR' | 'PUBLIC_ORIGIN' | 'LOG_LEVEL' | 'DEMO'> & { SESSION_SECRET: string };
   database: DatabaseConnection;
 }
+
+const CLOSING_PATIENCE = 2_000;
 
 /**
  * Boots the server: data source, migrations, app, sockets, listen; then goes on with readings an earlier run left.
@@ -53,7 +57,7 @@ export async function startServer({ env, database }: StartOptions): Promise<Runn
     opened.push(() => analysis.close());
 
     const io = createLiveServer(env.PUBLIC_ORIGIN);
-    const parts = { dataSource, dataDir: env.DATA_DIR, broadcast: createBroadcast(io), log };
+    const parts = { dataSource, dataDir: env.DATA_DIR, broadcast: createBroadcast(io), log, now: () => new Date() };
     const lanes = Math.max(1, availableParallelism() - 1);
     const readings = createReadingQueue(parts, { analysis, lanes });
     opened.push(() => readings.close());
@@ -70,14 +74,16 @@ export async function startServer({ env, database }: StartOptions): Promise<Runn
     });
     opened.push(async () => {
       stopRechecks();
-      // Closes the HTTP server too.
+      // Requests under way get a moment; idle connections and sockets end at once.
+      const patience = setTimeout(() => server.closeAllConnections(), CLOSING_PATIENCE);
       await io.close();
-      server.closeAllConnections();
+      clearTimeout(patience);
     });
     await readings.resume();
     return {
       url: env.PUBLIC_ORIGIN ?? urlOf(env.HOST, server.address() as AddressInfo),
       demoSignIns: [],
+      deps,
       close: closeAll,
     };
   } catch (error) {

@@ -7,7 +7,7 @@ import { AppError, asAppError, problemOf } from '../errors.ts';
 /** The one place where errors become answers: RFC 9457, a sentence and no more. What is ours to mend is logged. */
 export function errorSink(log: Logger): ErrorRequestHandler {
   return (thrown, req, res, next) => {
-    const error = fromMiddleware(thrown) ?? asAppError(thrown);
+    const error = thrown instanceof AppError ? thrown : (fromMiddleware(thrown) ?? asAppError(thrown));
     if (error.status >= 500) {
       log.error({ err: error.cause ?? error, method: req.method, path: req.path }, error.message);
     }
@@ -23,7 +23,7 @@ export function errorSink(log: Logger): ErrorRequestHandler {
 function fromMiddleware(thrown: unknown): AppError | undefined {
   if (thrown instanceof MulterError) return fromMulter(thrown);
   // Errors of body-parser, send and the router carry the status they mean.
-  const { status, type } = thrown as { status?: unknown; type?: unknown };
+  const { status, type } = Object(thrown) as { status?: unknown; type?: unknown };
   if (type === 'entity.parse.failed') return new AppError('invalid_request', 'This is not JSON.', { status: 400 });
   if (type === 'entity.too.large') return new AppError('invalid_request', 'This is too much text.', { status: 413 });
   if (thrown instanceof URIError) return new AppError('not_found', 'There is nothing at this address.');

@@ -64,7 +64,7 @@ async function writeAndTell<Answer>(
   for (let attempt = 1; ; attempt += 1) {
     try {
       const { answer, slug, event } = await deps.dataSource.transaction((manager) =>
-        writeOnce(manager, productionId, actorId, write, deps.now),
+        writeOnce(manager, deps.now, productionId, actorId, write),
       );
       if (event) deps.broadcast.event(productionId, slug, event);
       return answer;
@@ -77,10 +77,10 @@ async function writeAndTell<Answer>(
 
 async function writeOnce<Answer>(
   manager: EntityManager,
+  now: () => Date,
   productionId: string,
   actorId: string | null,
   write: (recording: Recording) => Promise<Written<Answer>>,
-  now = () => new Date(),
 ): Promise<{ answer: Answer; slug: string; event: WireEvent | null }> {
   // The lock is the first statement: the snapshot of this transaction begins once it is held.
   const production = await manager.findOneOrFail(Production, {

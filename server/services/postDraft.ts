@@ -1,0 +1,66 @@
+import { rm } from 'node:fs/promises';
+import path from 'node:path';
+import { MAX_FRAMES } from '../../shared/api/drafts.ts';
+import type { Take as WireTake } from '../../shared/api/takes.ts';
+import { splitStrip } from '../analysis/grid.ts';
+import { Draft } from '../entities/Draft.ts';
+import { DraftPicture } from '../entities/DraftPicture.ts';
+import type { Deps } from '../deps.ts';
+import { AppError } from '../errors.ts';
+import type { DraftParts } from '../presenters/drafts.presenter.ts';
+import { draftFolder, thumbnailName } from '../storage/folders.ts';
+import { changeDraft, openDraft } from './drafts.service.ts';
+import { viewDraft } from './draftView.ts';
+import { type PostGiven, postTake, type Strip } from './posting.service.ts';
+
+/**
+ * Posts a draft as the next take of its shot. A post that fails leaves the draft as it was, so that it can be tried
+ * again; one that succeeds closes it, so that a second click makes no second take.
+ */
+export async function postDraft(deps: Deps, userId: string, draftId: string, given: PostGiven): Promise<WireTake> {
+  const { manager } = deps.dataSource;
+  const { production } = await openDraft(deps, userId, draftId);
+  const view = await changeDraft(deps, draftId, async (transaction, draft) => {
+    const parts = viewDraft(draft, await transaction.findBy(DraftPicture, { draftId }));
+    refuseUnready(parts);
+    await transaction.update(Draft, { id: draftId }, { status: 'posting' });
+    return parts;
+  });
+  try {
+    const strip = await stripOf(deps, view);
+    const take = await postTake(deps, userId, production.slug, strip, given);
+    await manager.update(Draft, { id: draftId }, { status: 'posted' });
+    await rm(draftFolder(deps.dataDir, draftId), { recursive: true, force: true });
+    return take;
+  } catch (error) {
+    await manager.update(Draft, { id: draftId, status: 'posting' }, { status: 'open' });
+    throw error;
+  }
+}
+
+function refuseUnready({ draft, pictures, ready }: DraftParts): void {
+  if (pictures.length === 0) throw new AppError('draft_empty', 'There are no frames in this post yet.');
+  if (!ready) throw new AppError('draft_empty', 'One frame is not a flight; add the others first.');
+  if ((draft.grid?.count ?? 0) > MAX_FRAMES && pictures.length === 1) {
+    const most = MAX_FRAMES.toLocaleString('en-GB');
+    throw new AppError('too_many_frames', `A strip holds ${most} frames at most; correct the cut.`);
+  }
+}
+
+async function stripOf(deps: Deps, { draft, pictures, missingFrames }: DraftParts): Promise<Strip> {
+  const folder = draftFolder(deps.dataDir, draft.id);
+  const first = pictures[0]!.picture;
+  if (draft.grid && pictures.length === 1) {
+    const cells = await splitStrip(path.join(folder, first.file), draft.grid, path.join(folder, 'cells'));
+    const frames = cells.map((cell) => ({ path: cell.path, format: 'png' as const, name: first.name }));
+    const { cellWidth: width, cellHeight: height } = draft.grid;
+    return { kind: 'strip', frames, width, height, missingFrames: [] };
+  }
+  const frames = pictures.map(({ picture: { file, format, name } }) => ({
+    path: path.join(folder, file),
+    format,
+    name,
+    thumbnail: path.join(folder, thumbnailName(file)),
+  }));
+  return { kind: 'frames', frames, width: first.width, height: first.height, missingFrames };
+}
