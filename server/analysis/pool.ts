@@ -1,4 +1,3 @@
-import { createRequire } from 'node:module';
 import { availableParallelism } from 'node:os';
 import { fileURLToPath, pathToFileURL } from 'node:url';
 import { MessageChannel } from 'node:worker_threads';
@@ -42,17 +41,19 @@ export function createAnalysisPool(options: AnalysisPoolOptions = {}): AnalysisP
   const queueLimit = options.queueLimit ?? 256;
   const pool = new Tinypool({
     runtime: 'worker_threads',
-    filename: pathToFileURL(options.entry ?? DEFAULT_ENTRY).href,
+    filename: new URL('./entry/start.mjs', import.meta.url).href,
+    workerData: { entry: pathToFileURL(options.entry ?? DEFAULT_ENTRY).href },
     name: 'analyse',
     minThreads: 0,
     maxThreads: threads,
     maxQueue: threads,
     idleTimeout: 60_000,
     resourceLimits: { maxOldGenerationSizeMb: options.heapMb ?? 768 },
-    // Workers load TypeScript by themselves: under vitest the parent has no loader to inherit.
-    execArgv: ['--import', pathToFileURL(createRequire(import.meta.url).resolve('tsx/esm')).href],
+    execArgv: [],
     env: { ...process.env, NODE_OPTIONS: '' } as Record<string, string>,
   });
+  // A thread that dies while idle takes no job with it; the pool starts another.
+  pool.on('error', () => undefined);
   const closing = new AbortController();
   const turns = createTurns(threads, queueLimit);
 
@@ -67,11 +68,14 @@ export function createAnalysisPool(options: AnalysisPoolOptions = {}): AnalysisP
     const deadline = AbortSignal.timeout(timeoutMs);
     const { port1, port2 } = new MessageChannel();
     port1.on('message', (message: AnalysisProgress) => report(message));
+    // The worker's end of the port closes with the worker: a thread that exits by itself would else never answer.
+    const gone = new AbortController();
+    port1.on('close', () => gone.abort());
     try {
       const task: AnalysisTask = { request, progress: port2 };
       const answer: AnalysisAnswer = await pool.run(task, {
         transferList: [port2],
-        signal: AbortSignal.any([deadline, cancelled]),
+        signal: AbortSignal.any([deadline, cancelled, gone.signal]),
       });
       if (answer.ok) return answer.result;
       throw new PictureError(answer.error.file, answer.error.code, answer.error.message);

@@ -10,7 +10,5 @@ export async function analyse(task: AnalysisTask): Promise<AnalysisAnswer> {
   } catch (cause) {
     if (!(cause instanceof PictureError)) throw cause;
     return { ok: false, error: { file: cause.file, code: cause.code, message: cause.message } };
-  } finally {
-    task.progress.close();
   }
 }
