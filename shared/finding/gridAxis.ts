@@ -10,6 +10,11 @@ export interface AxisCells {
   confidence: number;
 }
 
+interface Part {
+  start: number;
+  end: number;
+}
+
 const MIN_CELL = 16;
 /** A gutter thicker than this share of the pitch is more likely a flat part of the frames themselves. */
 const MAX_GUTTER_SHARE = 0.3;
@@ -50,8 +55,8 @@ function equalParts(gutters: FlatRun[], from: number, to: number): AxisCells | n
   return null;
 }
 
-function partsBetween(gutters: FlatRun[], from: number, to: number): { start: number; end: number }[] {
-  const parts: { start: number; end: number }[] = [];
+function partsBetween(gutters: FlatRun[], from: number, to: number): Part[] {
+  const parts: Part[] = [];
   let start = from;
   for (const gutter of [...gutters, { start: to, end: to }]) {
     if (gutter.start > start) parts.push({ start, end: gutter.start });
@@ -60,17 +65,20 @@ function partsBetween(gutters: FlatRun[], from: number, to: number): { start: nu
   return parts;
 }
 
-function regular(parts: { start: number; end: number }[], colour: FlatRun['colour']): AxisCells | null {
+function regular(parts: Part[], colour: FlatRun['colour']): AxisCells | null {
   if (parts.length < 2) return null;
   const cell = middle(parts.map((part) => part.end - part.start));
-  const pitches = parts.slice(1).map((part, k) => part.start - parts[k].start);
-  const pitch = middle(pitches);
   const slack = Math.max(1, 0.01 * cell);
-  const even =
-    parts.every((part) => Math.abs(part.end - part.start - cell) <= slack) &&
-    pitches.every((step) => Math.abs(step - pitch) <= slack);
-  if (!even || cell < MIN_CELL || pitch - cell > MAX_GUTTER_SHARE * pitch) return null;
-  return { count: parts.length, first: parts[0].start, cell, gutter: pitch - cell, colour, confidence: 0.98 };
+  const fits = (part: Part): boolean => Math.abs(part.end - part.start - cell) <= slack;
+  // A title in a margin stands before the first cell or after the last.
+  const first = parts.findIndex(fits);
+  const cells = parts.slice(first, parts.findLastIndex(fits) + 1);
+  if (cells.length < 2 || cells.length < parts.length - 2 || cell < MIN_CELL) return null;
+  const pitches = cells.slice(1).map((part, k) => part.start - cells[k].start);
+  const pitch = middle(pitches);
+  const even = cells.every(fits) && pitches.every((step) => Math.abs(step - pitch) <= slack);
+  if (!even || pitch - cell > MAX_GUTTER_SHARE * pitch) return null;
+  return { count: cells.length, first: cells[0].start, cell, gutter: pitch - cell, colour, confidence: 0.98 };
 }
 
 function middle(values: number[]): number {
