@@ -1,7 +1,7 @@
-import { spawn } from 'node:child_process';
 import { createWriteStream, renameSync, statSync } from 'node:fs';
 import path from 'node:path';
 import { createInterface } from 'node:readline';
+import { spawnGuarded } from './guarded-child.ts';
 import { findProgram } from './programs.ts';
 import { StartupError, writeFault } from './startup-error.ts';
 
@@ -21,24 +21,18 @@ export interface MariadbProcess {
 
 /**
  * Launches mariadbd with the given flags and writes its log to `db.log` in `dataDir`.
- * It runs in a session of its own, so that a terminal's Ctrl-C reaches the application first and the database last.
- * Where `setpriv` exists the system sends it SIGTERM should this process die without a word.
  * @throws {StartupError} when MariaDB is not installed.
  */
 export function launchMariadb(flags: string[], dataDir: string): MariadbProcess {
   const program = findProgram('mariadbd');
   if (!program) throw new StartupError('MariaDB is missing; install the Debian package mariadb-server-core.');
-  const guard = findProgram('setpriv');
-  const child = guard
-    ? spawn(guard, ['--pdeathsig', 'TERM', program, ...flags], { detached: true, stdio: ['ignore', 'ignore', 'pipe'] })
-    : spawn(program, flags, { detached: true, stdio: ['ignore', 'ignore', 'pipe'] });
-
+  const child = spawnGuarded(program, flags, { stdio: ['ignore', 'ignore', 'pipe'] });
   const logFile = path.join(dataDir, 'db.log');
   const log = openLog(logFile);
   let lastLine = 'it ended without a word';
   // The first error is the cause, those after it are what followed.
   let firstError: string | undefined;
-  const lines = createInterface({ input: child.stderr });
+  const lines = createInterface({ input: child.stderr! });
   lines.on('line', (line) => {
     log.write(`${line}\n`);
     const words = line.replace(/^[\d-]+ +[\d:]+ \d+ /, '').trim();

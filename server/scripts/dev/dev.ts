@@ -1,7 +1,7 @@
-import { spawn } from 'node:child_process';
 import path from 'node:path';
 import { createServer } from 'vite';
 import { probePort } from '../../database/free-port.ts';
+import { spawnGuarded } from '../../database/guarded-child.ts';
 import { startMariadb } from '../../database/mariadb.ts';
 import { readOrMakeSecrets } from '../../database/secrets.ts';
 import { readEnv } from '../../env.ts';
@@ -30,6 +30,9 @@ export async function main({ root, stop }: { root: string; stop: AbortController
     // The config of vite passes /api and the socket on to this port.
     const apiPort = process.env.API_PORT ?? String(await probePort('127.0.0.1'));
     process.env.API_PORT = apiPort;
+    const vite = await createServer({ root, server: { host: env.HOST, port: env.PORT, strictPort: true } });
+    cleanup.add(() => vite.close());
+    await vite.listen();
     const { user, password, host, port, database: name } = database.connection;
     const server = startServerProcess(root, {
       HOST: '127.0.0.1',
@@ -38,9 +41,6 @@ export async function main({ root, stop }: { root: string; stop: AbortController
       CLIENT_URL: `http://${env.HOST}:${env.PORT}`,
     });
     cleanup.add(server.stop);
-    const vite = await createServer({ root, server: { host: env.HOST, port: env.PORT, strictPort: true } });
-    cleanup.add(() => vite.close());
-    await vite.listen();
     const aborted = new Promise<void>((resolve) => signal.addEventListener('abort', () => resolve(), { once: true }));
     if (!signal.aborted) await Promise.race([aborted, server.ended]);
     if (!signal.aborted) exitCode = 1;
@@ -55,7 +55,7 @@ function startServerProcess(root: string, env: Record<string, string>) {
   // Files that only a worker thread loads are not seen by tsx, so both folders are named.
   const watched = ['--include', 'server/**/*.ts', '--include', 'shared/**/*.ts'];
   const args = [tsx, 'watch', '--clear-screen=false', ...watched, 'server/scripts/dev/serve.ts'];
-  const child = spawn(process.execPath, args, {
+  const child = spawnGuarded(process.execPath, args, {
     cwd: root,
     env: { ...process.env, ...env },
     stdio: ['ignore', 'inherit', 'inherit'],
