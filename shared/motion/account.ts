@@ -36,7 +36,11 @@ const PRICE = { shape: 16, gravity: 11, held: 20, depth: 12 };
 const PARAMETER_PRICE = 5;
 
 /** Cost of a drawing that nothing explains: spread evenly over (60 px)², one in thirty. */
-const LOST_PRICE = 2 * Math.log(60 * 60) - 2 * Math.log(2 * Math.PI * Math.E) + 2 * Math.log(30);
+const LOST_PRICE = 2 * Math.log(60 * 60) - 2 * Math.log(2 * Math.PI * Math.E) + 2 * Math.log(30) + 8;
+
+/** Price of a contact that kicks the thing down, or hardly at all: that is no contact. */
+const IMPOSSIBLE_PRICE = 80;
+const LEAST_KICK = 1.2;
 
 export interface Field {
   samples: Samples;
@@ -122,6 +126,7 @@ function judge(fit: PathFit, fault: Fault | null, depth: boolean, weight: Float6
   const free = Math.max(1, 2 * used + field.replicates.freedom - fit.path.size - extra);
   const squares = fit.rss + field.replicates.sum + PRIOR_FREEDOM * PRIOR_NOISE ** 2;
   const marks = 2 * used + field.replicates.freedom + PRIOR_FREEDOM;
+  const odd = impossible(fit, weight, field) * IMPOSSIBLE_PRICE;
   const plain = fit.path.size - (fit.path.shape ? 1 : 0) - (depth ? 2 : 0);
   const price = PARAMETER_PRICE * plain + (fault ? PRICE[fault.kind] : 0) + (depth ? PRICE.depth : 0);
   return {
@@ -132,7 +137,32 @@ function judge(fit: PathFit, fault: Fault | null, depth: boolean, weight: Float6
     left,
     noise2: squares / (free + PRIOR_FREEDOM),
     freedom: free,
-    cost: marks * Math.log(squares / marks) + (price * marks) / (free + PRIOR_FREEDOM) + left.length * LOST_PRICE,
+    cost: marks * Math.log(squares / marks) + (price * marks) / (free + PRIOR_FREEDOM) + left.length * LOST_PRICE + odd,
     covariance: null,
   };
+}
+
+/** How many contacts between two flights do not kick the thing up, or have but one drawing after them to say so. */
+function impossible(fit: PathFit, weight: Float64Array, field: Field): number {
+  const { path, knots, theta } = fit;
+  let count = 0;
+  for (let k = 1; k < path.spans.length; k += 1) {
+    const before = path.spans[k - 1]!;
+    const after = path.spans[k]!;
+    if (before.kind !== 'flight' || after.kind !== 'flight') continue;
+    const g = theta[0]!;
+    const left = knots.t[k]! - knots.t[k - 1]!;
+    const right = knots.t[k + 1]! - knots.t[k]!;
+    const down = (knots.y[k]! - knots.y[k - 1]!) / left + 0.5 * g * left;
+    const up = (knots.y[k + 1]! - knots.y[k]!) / right - 0.5 * g * right;
+    if (k === path.spans.length - 1 && drawingsAfter(field, weight, knots.t[k]!) < 2) count += 1;
+    else if (down - up < LEAST_KICK * g || (down < 0 && up > -g)) count += 1;
+  }
+  return count;
+}
+
+function drawingsAfter(field: Field, weight: Float64Array, time: number): number {
+  let count = 0;
+  for (let i = weight.length - 1; i >= 0 && field.samples.t[i]! > time; i -= 1) if (weight[i]! > 0) count += 1;
+  return count;
 }

@@ -2,7 +2,17 @@ import type { Account, Fault, Field } from './account.ts';
 import { fitAccount } from './account.ts';
 import type { ShapeName } from './shapes.ts';
 import type { Sketch } from './sketch.ts';
-import { flightLast, pathOf, restFirst, restLast, sketchFrom, sketchOf, withoutKnot } from './sketch.ts';
+import {
+  flightLast,
+  oneFlight,
+  pathOf,
+  recast,
+  restFirst,
+  restLast,
+  sketchFrom,
+  sketchOf,
+  withoutKnot,
+} from './sketch.ts';
 import type { Stretch } from './spans.ts';
 
 /** All accounts of one track, the one chosen first of all, and the best one without a fault. */
@@ -19,11 +29,28 @@ const SHAPE_STARTS: Partial<Record<ShapeName, number>> = { hang: 1, 'hang-up': 1
  * Lets every account of a track compete on the same residuals and takes the one that costs least. Structure and fault are
  * searched in turn: the best fault for a structure, then the best structure for that fault, until neither changes.
  */
-export function holdContest(field: Field, stretches: readonly Stretch[], lost: readonly number[]): Contest {
+export function holdContest(field: Field, stretches: readonly Stretch[], lost: readonly number[]): Contest | null {
   const full = Float64Array.from(field.drawings, (drawing) => drawing.weight);
   const weight = Float64Array.from(full);
   for (const index of lost) weight[index] = 0;
-  let best = compete(sketchOf(field, stretches), weight, full, field);
+  let best = stretches.some((stretch) => stretch.kind === 'flight')
+    ? compete(sketchOf(field, stretches), weight, full, field)
+    : null;
+  if (!best || isPoor(best.chosen, field)) {
+    for (const [before, after] of [
+      [0, 0],
+      [1, 0],
+      [2, 0],
+      [1, 1],
+      [2, 1],
+      [3, 1],
+    ] as const) {
+      const sketch = oneFlight(field, before, after);
+      const next = sketch && compete(sketch, full, full, field);
+      if (next && (!best || next.chosen.cost < best.chosen.cost)) best = next;
+    }
+  }
+  if (!best) return null;
   for (let round = 0; round < 3; round += 1) {
     const better = restructure(best.chosen, field, full);
     if (!better) break;
@@ -32,6 +59,11 @@ export function holdContest(field: Field, stretches: readonly Stretch[], lost: r
     best = next;
   }
   return best;
+}
+
+/** An account that leaves out much or fits badly: its structure may be wrong. */
+function isPoor(account: Account, field: Field): boolean {
+  return account.left.length > 0.2 * field.drawings.length || account.noise2 > 9;
 }
 
 function compete(sketch: Sketch, weight: Float64Array, full: Float64Array, field: Field): Contest {
@@ -58,40 +90,84 @@ function compete(sketch: Sketch, weight: Float64Array, full: Float64Array, field
   return { chosen: accounts[0]!, clean, accounts };
 }
 
-/** A structure that explains the track at less cost under the same fault: other ends, a contact fewer; null when there is none. */
+interface Option {
+  sketch: Sketch;
+  fault: Fault | null;
+  depth: boolean;
+  shape?: number;
+}
+
+/** A structure that explains the track at less cost: other ends, a contact more or fewer; null when there is none. */
 function restructure(account: Account, field: Field, full: Float64Array): Account | null {
+  let best: Account | null = null;
+  for (const option of optionsFor(account, field)) {
+    const { fault } = option;
+    if (fault && 'span' in fault && option.sketch.spans[fault.span]?.kind !== 'flight') continue;
+    const { path, theta } = account.fit;
+    const start = pathOf(option.sketch, fault, option.depth, field, {
+      shape: option.shape,
+      depth: account.depth ? [theta[path.depthAt]!, theta[path.depthAt + 1]!] : undefined,
+    });
+    const next = fitAccount(start.path, start.theta, fault, option.depth, full, field);
+    if (next.cost < (best ?? account).cost - 1e-6) best = next;
+  }
+  return best;
+}
+
+function optionsFor(account: Account, field: Field): Option[] {
   const { path, theta, knots } = account.fit;
   const sketch = sketchFrom(path, theta, knots);
-  const options: { sketch: Sketch; shift: (span: number) => number }[] = [];
+  const { spans } = sketch;
+  const last = spans.length - 1;
+  const { fault, depth } = account;
+  const shape = path.shapeAt >= 0 ? theta[path.shapeAt]! : undefined;
+  const options: Option[] = [];
   const add = (next: Sketch | null, shift: (span: number) => number = (span) => span) => {
-    if (next) options.push({ sketch: next, shift });
+    if (!next) return;
+    const moved = fault && 'span' in fault ? { ...fault, span: shift(fault.span) } : fault;
+    options.push({ sketch: next, fault: moved, depth, shape });
   };
   for (const count of [1, 2, 3]) add(restFirst(sketch, count, field), (span) => span + 1);
   for (const count of [1, 2, 3]) add(restLast(sketch, count, field));
   for (const count of [2, 3, 4]) add(flightLast(sketch, count, field));
-  for (let k = 1; k < sketch.spans.length; k += 1) {
-    const kinds = [sketch.spans[k - 1]!.kind, sketch.spans[k]!.kind];
-    const outer = k === 1 || k === sketch.spans.length - 1;
-    if (kinds.every((kind) => kind === 'flight') || (outer && kinds.includes('rest') && kinds.includes('flight'))) {
-      add(withoutKnot(sketch, k), (span) => (span >= k ? span - 1 : span));
+  if (last > 0) {
+    if (spans[0]!.kind === 'flight') add(recast(sketch, 0, 'rest', false));
+    if (spans[last]!.kind === 'flight') add(recast(sketch, last, 'rest', false));
+  }
+  for (let k = 1; k <= last; k += 1) {
+    const before = spans[k - 1]!.kind;
+    const after = spans[k]!.kind;
+    if (after === 'flight' && before !== 'flight') add(recast(sketch, k, 'flight', !spans[k]!.tangent));
+    const outer = (k === 1 && before === 'rest') || (k === last && after === 'rest');
+    if (before !== 'flight' && !outer) continue;
+    if (after !== 'flight' && !outer) continue;
+    const joined = withoutKnot(sketch, k);
+    add(joined, (span) => (span >= k ? span - 1 : span));
+    if (before === 'flight' && after === 'flight' && isDoubtful(account, k)) {
+      for (const name of ALL_SHAPES) {
+        options.push({
+          sketch: joined,
+          fault: { kind: 'shape', name, span: k - 1 },
+          depth: false,
+          shape: SHAPE_STARTS[name],
+        });
+      }
     }
   }
-  let best: Account | null = null;
-  for (const option of options) {
-    const { fault } = account;
-    const moved = fault && 'span' in fault ? { ...fault, span: option.shift(fault.span) } : fault;
-    if (moved && 'span' in moved && option.sketch.spans[moved.span]?.kind !== 'flight') continue;
-    const depth: [number, number] | undefined = account.depth
-      ? [theta[path.depthAt]!, theta[path.depthAt + 1]!]
-      : undefined;
-    const start = pathOf(option.sketch, moved, account.depth, field, {
-      ...(path.shapeAt >= 0 ? { shape: theta[path.shapeAt]! } : {}),
-      ...(depth ? { depth } : {}),
-    });
-    const next = fitAccount(start.path, start.theta, moved, account.depth, full, field);
-    if (next.cost < (best ?? account).cost - 1e-6) best = next;
-  }
-  return best;
+  return options;
+}
+
+const ALL_SHAPES: readonly ShapeName[] = ['ease', 'even-path', 'apex', 'power', 'hang', 'hang-up', 'even-steps'];
+
+/** A contact that kicks far less than a bounce between two flights of these lengths would. */
+function isDoubtful(account: Account, k: number): boolean {
+  const { knots, theta } = account.fit;
+  const g = theta[0]!;
+  const left = knots.t[k]! - knots.t[k - 1]!;
+  const right = knots.t[k + 1]! - knots.t[k]!;
+  const down = (knots.y[k]! - knots.y[k - 1]!) / left + 0.5 * g * left;
+  const up = (knots.y[k + 1]! - knots.y[k]!) / right - 0.5 * g * right;
+  return down - up < 0.3 * g * (left + right);
 }
 
 function possibleFaults(clean: Account, field: Field): Fault[] {

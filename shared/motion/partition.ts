@@ -15,12 +15,23 @@ const LONGEST = 48;
  * residuals over noise² plus a price per parameter, exactly, by running sums. `noise` is px per axis.
  */
 export function partition(drawings: readonly Drawing[], noise: number): Piece[] {
+  let pieces = cutOnce(drawings, noise);
+  for (let wider = 3; wider < 40 && lostShare(pieces, drawings) > 0.25; wider *= 3)
+    pieces = cutOnce(drawings, wider * noise);
+  return pieces;
+}
+
+function lostShare(pieces: readonly Piece[], drawings: readonly Drawing[]): number {
+  return pieces.filter((piece) => piece.kind === 'lost').length / drawings.length;
+}
+
+function cutOnce(drawings: readonly Drawing[], noise: number): Piece[] {
   const n = drawings.length;
   const s2 = noise * noise;
   const price = 1.3 * Math.log(2 * n + 4);
   const best = new Float64Array(n + 1).fill(Infinity);
   const cut = new Int32Array(n + 1);
-  const kinds: Piece['kind'][] = new Array<Piece['kind']>(n + 1);
+  const kinds: Piece['kind'][] = [];
   best[0] = 0;
   for (let j = 1; j <= n; j += 1) {
     const last = drawings[j - 1]!;
@@ -31,6 +42,7 @@ export function partition(drawings: readonly Drawing[], noise: number): Piece[] 
       st4 = 0;
     let sx = 0,
       sxt = 0,
+      sxt2 = 0,
       sxx = 0,
       sy = 0,
       syt = 0,
@@ -49,6 +61,7 @@ export function partition(drawings: readonly Drawing[], noise: number): Piece[] 
       st4 += w * t * t * t * t;
       sx += w * x;
       sxt += w * x * t;
+      sxt2 += w * x * t * t;
       sxx += w * x * x;
       sy += w * y;
       syt += w * y * t;
@@ -84,7 +97,10 @@ export function partition(drawings: readonly Drawing[], noise: number): Piece[] 
         const q = cqq - (ctq * ctq) / stt;
         const qy = cqy - (ctq * cty) / stt;
         const gain = q > 1e-9 && qy > 0 ? (qy * qy) / q : 0;
-        const flight = (lineX + Math.max(0, lineY - gain)) / s2 + 6 * price;
+        const qx = sxt2 - (st2 * sx) / sw - (ctq * ctx) / stt;
+        const eased = q > 1e-9 ? (qx * qx) / q : 0;
+        const across = Math.min(lineX / s2, Math.max(0, lineX - eased) / s2 + 2 * price);
+        const flight = across + Math.max(0, lineY - gain) / s2 + 6 * price;
         if (gain > 0 && flight < cost) {
           cost = flight;
           kind = 'flight';
@@ -121,5 +137,5 @@ export function roughNoise(drawings: readonly Drawing[]): number {
   }
   if (values.length < 4) return 0.5;
   values.sort((p, q) => p - q);
-  return values[Math.floor(values.length * 0.4)]! / 0.524;
+  return values[Math.floor(values.length * 0.3)]! / 0.385;
 }

@@ -64,7 +64,8 @@ export function layOut(spans: Span[], fixed: { start: number; end: number }, opt
     if (before && after) path.timeAt[k] = path.size++;
     const followsRest = before?.kind === 'rest';
     if (!followsRest) path.xAt[k] = path.size++;
-    const followsY = followsRest || before?.kind === 'roll' || (before?.kind === 'flight' && before.tangent);
+    const level = before?.kind === 'roll' && !(options.depthAt !== undefined && options.depthAt >= 0);
+    const followsY = followsRest || level || (before?.kind === 'flight' && before.tangent);
     if (!followsY) path.yAt[k] = path.size++;
   }
   if (options.depthAt !== undefined && options.depthAt >= 0) {
@@ -94,7 +95,12 @@ export function placeKnots(path: Path, theta: Float64Array, out: Knots): void {
     else {
       const before = path.spans[k - 1]!;
       const span = out.t[k]! - out.t[k - 1]!;
-      out.y[k] = out.y[k - 1]! + (before.kind === 'flight' ? 0.5 * theta[before.gravity]! * span * span : 0);
+      out.y[k] = out.y[k - 1]!;
+      if (before.kind === 'flight') {
+        const slope =
+          path.spans[k - 2]?.kind === 'roll' ? (out.y[k - 1]! - out.y[k - 2]!) / (out.t[k - 1]! - out.t[k - 2]!) : 0;
+        out.y[k] = out.y[k]! + span * (slope + 0.5 * theta[before.gravity]! * span);
+      }
     }
   }
 }

@@ -99,9 +99,6 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
 
   const pieces = partition(local, noise);
   const stretches = stretchesOf(local, pieces, noise);
-  if (!stretches.some((stretch) => stretch.kind === 'flight')) {
-    return nothing('not-in-flight', `${track.id} rests, rolls or is carried; nothing in it flies.`);
-  }
   const field = {
     drawings: local,
     replicates,
@@ -114,6 +111,9 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
   };
   const lost = pieces.filter((piece) => piece.kind === 'lost').map((piece) => piece.from);
   const contest = holdContest(field, stretches, lost);
+  if (!contest || !contest.chosen.fit.path.spans.some((span) => span.kind === 'flight')) {
+    return nothing('not-in-flight', `${track.id} rests, rolls or is carried; nothing in it flies.`);
+  }
   const account = { ...contest.chosen };
   account.covariance = covariance(account.fit, { ...field.samples, weight: account.weight });
 

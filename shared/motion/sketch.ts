@@ -66,7 +66,7 @@ export function pathOf(
   fault: Fault | null,
   depth: boolean,
   field: Field,
-  start: { shape?: number; depth?: [number, number] } = {},
+  start: { shape?: number | undefined; depth?: [number, number] | undefined } = {},
 ): { path: Path; theta: Float64Array } {
   const last = sketch.spans.length - 1;
   const { knots } = sketch;
@@ -147,6 +147,35 @@ export function withoutKnot(sketch: Sketch, knot: number): Sketch {
   const before = sketch.spans[knot - 1]!;
   spans[knot - 1] = { kind: 'flight', tangent: before.kind === 'flight' && before.tangent, gravity: 0 };
   return { ...sketch, spans, knots: { t: drop(sketch.knots.t), x: drop(sketch.knots.x), y: drop(sketch.knots.y) } };
+}
+
+/** The same sketch with its first or last flight (a short one) taken for rest, or a let-go taken for a push, and the other way. */
+export function recast(sketch: Sketch, span: number, kind: Span['kind'], tangent: boolean): Sketch {
+  const spans = sketch.spans.map((one, k) => (k === span ? { kind, tangent, gravity: 0 } : one));
+  return { ...sketch, spans };
+}
+
+/** The plainest sketch: at rest for the first `before` drawings, one flight, at rest for the last `after`. */
+export function oneFlight(field: Field, before: number, after: number): Sketch | null {
+  const { drawings } = field;
+  const n = drawings.length;
+  if (n - before - after < 3) return null;
+  const first = drawings[before]!;
+  const last = drawings[n - 1 - after]!;
+  const middle = drawings[Math.floor((before + n - after) / 2)]!;
+  const h = Math.max(1, (last.t - first.t) / 2);
+  const gravity = Math.max(1e-2, (first.y - 2 * middle.y + last.y) / (h * h));
+  const base: Sketch = {
+    spans: [{ kind: 'flight', tangent: false, gravity: 0 }],
+    knots: {
+      t: Float64Array.from([drawings[0]!.t, drawings[n - 1]!.t]),
+      x: Float64Array.from([drawings[0]!.x, drawings[n - 1]!.x]),
+      y: Float64Array.from([drawings[0]!.y, drawings[n - 1]!.y]),
+    },
+    gravity,
+  };
+  const opened = before ? restFirst(base, before, field) : base;
+  return opened && after ? restLast(opened, after, field) : opened;
 }
 
 function insert(

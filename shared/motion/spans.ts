@@ -19,6 +19,8 @@ interface Motion {
   x: PolynomialFit;
   y: PolynomialFit;
   speedError: number;
+  /** Time of its last drawing. */
+  until: number;
 }
 
 const valueAt = (fit: PolynomialFit, t: number): number => {
@@ -36,11 +38,12 @@ const speedAt = (fit: PolynomialFit, t: number): number => {
  */
 export function stretchesOf(drawings: readonly Drawing[], pieces: readonly Piece[], noise: number): Stretch[] {
   const motions = pieces.filter((piece) => piece.kind !== 'lost').map((piece) => motionOf(drawings, piece));
+  const kick = LEAST_KICK * typicalBend(motions) * typicalStep(drawings);
   const out: Stretch[] = [];
   motions.forEach((motion, index) => {
     const before = out[out.length - 1];
     const next = motions[index + 1];
-    const kind = kindOf(motion, before, next, noise);
+    const kind = kindOf(motion, before, next, noise, kick);
     const fresh: Stretch = {
       kind,
       tangent: false,
@@ -53,7 +56,7 @@ export function stretchesOf(drawings: readonly Drawing[], pieces: readonly Piece
       out.push(fresh);
       return;
     }
-    const cut = cutBetween(before, fresh, drawings, noise);
+    const cut = cutBetween(before, fresh, drawings, noise, kick);
     if (cut === 'none') {
       before.to = fresh.to;
       before.last = motion;
@@ -63,6 +66,31 @@ export function stretchesOf(drawings: readonly Drawing[], pieces: readonly Piece
     out.push(fresh);
   });
   return out;
+}
+
+/** A contact kicks the thing up by at least this many steps of gravity; what jumps less is spacing. */
+const LEAST_KICK = 1.5;
+
+/** Speed down (px/frame) at which a stretch ends. */
+function endSpeed(stretch: Stretch): number {
+  const { piece } = stretch.last;
+  return piece.kind === 'rest' ? 0 : speedAt(stretch.last.y, stretch.last.until);
+}
+
+function typicalBend(motions: readonly Motion[]): number {
+  const bends = motions
+    .filter((motion) => motion.piece.kind === 'flight')
+    .map((motion) => (2 * motion.y.c2) / motion.y.half ** 2)
+    .sort((a, b) => a - b);
+  return bends[Math.floor(bends.length / 2)] ?? 0;
+}
+
+function typicalStep(drawings: readonly Drawing[]): number {
+  const steps = drawings
+    .slice(1)
+    .map((d, i) => d.t - drawings[i]!.t)
+    .sort((a, b) => a - b);
+  return steps[Math.floor(steps.length / 2)] ?? 1;
 }
 
 function motionOf(drawings: readonly Drawing[], piece: Piece): Motion {
@@ -80,7 +108,7 @@ function motionOf(drawings: readonly Drawing[], piece: Piece): Motion {
   const n = part.length;
   const span = Math.max(1, times[n - 1]! - times[0]!);
   const speedError = flat ? 0 : (piece.kind === 'flight' ? 12 : 3.5) / (span * Math.sqrt(n));
-  return { piece, x, y, speedError };
+  return { piece, x, y, speedError, until: times[n - 1]! };
 }
 
 function straight(part: readonly Drawing[], axis: 'x' | 'y', flat: boolean): PolynomialFit {
@@ -104,11 +132,16 @@ function straight(part: readonly Drawing[], axis: 'x' | 'y', flat: boolean): Pol
   };
 }
 
-function kindOf(motion: Motion, before: Stretch | undefined, next: Motion | undefined, noise: number): Stretch['kind'] {
+function kindOf(
+  motion: Motion,
+  before: Stretch | undefined,
+  next: Motion | undefined,
+  noise: number,
+  kick: number,
+): Stretch['kind'] {
   const { piece } = motion;
   if (piece.kind === 'rest') {
-    const rising = before?.kind === 'flight' && speedAt(before.last.y, before.last.y.middle + before.last.y.half) < 0;
-    if (rising && next) return 'flight';
+    if (before?.kind === 'flight' && next && endSpeed(before) < kick) return 'flight';
     if (before && next && piece.to - piece.from < 2) return 'flight';
     return 'rest';
   }
@@ -116,7 +149,7 @@ function kindOf(motion: Motion, before: Stretch | undefined, next: Motion | unde
     const down = motion.y.c1;
     const across = Math.abs(motion.x.c1);
     const level = Math.abs(down) < 0.12 * across + 3 * noise * motion.speedError;
-    if (level && across > 0 && (!before || before.kind !== 'flight' || speedAt(before.last.y, motion.y.middle) > 0)) {
+    if (level && across > 0 && (!before || before.kind !== 'flight' || endSpeed(before) > kick)) {
       return 'roll';
     }
   }
@@ -128,13 +161,14 @@ function cutBetween(
   b: Stretch,
   drawings: readonly Drawing[],
   noise: number,
+  kick: number,
 ): 'contact' | 'let-go' | 'none' {
   const t = (drawings[a.last.piece.to]!.t + drawings[b.first.piece.from]!.t) / 2;
   const va = a.kind === 'rest' ? 0 : speedAt(a.last.y, t);
   const vb = b.kind === 'rest' ? 0 : speedAt(b.first.y, t);
   const jump = vb - va;
   const error = 3 * noise * Math.hypot(a.last.speedError, b.first.speedError);
-  const upward = jump < -error && -jump > 0.3 * (Math.abs(va) + Math.abs(vb));
+  const upward = jump < -error && -jump > 0.3 * (Math.abs(va) + Math.abs(vb)) && -jump > kick;
   if (upward) return 'contact';
   if (a.kind !== b.kind) {
     if (b.kind === 'flight') return 'let-go';
