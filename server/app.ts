@@ -6,8 +6,10 @@ import { AppError } from './errors.ts';
 import { client } from './http/client.ts';
 import type { Endpoint } from './http/endpoint.ts';
 import { errorSink } from './http/errorSink.ts';
+import { describeApi } from './http/openapi.ts';
 import { originCheck } from './http/originCheck.ts';
 import { signInLimits } from './http/rateLimits.ts';
+import { requireUser } from './http/requireUser.ts';
 import { securityHeaders } from './http/securityHeaders.ts';
 import type { Sessions } from './http/sessions.ts';
 import { draftRoutes } from './routes/drafts.routes.ts';
@@ -54,10 +56,16 @@ export function allEndpoints(deps: Deps, passport: PassportStatic): Endpoint[] {
 function api(deps: Deps, { sessions, passport, publicOrigin }: AppOptions): Router {
   const router = Router();
   const endpoints = allEndpoints(deps, passport);
+  let description: ReturnType<typeof describeApi> | undefined;
   router.use(originCheck(publicOrigin), express.json({ limit: '100kb' }));
   router.use(sessions.middleware, passport.session());
   router.post('/session', ...signInLimits());
   for (const { contract, handler } of endpoints) router[contract.method](contract.path, handler);
+  router.get('/openapi.json', (req, res) => {
+    requireUser(req);
+    description ??= describeApi(endpoints.map(({ contract }) => contract));
+    res.set('Cache-Control', 'no-store').json(description);
+  });
   router.use(() => {
     throw new AppError('not_found', 'There is nothing at this address.');
   });

@@ -12,6 +12,7 @@ import { createSessions } from './http/sessions.ts';
 import { createBroadcast } from './realtime/broadcast.ts';
 import { createLiveServer, openLiveServer } from './realtime/liveServer.ts';
 import { createReadingQueue } from './services/readingQueue.ts';
+import { reopenDrafts, sweepDaily } from './services/sweep.ts';
 
 export interface DemoSignIn {
   name: string;
@@ -62,6 +63,8 @@ export async function startServer({ env, database }: StartOptions): Promise<Runn
     const readings = createReadingQueue(parts, { analysis, lanes });
     opened.push(() => readings.close());
     const deps: Deps = { ...parts, readings };
+    await reopenDrafts(deps);
+    opened.push(sweepDaily(deps));
     const passport = createPassport(deps);
     const app = createApp(deps, { sessions, passport, publicOrigin: env.PUBLIC_ORIGIN });
 
