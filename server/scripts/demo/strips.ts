@@ -165,7 +165,7 @@ export const DEMO_STRIPS = {
     { flights: 3 },
   ),
   '030-0010/1': strip(sack, onTwos(tossPath(sackToss)), null, { hold: 2 }),
-  '030-0070/1': strip(boot, withFault(bootToss, { kind: 'pop', frame: 12, dx: 6, dy: -21 }), 'pop', {
+  '030-0070/1': strip(boot, withFault(bootToss, { kind: 'pop', frame: 12, dx: 4, dy: -12 }), 'pop', {
     turns: turning(bootToss, 1),
   }),
   '030-0120/1': strip(hat, withFault(hatToss, { kind: 'exponent', p: 3 }), 'hang'),
