@@ -1,11 +1,19 @@
 import { type ChildProcess, spawn } from 'node:child_process';
 
+/** How a process ended and what it said. */
+interface Ending {
+  code: number | null;
+  signal: NodeJS.Signals | null;
+  stdout: string;
+  stderr: string;
+}
+
 /** `npm start` as a process of its own, seen as a person at the terminal sees it. */
 export interface StartProcess {
   /** Resolves with the address it prints; rejects with what it said when it ends before that. */
   readonly ready: Promise<string>;
   /** Resolves when it is gone. */
-  readonly exited: Promise<{ code: number | null; stdout: string; stderr: string }>;
+  readonly exited: Promise<Ending>;
   signal(signal: NodeJS.Signals): void;
 }
 
@@ -34,10 +42,10 @@ export function startSpandrel({ root, settings, asInTerminal = false }: StartOpt
   });
   running.add(child);
   const output = { stdout: '', stderr: '' };
-  const exited = new Promise<{ code: number | null; stdout: string; stderr: string }>((resolve, reject) => {
-    child.once('error', reject).once('close', (code) => {
+  const exited = new Promise<Ending>((resolve, reject) => {
+    child.once('error', reject).once('close', (code, signal) => {
       running.delete(child);
-      resolve({ code, ...output });
+      resolve({ code, signal, ...output });
     });
   });
   const ready = new Promise<string>((resolve, reject) => {
