@@ -11,15 +11,9 @@ import { createPassport } from './http/passport.ts';
 import { createSessions } from './http/sessions.ts';
 import { createBroadcast } from './realtime/broadcast.ts';
 import { createLiveServer, openLiveServer } from './realtime/liveServer.ts';
+import { type DemoSignIn, seedDemo } from './scripts/demo/seed.ts';
 import { createReadingQueue } from './services/readingQueue.ts';
 import { reopenDrafts, sweepDaily } from './services/sweep.ts';
-
-export interface DemoSignIn {
-  name: string;
-  email: string;
-  password: string;
-  role: string;
-}
 
 export interface RunningServer {
   url: string;
@@ -38,8 +32,8 @@ export interface StartOptions {
 const CLOSING_PATIENCE = 2_000;
 
 /**
- * Boots the server: data source, migrations, app, sockets, listen; then goes on with readings an earlier run left.
- * Whatever fails, everything that was opened before is closed again.
+ * Boots the server: data source, migrations, the demo where the database is empty, app, sockets, listen; then goes on
+ * with readings an earlier run left. Whatever fails, everything that was opened before is closed again.
  */
 export async function startServer({ env, database }: StartOptions): Promise<RunningServer> {
   const opened: (() => Promise<unknown>)[] = [];
@@ -59,6 +53,7 @@ export async function startServer({ env, database }: StartOptions): Promise<Runn
 
     const io = createLiveServer(env.PUBLIC_ORIGIN);
     const parts = { dataSource, dataDir: env.DATA_DIR, broadcast: createBroadcast(io), log, now: () => new Date() };
+    const demoSignIns = env.DEMO ? await seedDemo({ ...parts, analysis }) : [];
     const lanes = Math.max(1, availableParallelism() - 1);
     const readings = createReadingQueue(parts, { analysis, lanes });
     opened.push(() => readings.close());
@@ -85,7 +80,7 @@ export async function startServer({ env, database }: StartOptions): Promise<Runn
     await readings.resume();
     return {
       url: env.PUBLIC_ORIGIN ?? urlOf(env.HOST, server.address() as AddressInfo),
-      demoSignIns: [],
+      demoSignIns,
       deps,
       close: closeAll,
     };

@@ -43,6 +43,7 @@ export async function seedDemo(deps: SeedDeps): Promise<DemoSignIn[]> {
 
 async function fill(deps: SeedDeps): Promise<void> {
   const began = Date.now();
+  deps.log.info(`Filling the empty database with a demo production, “${DEMO_PRODUCTION.name}”. This happens once.`);
   const cast = await invite(deps, new Date(began - 240 * HOUR));
   const clock = { now: new Date(began) };
   const readings = followReadings();
