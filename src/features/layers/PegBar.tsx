@@ -86,8 +86,7 @@ export function PegBar({ layers, onLayers, hasReading, children }: PegBarProps) 
     ));
   return (
     <div className="flex min-h-10 items-center border-b border-dashed border-rule">
-      <div
-        role="group"
+      <fieldset
         aria-label="Layers over the picture"
         className="flex min-w-0 flex-1 items-center gap-1.5 overflow-x-auto px-3 py-1 [scrollbar-width:none]"
       >
@@ -98,7 +97,7 @@ export function PegBar({ layers, onLayers, hasReading, children }: PegBarProps) 
           <i className="h-1.5 w-7 rounded-full bg-well inset-shadow-2xs" />
         </span>
         {switches(AT_RIGHT)}
-      </div>
+      </fieldset>
       <div className="flex shrink-0 items-center gap-2.5 py-1 pr-3 pl-1">{children}</div>
     </div>
   );

@@ -7,7 +7,7 @@ const BUTTON =
 /** Closer, further away, the whole picture; on the surround. */
 export function ZoomControls({ control }: { control: ViewControl }) {
   return (
-    <div role="group" aria-label="Zoom" className="absolute bottom-2 left-2 flex gap-1 max-md:hidden">
+    <fieldset aria-label="Zoom" className="absolute bottom-2 left-2 flex gap-1 max-md:hidden">
       <button
         type="button"
         className={BUTTON}
@@ -26,6 +26,6 @@ export function ZoomControls({ control }: { control: ViewControl }) {
           <span className="ml-1.5 font-normal text-graphite">{shownNumber(control.view.scale * 100, 0)} %</span>
         </button>
       )}
-    </div>
+    </fieldset>
   );
 }

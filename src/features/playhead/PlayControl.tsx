@@ -29,7 +29,7 @@ export function PlayControl({ takeId, fps, playhead }: PlayControlProps) {
   const { playing, play, stop } = usePlay(playhead, fps);
   const flashes = useRef<number | null>(null);
   const [looking, setLooking] = useState(false);
-  const [warning, setWarning] = useState<'flickers' | 'unknown' | null>(null);
+  const [warning, setWarning] = useState<{ flashes: number | null } | null>(null);
 
   const start = async () => {
     if (playing) return stop();
@@ -39,12 +39,12 @@ export function PlayControl({ takeId, fps, playhead }: PlayControlProps) {
       try {
         flashes.current = flashesInASecond(await stripLuminances(takeId, playhead.frames), fps.num / fps.den);
       } catch {
-        return setWarning('unknown');
+        return setWarning({ flashes: null });
       } finally {
         setLooking(false);
       }
     }
-    if (flashes.current > MOST_FLASHES) setWarning('flickers');
+    if (flashes.current > MOST_FLASHES) setWarning({ flashes: flashes.current });
     else play();
   };
 
@@ -73,7 +73,7 @@ export function PlayControl({ takeId, fps, playhead }: PlayControlProps) {
       <Dialog
         open={warning !== null}
         onClose={() => setWarning(null)}
-        title={warning === 'unknown' ? 'Nobody knows yet whether this strip flickers' : 'This strip flickers'}
+        title={warning?.flashes === null ? 'Nobody knows yet whether this strip flickers' : 'This strip flickers'}
         actions={
           <>
             <Button
@@ -91,9 +91,9 @@ export function PlayControl({ takeId, fps, playhead }: PlayControlProps) {
         }
       >
         <p>
-          {warning === 'unknown'
+          {warning?.flashes === null
             ? 'Its small pictures did not arrive, so the light of its frames could not be compared.'
-            : `Played at its rate it flashes ${flashes.current ?? 0} times within a second.`}{' '}
+            : `Played at its rate it flashes ${warning?.flashes ?? 0} times within a second.`}{' '}
           Flashes can harm people with photosensitive epilepsy. The arrow keys step one frame at a time, which is safe.
         </p>
       </Dialog>

@@ -50,7 +50,7 @@ const NOTHING = { exposure: [], frames: 0 };
 /** The score: the lanes under the picture, one column a frame, on one axis. */
 export function Score(props: ScoreProps) {
   const { takeId, firstFrame, frames, playhead, reading, objectId, findings, hanging } = props;
-  const scroller = useRef<HTMLDivElement>(null);
+  const scroller = useRef<HTMLElement>(null);
   const narrow = useMediaQuery('(max-width: 47.99rem)');
   const names = narrow ? 76 : 116;
   const seen = Math.max(0, useSize(scroller).width - names);
@@ -77,9 +77,8 @@ export function Score(props: ScoreProps) {
   const shared = { columns, range, firstFrame };
   return (
     <div style={{ '--names': `${names}px` } as CSSProperties}>
-      <div
+      <section
         ref={scroller}
-        role="group"
         aria-label="Score"
         data-testid="score"
         className="relative overflow-x-auto overflow-y-hidden overscroll-x-contain rounded-b-card border border-t-0 border-rule bg-sheet max-md:rounded-none max-md:border-x-0"
@@ -110,7 +109,7 @@ export function Score(props: ScoreProps) {
           )}
           <NotesLane {...shared} pins={props.pins} open={props.openPin} onOpen={props.onOpenPin} />
         </div>
-      </div>
+      </section>
       {hanging && (
         <HangingCard pinX={names + columnMiddle(columns, hanging.frame) - scrollLeft} least={names} whole={narrow}>
           {hanging.content}
@@ -122,7 +121,7 @@ export function Score(props: ScoreProps) {
 
 /** Keeps the chosen frame in view. */
 function useFollow(
-  scroller: RefObject<HTMLDivElement | null>,
+  scroller: RefObject<HTMLElement | null>,
   playhead: Playhead,
   columns: ReturnType<typeof layColumns>,
   seen: number,
@@ -132,6 +131,6 @@ function useFollow(
     const element = scroller.current;
     if (!element || seen <= 0) return;
     const to = scrollToSee(columns, frame, element.scrollLeft, seen);
-    if (to !== null) element.scrollLeft = to;
+    if (to !== null) element.scrollTo({ left: to });
   }, [scroller, frame, columns, seen]);
 }

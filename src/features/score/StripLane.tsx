@@ -1,4 +1,3 @@
-import clsx from 'clsx';
 import { memo } from 'react';
 import { thumbnailUrl } from '../../../shared/api/takes.ts';
 import { shownFrame } from '../../../shared/reading/document.ts';
@@ -54,23 +53,20 @@ function Cursor({ firstFrame, columns, playhead }: Pick<StripLaneProps, 'firstFr
   const frame = useFrame(playhead);
   return (
     <div
-      role="slider"
-      tabIndex={0}
-      aria-label="Frame"
-      aria-valuemin={shownFrame(1, firstFrame)}
-      aria-valuemax={shownFrame(columns.frames, firstFrame)}
-      aria-valuenow={shownFrame(frame, firstFrame)}
-      onKeyDown={(event) => {
-        const by = { PageUp: 10, PageDown: -10 }[event.key];
-        if (by === undefined) return;
-        event.preventDefault();
-        playhead.step(by);
-      }}
-      className={clsx('absolute top-0.5 z-10 flex flex-col items-center rounded-mark')}
+      className="absolute top-0.5 z-10 flex flex-col items-center rounded-mark has-focus-visible:outline-2 has-focus-visible:outline-offset-1"
       style={{ width: columns.width, height: LANE - 3, transform: `translateX(${(frame - 1) * columns.width}px)` }}
     >
+      <input
+        type="range"
+        className="sr-only"
+        aria-label="Frame"
+        min={shownFrame(1, firstFrame)}
+        max={shownFrame(columns.frames, firstFrame)}
+        value={shownFrame(frame, firstFrame)}
+        onChange={(event) => playhead.choose(Number(event.target.value) - firstFrame + 1)}
+      />
       <span className="rounded-[4px] border-2 border-ink" style={{ width: columns.width, height: THUMB + 4 }} />
-      <span className="bg-transparent font-mono text-2xs leading-tight font-bold text-ink">
+      <span className="font-mono text-2xs leading-tight font-bold text-ink">
         <span className="rounded-mark bg-sheet px-0.5">{shownFrame(frame, firstFrame)}</span>
       </span>
     </div>

@@ -23,7 +23,7 @@ export function StampRow({ slug, takeId, noteId, board, me, what, className }: S
   const { shown, set, error } = useStamps({ slug, takeId, noteId }, me, board);
   return (
     <div className={className}>
-      <div role="group" aria-label={`Stamps on ${what}`} className="-ml-1.5 flex flex-wrap items-center gap-x-1">
+      <fieldset aria-label={`Stamps on ${what}`} className="-ml-1.5 flex flex-wrap items-center gap-x-1">
         {kindsInOrder(shown).map((kind) => {
           const people = shown.stamps.find((stamp) => stamp.kind === kind)?.people ?? [];
           const mine = hasStamped(shown, kind, me.id);
@@ -47,7 +47,7 @@ export function StampRow({ slug, takeId, noteId, board, me, what, className }: S
             </button>
           );
         })}
-      </div>
+      </fieldset>
       {error && (
         <p role="alert" className="text-xs font-semibold">
           {sentenceOf(error)}

@@ -1,0 +1,29 @@
+import { type Finding, type Flight, shownFrame } from '../../../shared/reading/document.ts';
+import { decimalsFor, shownNumber } from '../../lib/honestDigits.ts';
+
+/** "frames 1003 – 1023", in the production's numbers; an end outside the strip is left open. */
+export function flightSpan(flight: Pick<Flight, 'takeOff' | 'landing'>, firstFrame: number): string {
+  const shown = (frame: number | null) => (frame === null ? '…' : String(shownFrame(Math.round(frame), firstFrame)));
+  return `frames ${shown(flight.takeOff)} – ${shown(flight.landing)}`;
+}
+
+function riseAndFall(flight: Flight): string | null {
+  if (!flight.apex || flight.takeOff === null || flight.landing === null) return null;
+  const decimals = Math.max(1, decimalsFor(2 * flight.apex.seFrame, 1));
+  const up = flight.apex.frame - flight.takeOff;
+  const down = flight.landing - flight.apex.frame;
+  if (up <= 0 || down <= 0) return null;
+  return `Up takes ${shownNumber(up, decimals)} frames, down takes ${shownNumber(down, decimals)}.`;
+}
+
+const lower = (title: string) => title.charAt(0).toLowerCase() + title.slice(1);
+
+/** What a flight's card says before its gauges: whether it reads true, and how it goes up and down. */
+export function flightSentence(flight: Flight, findings: readonly Pick<Finding, 'title'>[]): string {
+  if (!flight.judged) return 'Measured, not judged: someone said it does not fly free.';
+  const parts = riseAndFall(flight);
+  if (findings.length === 0) return ['Reads true.', parts].filter(Boolean).join(' ');
+  const [first, ...rest] = findings.map((finding) => finding.title);
+  const off = rest.length === 0 ? `${first}.` : `${[first, ...rest.map(lower)].join(', ')}.`;
+  return [off, parts].filter(Boolean).join(' ');
+}

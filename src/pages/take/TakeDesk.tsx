@@ -1,0 +1,178 @@
+import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
+import { useMemo, useState } from 'react';
+import { useNavigate } from 'react-router';
+import type { ShotWithTakes } from '../../../shared/api/shots.ts';
+import { type Take, takeContracts } from '../../../shared/api/takes.ts';
+import { can } from '../../../shared/policy/can.ts';
+import { Button } from '../../components/Button.tsx';
+import { ErrorNote } from '../../components/ErrorNote.tsx';
+import { PegBar } from '../../features/layers/PegBar.tsx';
+import { PictureStage } from '../../features/layers/PictureStage.tsx';
+import { FrameNumber, PlayControl } from '../../features/playhead/PlayControl.tsx';
+import { ReviewActions, whyNot } from '../../features/review/ReviewActions.tsx';
+import { TakeMenu } from '../../features/review/TakeMenu.tsx';
+import { Score } from '../../features/score/Score.tsx';
+import { sentenceOf } from '../../lib/ApiProblem.ts';
+import { call } from '../../lib/call.ts';
+import { useKeys } from '../../lib/keys.ts';
+import { paths } from '../../lib/paths.ts';
+import { createPlayhead } from '../../lib/playhead.ts';
+import { applyTake, readingOptions } from '../../lib/queries/take.ts';
+import { useActor } from '../../lib/queries/useActor.ts';
+import { HangingNotes } from './HangingNotes.tsx';
+import { DESK, GRID, STAGE } from './layout.ts';
+import { ObjectSwitch } from './ObjectSwitch.tsx';
+import { TakeHead } from './TakeHead.tsx';
+import { TakeMargin } from './TakeMargin.tsx';
+import { useFindings } from './useFindings.ts';
+import { frameOfAddress, useTakeAddress } from './useTakeAddress.ts';
+import { useThreads } from './useThreads.ts';
+
+interface TakeDeskProps {
+  slug: string;
+  take: Take;
+  /** The take's shot with its other takes; null while it is on its way. */
+  shot: ShotWithTakes | null;
+}
+
+/** The take page once its take is there. */
+export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
+  const actor = useActor(slug);
+  const client = useQueryClient();
+  const navigate = useNavigate();
+  const { firstFrame } = take;
+  const [playhead] = useState(() =>
+    createPlayhead(take.frames, frameOfAddress(new URLSearchParams(window.location.search), firstFrame) ?? 1),
+  );
+  const { layers, setLayers } = useTakeAddress(playhead, firstFrame);
+  const readingQuery = useQuery({ ...readingOptions(take.id), enabled: take.reading.status === 'read' });
+  const reading = (take.reading.status === 'read' && readingQuery.data) || null;
+  const findings = useFindings(reading, playhead);
+  const talk = useThreads(take, actor.person, playhead);
+  const readAgain = useMutation({
+    mutationFn: () => call(takeContracts.readAgain, { params: { takeId: take.id } }),
+    onSuccess: (answer) => applyTake(client, slug, answer),
+  });
+
+  const objectIds = useMemo(
+    () => (reading ? reading.objects.filter((object) => object.marks.length > 1).map((object) => object.id) : []),
+    [reading],
+  );
+  const [ownObject, setOwnObject] = useState<string | null>(null);
+  const objectId =
+    [ownObject, findings.findings[0]?.object ?? null].find((id) => id !== null && objectIds.includes(id)) ??
+    objectIds[0] ??
+    null;
+  const picture = useMemo(() => ({ width: take.width, height: take.height }), [take.width, take.height]);
+  const mayWrite = can(actor, 'note:write');
+  const startNote = () => mayWrite && talk.startNote(playhead.frame());
+
+  useKeys('Notes and findings', [
+    { key: 'n', says: 'Write a note on the chosen frame', shown: 'N', run: startNote },
+    { key: 'ArrowUp', says: 'Finding before', shown: '↑', shift: false, run: () => findings.step(-1) },
+    { key: 'ArrowDown', says: 'Next finding', shown: '↓', shift: false, run: () => findings.step(1) },
+    { key: 'ArrowUp', says: 'Note before', shown: 'Shift ↑', shift: true, run: () => talk.step(-1) },
+    { key: 'ArrowDown', says: 'Next note', shown: 'Shift ↓', shift: true, run: () => talk.step(1) },
+  ]);
+
+  const latest = Math.max(take.number, ...(shot?.takes.map((one) => one.number) ?? []));
+  return (
+    <div className={DESK}>
+      <TakeHead slug={slug} take={take} title={shot?.title ?? null} latest={latest} whyNot={whyNot(actor, take)}>
+        {mayWrite && (
+          <Button title="N" onClick={startNote}>
+            Write a note
+          </Button>
+        )}
+        <TakeMenu
+          slug={slug}
+          take={take}
+          actor={actor}
+          onReadAgain={() => readAgain.mutate()}
+          onMoved={(moved) => void navigate(paths.take(slug, moved.shotNumber, moved.number), { replace: true })}
+        />
+        <ReviewActions slug={slug} take={take} actor={actor} />
+      </TakeHead>
+      {readAgain.error && <ErrorNote className="mb-3">{sentenceOf(readAgain.error)}</ErrorNote>}
+      <div className={GRID}>
+        <TakeMargin
+          slug={slug}
+          take={take}
+          shot={shot}
+          actor={actor}
+          reading={reading}
+          error={readingQuery.error}
+          onRetry={() => void readingQuery.refetch()}
+          findings={findings}
+        />
+        <div className="order-1 min-w-0 lg:order-2">
+          <div className="overflow-hidden rounded-t-card border border-rule bg-sheet max-md:rounded-none max-md:border-x-0">
+            <PegBar layers={layers} onLayers={setLayers} hasReading={reading !== null}>
+              <ObjectSwitch ids={objectIds} chosen={objectId} onChoose={setOwnObject} />
+              <PlayControl takeId={take.id} fps={take.fps} playhead={playhead} />
+              <FrameNumber playhead={playhead} firstFrame={firstFrame} />
+            </PegBar>
+            <PictureStage
+              className={STAGE}
+              takeId={take.id}
+              firstFrame={firstFrame}
+              picture={picture}
+              reading={reading}
+              findings={findings.findings}
+              layers={layers}
+              playhead={playhead}
+              chosenFinding={findings.chosen}
+              onChooseFinding={findings.choose}
+              mend={findings.mend}
+            />
+          </div>
+          <Score
+            takeId={take.id}
+            firstFrame={firstFrame}
+            frames={take.frames}
+            missing={take.missingFrames}
+            playhead={playhead}
+            reading={reading}
+            objectId={objectId}
+            findings={findings.findings}
+            chosenFinding={findings.chosen}
+            onChooseFinding={findings.choose}
+            none="Nothing is off"
+            pins={talk.pins}
+            openPin={talk.openPin}
+            onOpenPin={talk.togglePin}
+            hanging={
+              talk.hanging && {
+                frame: talk.hanging.kind === 'thread' ? talk.hanging.thread.frame : talk.hanging.frame,
+                content: (
+                  <HangingNotes
+                    slug={slug}
+                    take={take}
+                    me={actor.person}
+                    mayWrite={mayWrite}
+                    playhead={playhead}
+                    hanging={talk.hanging}
+                    talk={talk}
+                  />
+                ),
+              }
+            }
+          />
+          {talk.query.error && (
+            <ErrorNote className="mt-3" action={<Button onClick={() => void talk.query.refetch()}>Try again</Button>}>
+              The notes did not arrive. {sentenceOf(talk.query.error)}
+            </ErrorNote>
+          )}
+        </div>
+      </div>
+      <div className="fixed inset-x-0 bottom-0 z-30 flex gap-2 border-t border-rule bg-sheet px-3.5 py-2.5 md:hidden">
+        {mayWrite && (
+          <Button className="flex-1 px-2" onClick={startNote}>
+            Write a note
+          </Button>
+        )}
+        <ReviewActions slug={slug} take={take} actor={actor} thumb />
+      </div>
+    </div>
+  );
+}

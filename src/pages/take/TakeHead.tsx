@@ -1,0 +1,46 @@
+import type { ReactNode } from 'react';
+import { Link } from 'react-router';
+import type { Take } from '../../../shared/api/takes.ts';
+import { StateChip } from '../../components/StateChip.tsx';
+import { TimeAgo } from '../../components/TimeAgo.tsx';
+import { fpsWords, holdWords } from '../../lib/fpsWords.ts';
+import { paths } from '../../lib/paths.ts';
+
+interface TakeHeadProps {
+  slug: string;
+  take: Take;
+  title: string | null;
+  /** Number of the shot's latest take. */
+  latest: number;
+  /** Why someone who reviews may not decide here. */
+  whyNot: string | null;
+  children: ReactNode;
+}
+
+/** Which take this is, what became of it, and what can be done with it. */
+export function TakeHead({ slug, take, title, latest, whyNot, children }: TakeHeadProps) {
+  const hold = take.hold === null ? '' : `, ${holdWords(take.hold)}`;
+  return (
+    <div className="mb-3 flex flex-wrap items-center gap-x-3.5 gap-y-1.5 max-md:px-3.5">
+      <title>{`${take.shotNumber} ${title ?? ''}, take ${take.number} · Spandrel`}</title>
+      <Link to={paths.sheet(slug)} className="font-mono text-sm text-graphite no-underline hover:underline">
+        {take.shotNumber}
+      </Link>
+      <h1 className="text-2xl max-md:order-first max-md:w-full max-md:text-[1.25rem]">{title ?? take.shotNumber}</h1>
+      <StateChip state={take.review} />
+      <span className="text-graphite">
+        Take {take.number} · {fpsWords(take.fps)}
+        {hold} · <TimeAgo at={take.postedAt} />
+      </span>
+      {latest > take.number && (
+        <Link to={paths.take(slug, take.shotNumber, latest)} className="font-semibold">
+          Take {latest} is newer
+        </Link>
+      )}
+      <div className="ml-auto flex flex-wrap items-center gap-2 max-md:hidden">
+        {whyNot && <span className="text-sm text-graphite">{whyNot}</span>}
+        {children}
+      </div>
+    </div>
+  );
+}
