@@ -1,5 +1,7 @@
+import { ontoPictures, ontoStage } from '../../shared/finding/cameraMove.ts';
 import type { AnalysisRequest, AnalysisResult, ReportProgress } from '../../shared/finding/types.ts';
 import { readMotion } from '../../shared/motion/read.ts';
+import type { Reading, ReadObject } from '../../shared/reading/document.ts';
 import { findInFrames } from './findInFrames.ts';
 
 /**
@@ -17,10 +19,25 @@ export async function analyseFrames(
   const { tracks, camera, cautions, width, height } = await findInFrames(request, report, signal);
   report({ done: 0, total, phase: 'reading' });
   const { id, kind, firstFrame, fps, hold, scale, tolerances } = request;
+  const onStage = tracks.map((track) => ({ ...track, marks: ontoStage(track.marks, camera) }));
   const reading = readMotion(
-    { id, kind, frames: total, width, height, firstFrame, fps, hold, scale, camera, tracks, cautions },
+    { id, kind, frames: total, width, height, firstFrame, fps, hold, scale, camera, tracks: onStage, cautions },
     { tolerances },
   );
   report({ done: total, total, phase: 'reading' });
-  return { reading };
+  return { reading: tracks.length === 0 ? withoutMotion(reading) : ontoPictures(reading) };
+}
+
+/** Nothing moved: the reading says so in its one object, and why in its cautions. */
+function withoutMotion(reading: Reading): Reading {
+  const nothing: ReadObject = {
+    id: 'A',
+    what: 'thing',
+    outcome: 'no-motion',
+    points: [],
+    marks: [],
+    contacts: [],
+    flights: [],
+  };
+  return { ...reading, objects: [nothing] };
 }

@@ -1,6 +1,7 @@
 import { basename } from 'node:path';
 import sharp from 'sharp';
 import type { Picture } from '../../shared/finding/types.ts';
+import { inspectPicture } from './inspect.ts';
 import { MAX_PIXELS } from './pictureLimits.ts';
 import { PictureError } from './PictureError.ts';
 
@@ -18,9 +19,10 @@ export async function decodePicture(path: string): Promise<Picture> {
       .toBuffer({ resolveWithObject: true });
     const bytes = new Uint8Array(data.buffer, data.byteOffset, data.byteLength);
     return { width: info.width, height: info.height, data: info.channels === 3 ? bytes : toRgb(bytes, info.channels) };
-  } catch (cause) {
-    if (cause instanceof PictureError) throw cause;
+  } catch {
     const name = basename(path);
+    // The inspection knows why: an empty file, a text file, a picture of the wrong kind.
+    await inspectPicture(path, name);
     throw new PictureError(name, 'damaged_picture', `“${name}” is damaged and cannot be read; export it again.`);
   }
 }

@@ -50,7 +50,7 @@ describe('the analysis pool', { timeout: 60_000 }, () => {
     await expect(pool.analyse(requestOf([framePaths[0], bad]), quiet)).rejects.toMatchObject({
       name: 'PictureError',
       file: 'notes.png',
-      code: 'damaged_picture',
+      code: 'not_a_picture',
     });
     await expect(pool.analyse(requestOf(framePaths), quiet)).resolves.toHaveProperty('reading');
   });
