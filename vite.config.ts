@@ -21,7 +21,7 @@ export default defineConfig({
         test: { name: 'outside', include: ['tests/outside/**/*.test.ts'], environment: 'node', testTimeout: 60_000 },
       },
       { extends: true, test: { name: 'ui', include: ['tests/ui/**/*.test.tsx'], environment: 'jsdom' } },
-      ...['api', 'live', 'security', 'faults'].map((name) => ({
+      ...['api', 'live', 'security'].map((name) => ({
         extends: true as const,
         test: {
           name,
@@ -33,6 +33,18 @@ export default defineConfig({
       {
         extends: true,
         test: {
+          name: 'faults',
+          include: ['tests/faults/**/*.test.ts'],
+          globalSetup: ['tests/support/database.global.ts'],
+          ...needsDatabase,
+          // These start whole servers and time them, so nothing else runs beside them.
+          fileParallelism: false,
+          sequence: { groupOrder: 1 },
+        },
+      },
+      {
+        extends: true,
+        test: {
           name: 'e2e',
           include: ['tests/e2e/**/*.test.ts'],
           globalSetup: ['tests/support/database.global.ts'],
@@ -40,6 +52,7 @@ export default defineConfig({
           testTimeout: 120_000,
           hookTimeout: 120_000,
           fileParallelism: false,
+          sequence: { groupOrder: 2 },
         },
       },
     ],

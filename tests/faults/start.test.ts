@@ -25,7 +25,7 @@ afterEach(async () => {
   await rm(dataDir, { recursive: true, force: true });
 });
 
-describe('npm start', () => {
+describe('npm start', { timeout: 120_000 }, () => {
   it('serves the page, ends with one Ctrl-C or two, leaves nothing running, and starts again', async () => {
     const first = start();
     expect(await pageAt(await first.ready)).toContain('<div id="root">');
