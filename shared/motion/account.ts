@@ -25,14 +25,14 @@ export interface Account {
 export type Fault =
   | { kind: 'shape'; name: ShapeName; span: number }
   | { kind: 'gravity'; span: number }
-  | { kind: 'held'; drawing: number; mode: 'inserted' | 'replaced' };
+  | { kind: 'held'; drawing: number };
 
 /** Noise per axis taken for granted while the marks say nothing else, px, and how many marks' worth of belief it has. */
 const PRIOR_NOISE = 0.2;
 const PRIOR_FREEDOM = 2;
 
 /** What each thing that an account assumes must gain, in squared units of noise. */
-const PRICE = { shape: 16, gravity: 11, held: 20, depth: 12 };
+const PRICE = { shape: 16, gravity: 9, held: 20, depth: 16 };
 const PARAMETER_PRICE = 5;
 
 /** Cost of a drawing that nothing explains: spread evenly over (60 px)², one in thirty. */
@@ -46,6 +46,8 @@ export interface Field {
   samples: Samples;
   drawings: readonly Drawing[];
   replicates: { sum: number; freedom: number };
+  /** Frames from one drawing to the next, as most are. */
+  step: number;
 }
 
 /** Fits one account, leaving out drawings that cost more than they are worth. */
@@ -156,7 +158,7 @@ function impossible(fit: PathFit, weight: Float64Array, field: Field): number {
     const down = (knots.y[k]! - knots.y[k - 1]!) / left + 0.5 * g * left;
     const up = (knots.y[k + 1]! - knots.y[k]!) / right - 0.5 * g * right;
     if (k === path.spans.length - 1 && drawingsAfter(field, weight, knots.t[k]!) < 2) count += 1;
-    else if (down - up < LEAST_KICK * g || (down < 0 && up > -g)) count += 1;
+    else if (down - up < LEAST_KICK * g * field.step || (down < 0 && up > -g)) count += 1;
   }
   return count;
 }

@@ -9,6 +9,7 @@ import {
   recast,
   restFirst,
   restLast,
+  rollFirst,
   sketchFrom,
   sketchOf,
   withoutKnot,
@@ -33,9 +34,13 @@ export function holdContest(field: Field, stretches: readonly Stretch[], lost: r
   const full = Float64Array.from(field.drawings, (drawing) => drawing.weight);
   const weight = Float64Array.from(full);
   for (const index of lost) weight[index] = 0;
-  let best = stretches.some((stretch) => stretch.kind === 'flight')
-    ? compete(sketchOf(field, stretches), weight, full, field)
-    : null;
+  let best: Contest | null = null;
+  if (stretches.some((stretch) => stretch.kind === 'flight')) {
+    for (const sketch of firstSketches(sketchOf(field, stretches), stretches, field)) {
+      const next = compete(sketch, weight, full, field);
+      if (!best || next.chosen.cost < best.chosen.cost) best = next;
+    }
+  }
   if (!best || isPoor(best.chosen, field)) {
     for (const [before, after] of [
       [0, 0],
@@ -52,13 +57,27 @@ export function holdContest(field: Field, stretches: readonly Stretch[], lost: r
   }
   if (!best) return null;
   for (let round = 0; round < 3; round += 1) {
-    const better = restructure(best.chosen, field, full);
+    let better: Account | null = null;
+    for (const account of best.accounts.slice(0, 3)) {
+      const next = restructure(account, field, full);
+      if (next && next.cost < (better ?? best.chosen).cost) better = next;
+    }
     if (!better) break;
     const next = compete(sketchFrom(better.fit.path, better.fit.theta, better.fit.knots), better.weight, full, field);
     if (next.chosen.cost >= best.chosen.cost) break;
     best = next;
   }
   return best;
+}
+
+/** The sketch as it is, and with the drawings that no stretch claims at either end taken for rest. */
+function firstSketches(sketch: Sketch, stretches: readonly Stretch[], field: Field): Sketch[] {
+  const before = stretches[0]!.from;
+  const after = field.drawings.length - 1 - stretches[stretches.length - 1]!.to;
+  const opened = before > 0 && before < 4 ? restFirst(sketch, before, field) : null;
+  const closed = after > 0 && after < 4 ? restLast(opened ?? sketch, after, field) : null;
+  const resting = closed ?? opened;
+  return resting ? [sketch, resting] : [sketch];
 }
 
 /** An account that leaves out much or fits badly: its structure may be wrong. */
@@ -79,9 +98,11 @@ function compete(sketch: Sketch, weight: Float64Array, full: Float64Array, field
   accounts.push(fitAccount(depth.path, depth.theta, null, true, clean.weight, field));
   for (const fault of possibleFaults(clean, field)) {
     const start = pathOf(base, fault, false, field, fault.kind === 'shape' ? { shape: SHAPE_STARTS[fault.name] } : {});
-    const begin = Float64Array.from(full);
-    if (fault.kind === 'held' && fault.mode === 'replaced') begin[fault.drawing] = 0;
-    accounts.push(fitAccount(start.path, start.theta, fault, false, begin, field));
+    accounts.push(fitAccount(start.path, start.theta, fault, false, full, field));
+    if (fault.kind === 'shape' && fault.name.startsWith('hang')) {
+      const long = pathOf(base, fault, false, field, { shape: 3.5 * field.step });
+      accounts.push(fitAccount(long.path, long.theta, fault, false, clean.weight, field));
+    }
     if (clean.left.length && fault.kind !== 'held') {
       accounts.push(fitAccount(start.path, start.theta, fault, false, clean.weight, field));
     }
@@ -130,6 +151,13 @@ function optionsFor(account: Account, field: Field): Option[] {
   for (const count of [1, 2, 3]) add(restFirst(sketch, count, field), (span) => span + 1);
   for (const count of [1, 2, 3]) add(restLast(sketch, count, field));
   for (const count of [2, 3, 4]) add(flightLast(sketch, count, field));
+  if (spans[0]!.kind === 'flight') {
+    for (const share of [0.15, 0.3, 0.45, 0.6, 0.75]) {
+      const rolled = rollFirst(sketch, share, field);
+      if (!rolled) continue;
+      options.push({ sketch: rolled, fault: null, depth: false }, { sketch: rolled, fault: null, depth: true });
+    }
+  }
   if (last > 0) {
     if (spans[0]!.kind === 'flight') add(recast(sketch, 0, 'rest', false));
     if (spans[last]!.kind === 'flight') add(recast(sketch, last, 'rest', false));
@@ -192,7 +220,7 @@ function possibleFaults(clean: Account, field: Field): Fault[] {
   for (let i = 1; i < steps.length; i += 1) {
     const around = Math.max(steps[i - 1] ?? 0, steps[i + 1] ?? 0);
     if (isFlightAt(clean, field.samples.t[i]!) && steps[i]! < 0.35 * around && around > 3 * Math.sqrt(clean.noise2)) {
-      faults.push({ kind: 'held', drawing: i, mode: 'inserted' }, { kind: 'held', drawing: i, mode: 'replaced' });
+      faults.push({ kind: 'held', drawing: i });
     }
   }
   return faults;

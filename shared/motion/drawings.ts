@@ -11,6 +11,8 @@ export interface Drawing {
   /** Last frame that shows it. */
   last: number;
   marks: Mark[];
+  /** True where its marks disagree far beyond noise and one of them was taken. */
+  disputed?: boolean;
 }
 
 /** Marks of a track in order of frames: one a frame (the later one wins), only finite ones. */
@@ -51,7 +53,78 @@ export function gatherDrawings(
     else drawings.push({ t: first, x: 0, y: 0, weight: 0, last, marks: [mark] });
   }
   for (const drawing of drawings) placeDrawing(drawing);
+  settleDisputes(drawings);
   return drawings;
+}
+
+/** Marks of one drawing that disagree far beyond the others' noise: the one nearer to the drawings around it stands. */
+function settleDisputes(drawings: Drawing[]): void {
+  const { sum, freedom } = replicateNoise(drawings);
+  const limit = Math.max(4, 7 * Math.sqrt(sum / Math.max(1, freedom)));
+  drawings.forEach((drawing, i) => {
+    const [first, ...others] = drawing.marks;
+    if (!first || !others.some((mark) => Math.hypot(mark.x - first.x, mark.y - first.y) > limit)) return;
+    const around = [drawings[i - 1], drawings[i + 1]].filter((one) => one !== undefined);
+    if (!around.length) return;
+    const x = around.reduce((total, one) => total + one.x, 0) / around.length;
+    const y = around.reduce((total, one) => total + one.y, 0) / around.length;
+    const distance = (mark: Mark) => Math.hypot(mark.x - x, mark.y - y);
+    const trusted = drawing.marks.reduce((best, mark) => (distance(mark) < distance(best) ? mark : best));
+    drawing.x = trusted.x;
+    drawing.y = trusted.y;
+    drawing.weight = 1;
+    drawing.disputed = true;
+  });
+}
+
+/**
+ * Drawings that stand out from the drawings around them: without them the path nearby is smooth, with them it is not.
+ * Corners at contacts stay rough whichever drawing is taken out, so they are no suspects. `noise` is px per axis.
+ */
+export function suspects(drawings: readonly Drawing[], noise: number): number[] {
+  const kept = drawings.map((_, i) => i);
+  const out: number[] = [];
+  const least = Math.max(6, 5 * noise);
+  for (let round = 0; round < 1 + Math.floor(drawings.length / 7); round += 1) {
+    let best = -1;
+    let most = 8;
+    for (let k = 0; k < kept.length; k += 1) {
+      const window = kept.slice(Math.max(0, k - 4), k + 5);
+      if (window.length < 6) continue;
+      const without = window.filter((i) => i !== kept[k]);
+      const rough = roughness(drawings, window);
+      const smooth = roughness(drawings, without);
+      const gain = rough / (smooth + 2 * without.length * noise * noise);
+      if (gain > most && Math.sqrt(rough) > least) {
+        most = gain;
+        best = k;
+      }
+    }
+    if (best < 0) break;
+    out.push(kept[best]!);
+    kept.splice(best, 1);
+  }
+  return out;
+}
+
+/** Sum of squared third differences of a run of drawings, each scaled to the noise of one drawing, px². */
+function roughness(drawings: readonly Drawing[], run: readonly number[]): number {
+  let sum = 0;
+  for (let k = 3; k < run.length; k += 1) {
+    const [a, b, c, d] = [drawings[run[k - 3]!]!, drawings[run[k - 2]!]!, drawings[run[k - 1]!]!, drawings[run[k]!]!];
+    sum += thirdDifference(a, b, c, d, 'x') ** 2 + thirdDifference(a, b, c, d, 'y') ** 2;
+  }
+  return sum;
+}
+
+/** Third difference over unequal times, scaled so that noise of 1 px per drawing gives 1 px. */
+export function thirdDifference(a: Drawing, b: Drawing, c: Drawing, d: Drawing, axis: 'x' | 'y'): number {
+  const wa = 1 / ((a.t - b.t) * (a.t - c.t) * (a.t - d.t));
+  const wb = 1 / ((b.t - a.t) * (b.t - c.t) * (b.t - d.t));
+  const wc = 1 / ((c.t - a.t) * (c.t - b.t) * (c.t - d.t));
+  const wd = 1 / ((d.t - a.t) * (d.t - b.t) * (d.t - c.t));
+  const norm = Math.sqrt(wa * wa + wb * wb + wc * wc + wd * wd);
+  return (wa * a[axis] + wb * b[axis] + wc * c[axis] + wd * d[axis]) / norm;
 }
 
 function placeDrawing(drawing: Drawing): void {

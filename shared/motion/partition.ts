@@ -1,4 +1,5 @@
 import type { Drawing } from './drawings.ts';
+import { thirdDifference } from './drawings.ts';
 
 /** A run of drawings that one simple motion explains: still, along a line, or a parabola. `lost` is one drawing off everything. */
 export interface Piece {
@@ -123,17 +124,8 @@ export function roughNoise(drawings: readonly Drawing[]): number {
   const values: number[] = [];
   for (let i = 3; i < drawings.length; i += 1) {
     const [a, b, c, d] = [drawings[i - 3]!, drawings[i - 2]!, drawings[i - 1]!, drawings[i]!];
-    const span = d.t - a.t;
-    if (span > 4 * (b.t - a.t)) continue;
-    const wa = 1 / ((a.t - b.t) * (a.t - c.t) * (a.t - d.t));
-    const wb = 1 / ((b.t - a.t) * (b.t - c.t) * (b.t - d.t));
-    const wc = 1 / ((c.t - a.t) * (c.t - b.t) * (c.t - d.t));
-    const wd = 1 / ((d.t - a.t) * (d.t - b.t) * (d.t - c.t));
-    const norm = Math.sqrt(wa * wa + wb * wb + wc * wc + wd * wd);
-    values.push(
-      Math.abs(wa * a.x + wb * b.x + wc * c.x + wd * d.x) / norm,
-      Math.abs(wa * a.y + wb * b.y + wc * c.y + wd * d.y) / norm,
-    );
+    if (d.t - a.t > 4 * (b.t - a.t)) continue;
+    values.push(Math.abs(thirdDifference(a, b, c, d, 'x')), Math.abs(thirdDifference(a, b, c, d, 'y')));
   }
   if (values.length < 4) return 0.5;
   values.sort((p, q) => p - q);

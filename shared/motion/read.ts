@@ -2,13 +2,13 @@ import type { Finding, Flight, Hold, Reading, ReadObject } from '../reading/docu
 import { READING_FORMAT } from '../reading/document.ts';
 import { DEFAULT_TOLERANCES } from '../reading/tolerances.ts';
 import { holdContest } from './choose.ts';
-import { gatherDrawings, orderedMarks, replicateNoise } from './drawings.ts';
+import { gatherDrawings, orderedMarks, replicateNoise, suspects } from './drawings.ts';
 import { ENGINE_VERSION } from './engine.ts';
 import { FINDING_RULES } from './findings/table.ts';
 import { covariance } from './fit.ts';
 import { describeFlight } from './flight.ts';
 import type { HoldPattern } from './hold.ts';
-import { exposureOf, findHold, findPhase } from './hold.ts';
+import { exposureOf, findHold, findPhase, quantile } from './hold.ts';
 import { chartOf, mendOf } from './mend.ts';
 import { partition, roughNoise } from './partition.ts';
 import { stretchesOf } from './spans.ts';
@@ -97,11 +97,20 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
   const reach = Math.hypot(spread(local.map((d) => d.x)), spread(local.map((d) => d.y)));
   if (reach < 6 * noise) return nothing('no-motion', `${track.id} does not move.`);
 
-  const pieces = partition(local, noise);
-  const stretches = stretchesOf(local, pieces, noise);
+  const odd = suspects(local, noise);
+  const trusted = local.map((_, i) => i).filter((i) => !odd.includes(i));
+  const pieces = partition(
+    trusted.map((i) => local[i]!),
+    noise,
+  ).map((piece) => ({ ...piece, from: trusted[piece.from]!, to: trusted[piece.to]! }));
+  const stretches = stretchesOf(local, pieces, noise, odd);
   const field = {
     drawings: local,
     replicates,
+    step: quantile(
+      local.slice(1).map((d, i) => d.t - local[i]!.t),
+      0.5,
+    ),
     samples: {
       t: Float64Array.from(local, (d) => d.t),
       x: Float64Array.from(local, (d) => d.x),
@@ -109,7 +118,7 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
       weight: Float64Array.from(local, (d) => d.weight),
     },
   };
-  const lost = pieces.filter((piece) => piece.kind === 'lost').map((piece) => piece.from);
+  const lost = [...odd, ...pieces.filter((piece) => piece.kind === 'lost').map((piece) => piece.from)];
   const contest = holdContest(field, stretches, lost);
   if (!contest || !contest.chosen.fit.path.spans.some((span) => span.kind === 'flight')) {
     return nothing('not-in-flight', `${track.id} rests, rolls or is carried; nothing in it flies.`);

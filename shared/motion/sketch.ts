@@ -79,7 +79,7 @@ export function pathOf(
       ? { name: fault.name, span: fault.span, parameters: 1, openStart: fault.span === 0, openEnd: fault.span === last }
       : null;
   const { drawings, samples } = field;
-  const inserted = fault?.kind === 'held' && fault.mode === 'inserted' ? fault.drawing : -1;
+  const inserted = fault?.kind === 'held' ? fault.drawing : -1;
   const delay = inserted > 0 ? drawings[inserted]!.t - drawings[inserted - 1]!.t : 0;
   const path = layOut(
     spans,
@@ -147,6 +147,26 @@ export function withoutKnot(sketch: Sketch, knot: number): Sketch {
   const before = sketch.spans[knot - 1]!;
   spans[knot - 1] = { kind: 'flight', tangent: before.kind === 'flight' && before.tangent, gravity: 0 };
   return { ...sketch, spans, knots: { t: drop(sketch.knots.t), x: drop(sketch.knots.x), y: drop(sketch.knots.y) } };
+}
+
+/** The same sketch with its first flight rolling level until `share` of it is over, then falling. */
+export function rollFirst(sketch: Sketch, share: number, field: Field): Sketch | null {
+  if (sketch.spans[0]?.kind !== 'flight') return null;
+  const { t, x, y } = sketch.knots;
+  const time = t[0]! + share * (t[1]! - t[0]!);
+  const near = field.drawings.reduce((best, one) => (Math.abs(one.t - time) < Math.abs(best.t - time) ? one : best));
+  const put = (values: Float64Array, outer: number, inner: number) =>
+    Float64Array.from([outer, inner, ...values.slice(1)]);
+  const first = field.drawings[0]!;
+  return {
+    ...sketch,
+    spans: [
+      { kind: 'roll', tangent: false, gravity: 0 },
+      { kind: 'flight', tangent: true, gravity: 0 },
+      ...sketch.spans.slice(1),
+    ],
+    knots: { t: put(t, t[0]!, time), x: put(x, first.x, near.x), y: put(y, first.y, near.y) },
+  };
 }
 
 /** The same sketch with its first or last flight (a short one) taken for rest, or a let-go taken for a push, and the other way. */

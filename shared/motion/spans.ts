@@ -36,8 +36,13 @@ const speedAt = (fit: PolynomialFit, t: number): number => {
  * Joins pieces to stretches. Contacts push up and nothing else does: a cut where the speed jumps upwards is a contact, a cut
  * without such a jump lies inside one flight, however its spacing is drawn.
  */
-export function stretchesOf(drawings: readonly Drawing[], pieces: readonly Piece[], noise: number): Stretch[] {
-  const motions = pieces.filter((piece) => piece.kind !== 'lost').map((piece) => motionOf(drawings, piece));
+export function stretchesOf(
+  drawings: readonly Drawing[],
+  pieces: readonly Piece[],
+  noise: number,
+  suspects: readonly number[] = [],
+): Stretch[] {
+  const motions = pieces.filter((piece) => piece.kind !== 'lost').map((piece) => motionOf(drawings, piece, suspects));
   const kick = LEAST_KICK * typicalBend(motions) * typicalStep(drawings);
   const out: Stretch[] = [];
   motions.forEach((motion, index) => {
@@ -93,8 +98,8 @@ function typicalStep(drawings: readonly Drawing[]): number {
   return steps[Math.floor(steps.length / 2)] ?? 1;
 }
 
-function motionOf(drawings: readonly Drawing[], piece: Piece): Motion {
-  const part = drawings.slice(piece.from, piece.to + 1);
+function motionOf(drawings: readonly Drawing[], piece: Piece, suspects: readonly number[]): Motion {
+  const part = drawings.slice(piece.from, piece.to + 1).filter((_, i) => !suspects.includes(piece.from + i));
   const times = part.map((d) => d.t);
   const flat = piece.kind === 'rest';
   const x = straight(part, 'x', flat);
@@ -168,13 +173,23 @@ function cutBetween(
   const vb = b.kind === 'rest' ? 0 : speedAt(b.first.y, t);
   const jump = vb - va;
   const error = 3 * noise * Math.hypot(a.last.speedError, b.first.speedError);
-  const upward = jump < -error && -jump > 0.3 * (Math.abs(va) + Math.abs(vb)) && -jump > kick;
+  const turned = secant(b, drawings, 'start') - secant(a, drawings, 'end');
+  const upward = turned < -0.5 * kick && jump < -error && -jump > 0.3 * (Math.abs(va) + Math.abs(vb)) && -jump > kick;
   if (upward) return 'contact';
   if (a.kind !== b.kind) {
     if (b.kind === 'flight') return 'let-go';
     return a.kind === 'flight' && b.kind === 'rest' && a.to - a.from < 2 ? 'none' : 'contact';
   }
   return 'none';
+}
+
+/** Mean speed down over the two steps nearest to one end of a stretch, px/frame: not misled by a bent little piece. */
+function secant(stretch: Stretch, drawings: readonly Drawing[], end: 'start' | 'end'): number {
+  const { piece } = end === 'start' ? stretch.first : stretch.last;
+  if (piece.kind === 'rest') return 0;
+  const reach = Math.min(2, piece.to - piece.from);
+  const [a, b] = end === 'start' ? [piece.from, piece.from + reach] : [piece.to - reach, piece.to];
+  return (drawings[b]!.y - drawings[a]!.y) / Math.max(1, drawings[b]!.t - drawings[a]!.t);
 }
 
 /** First guess of the moment at which two stretches meet: where their heights cross between their nearest drawings. */

@@ -1,7 +1,8 @@
 import { digits, percent } from '../words.ts';
 import { shownAt } from '../view.ts';
+import type { TrackView } from '../view.ts';
 import type { Draft, FindingRule } from './rule.ts';
-import { severityOf } from './rule.ts';
+import { isRepeat, severityOf } from './rule.ts';
 
 /** One drawing sits off the arc the others agree on. */
 export const pop: FindingRule = {
@@ -10,10 +11,9 @@ export const pop: FindingRule = {
     const { account, field, tolerances } = view;
     const { xs, ys } = account.fit;
     const { samples } = field;
-    const held = account.fault?.kind === 'held' ? account.fault.drawing : -1;
     const out: Draft[] = [];
     for (const i of account.left) {
-      if (i === held) continue;
+      if (isRepeat(view, i) || mayBeContact(view, i)) continue;
       const t = samples.t[i]!;
       const flight = view.flights.find((one) => one.start <= t && t <= one.end);
       if (!flight) continue;
@@ -43,6 +43,14 @@ export const pop: FindingRule = {
     return out;
   },
 };
+
+/** The last (or first) drawing alone beyond a possible contact: it lies higher than the arc, as after a bounce or a landing. */
+function mayBeContact(view: TrackView, drawing: number): boolean {
+  const { samples } = view.field;
+  const { ys } = view.account.fit;
+  const outer = drawing === 0 || drawing === ys.length - 1;
+  return outer && samples.y[drawing]! < ys[drawing]!;
+}
 
 function direction(dx: number, dy: number): string {
   const parts: string[] = [];

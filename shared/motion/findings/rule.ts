@@ -46,3 +46,16 @@ export function shapeOn(
     : Infinity;
   return { value: fit.theta[at]!, error };
 }
+
+/** Whether a drawing that lies off the arc is the drawing before it once more, within noise and well short of a step. */
+export function isRepeat(view: TrackView, drawing: number): boolean {
+  const { samples } = view.field;
+  const { xs, ys } = view.account.fit;
+  if (drawing === 0) return false;
+  const moved = Math.hypot(
+    samples.x[drawing]! - samples.x[drawing - 1]!,
+    samples.y[drawing]! - samples.y[drawing - 1]!,
+  );
+  const due = Math.hypot(xs[drawing]! - xs[drawing - 1]!, ys[drawing]! - ys[drawing - 1]!);
+  return moved < Math.max(0.5, Math.min(4.5 * Math.sqrt(view.account.noise2), 0.3 * due)) && due > 2 * moved;
+}
