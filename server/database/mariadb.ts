@@ -2,11 +2,11 @@ import { mkdir, readFile, rm, writeFile } from 'node:fs/promises';
 import path from 'node:path';
 import { createConnection } from 'mysql2/promise';
 import type { DatabaseConnection } from '../env.ts';
-import { probePort } from './free-port.ts';
-import { installDatabaseFolder, userFlags } from './mariadb-install.ts';
-import { launchMariadb, type MariadbProcess } from './mariadb-process.ts';
-import { commandLineOf, goneWithin } from './process-table.ts';
-import { StartupError, writeFault } from './startup-error.ts';
+import { probePort } from './freePort.ts';
+import { installDatabaseFolder, userFlags } from './mariadbInstall.ts';
+import { launchMariadb, type MariadbProcess } from './mariadbProcess.ts';
+import { commandLineOf, goneWithin } from './processTable.ts';
+import { StartupError, writeFault } from './startupError.ts';
 
 const portAttempts = 4;
 const orphanPatience = 30_000;

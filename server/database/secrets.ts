@@ -2,7 +2,7 @@ import { randomBytes } from 'node:crypto';
 import { readFile, rename, rm, writeFile } from 'node:fs/promises';
 import path from 'node:path';
 import { z } from 'zod';
-import { StartupError } from './startup-error.ts';
+import { StartupError } from './startupError.ts';
 
 const secretsSchema = z.object({
   databasePassword: z.string().regex(/^[\w-]{32,}$/),

@@ -1,3 +1,3 @@
 import { boot } from './start/boot.mjs';
 
-await boot('prove/prove-start.ts');
+await boot('prove/proveStart.ts');

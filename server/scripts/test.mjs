@@ -1,3 +1,3 @@
 import { boot } from './start/boot.mjs';
 
-await boot('test/run-all.ts');
+await boot('test/runAll.ts');

@@ -15,7 +15,7 @@ import { DEMO_PEOPLE } from '../../server/scripts/demo/people.ts';
 import { hashPassword } from '../../server/services/session.service.ts';
 import { EVENTS_OF_STORY, type SeedDeps, seedDemo } from '../../server/scripts/demo/seed.ts';
 import { DEMO_STRIPS, type DemoStripId } from '../../server/scripts/demo/strips.ts';
-import { createTestDatabase, type TestDatabase } from '../support/test-database.ts';
+import { createTestDatabase, type TestDatabase } from '../support/testDatabase.ts';
 
 let analysis: AnalysisPool;
 let dataDir: string;

@@ -5,8 +5,8 @@ import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { afterEach, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { leftRunning, processesNaming } from '../../server/scripts/prove/processes.ts';
-import { endAll, startSpandrel } from '../../server/scripts/prove/start-process.ts';
-import { ensureClientBuilt } from '../../server/scripts/start/client-build.ts';
+import { endAll, startSpandrel } from '../../server/scripts/prove/startProcess.ts';
+import { ensureClientBuilt } from '../../server/scripts/start/clientBuild.ts';
 
 const root = path.resolve(import.meta.dirname, '../..');
 let dataDir: string;

@@ -7,7 +7,7 @@ import type { DatabaseConnection } from '../../server/env.ts';
 
 declare module 'vitest' {
   interface ProvidedContext {
-    /** The real MariaDB all tests share; each file makes databases of its own in it, see support/test-database.ts. */
+    /** The real MariaDB all tests share; each file makes databases of its own in it, see support/testDatabase.ts. */
     mariadb: DatabaseConnection;
   }
 }

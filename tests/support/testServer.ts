@@ -2,7 +2,7 @@ import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { type RunningServer, type StartOptions, startServer } from '../../server/main.ts';
-import { createTestDatabase, type TestDatabase } from './test-database.ts';
+import { createTestDatabase, type TestDatabase } from './testDatabase.ts';
 
 /** The real server on a port of its own, with a database and a data folder of its own. */
 export interface TestServer extends RunningServer {

@@ -1,13 +1,13 @@
 import path from 'node:path';
 import { createServer } from 'vite';
-import { probePort } from '../../database/free-port.ts';
-import { spawnGuarded } from '../../database/guarded-child.ts';
+import { probePort } from '../../database/freePort.ts';
+import { spawnGuarded } from '../../database/guardedChild.ts';
 import { startMariadb } from '../../database/mariadb.ts';
 import { readOrMakeSecrets } from '../../database/secrets.ts';
 import { readEnv } from '../../env.ts';
 import { checkAddress } from '../start/address.ts';
 import { createCleanup } from '../start/cleanup.ts';
-import { takeDataFolder } from '../start/data-folder.ts';
+import { takeDataFolder } from '../start/dataFolder.ts';
 import { ensurePrograms, ffmpeg, mariadb } from '../start/debian.ts';
 
 /** The database, the server restarting on every change, and the client with hot reload; one Ctrl-C ends all three. */

@@ -1,5 +1,5 @@
-import { probePort } from '../../database/free-port.ts';
-import { StartupError } from '../../database/startup-error.ts';
+import { probePort } from '../../database/freePort.ts';
+import { StartupError } from '../../database/startupError.ts';
 
 /**
  * Checks that the server will be able to listen, before anything is started for it.

@@ -1,11 +1,11 @@
 import { startMariadb } from '../../database/mariadb.ts';
 import { readOrMakeSecrets } from '../../database/secrets.ts';
-import { StartupError } from '../../database/startup-error.ts';
+import { StartupError } from '../../database/startupError.ts';
 import { type DatabaseConnection, databaseOf, type Env, readEnv } from '../../env.ts';
 import { checkAddress, listenFault } from './address.ts';
 import { type Cleanup, createCleanup } from './cleanup.ts';
-import { ensureClientBuilt } from './client-build.ts';
-import { takeDataFolder } from './data-folder.ts';
+import { ensureClientBuilt } from './clientBuild.ts';
+import { takeDataFolder } from './dataFolder.ts';
 import { ensurePrograms, ffmpeg, mariadb } from './debian.ts';
 import { closeWithin, greet } from './serve.ts';
 

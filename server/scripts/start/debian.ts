@@ -1,6 +1,6 @@
 import { spawn } from 'node:child_process';
 import { findProgram } from '../../database/programs.ts';
-import { StartupError } from '../../database/startup-error.ts';
+import { StartupError } from '../../database/startupError.ts';
 
 /** A program Spandrel calls, and the Debian packages that bring it. */
 interface Program {

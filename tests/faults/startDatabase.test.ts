@@ -8,7 +8,7 @@ import { createConnection } from 'mysql2/promise';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { startMariadb } from '../../server/database/mariadb.ts';
 import { readOrMakeSecrets } from '../../server/database/secrets.ts';
-import { createTestDatabase } from '../support/test-database.ts';
+import { createTestDatabase } from '../support/testDatabase.ts';
 
 const password = randomBytes(24).toString('base64url');
 let folder: string;

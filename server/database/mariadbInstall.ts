@@ -3,7 +3,7 @@ import { readdir, rename, rm } from 'node:fs/promises';
 import { userInfo } from 'node:os';
 import path from 'node:path';
 import { findProgram } from './programs.ts';
-import { StartupError, writeFault } from './startup-error.ts';
+import { StartupError, writeFault } from './startupError.ts';
 
 /** MariaDB refuses to run as root unless it is told that root is meant; any other user must not name one. */
 export function userFlags(): string[] {

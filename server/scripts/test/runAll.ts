@@ -1,5 +1,5 @@
 import viteConfig from '../../../vite.config.ts';
-import { ensureClientBuilt } from '../start/client-build.ts';
+import { ensureClientBuilt } from '../start/clientBuild.ts';
 import { chromium, ensurePrograms, ffmpeg, mariadb } from '../start/debian.ts';
 import { conclude, runChecks, total } from './checks.ts';
 import { runTests } from './vitest.ts';

@@ -1,9 +1,9 @@
 import { createWriteStream, renameSync, statSync } from 'node:fs';
 import path from 'node:path';
 import { createInterface } from 'node:readline';
-import { spawnGuarded } from './guarded-child.ts';
+import { spawnGuarded } from './guardedChild.ts';
 import { findProgram } from './programs.ts';
-import { StartupError, writeFault } from './startup-error.ts';
+import { StartupError, writeFault } from './startupError.ts';
 
 const secondsToComeUp = 120;
 const secondsToStop = 30;

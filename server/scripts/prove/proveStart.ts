@@ -4,7 +4,7 @@ import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { promisify } from 'node:util';
 import { leftRunning } from './processes.ts';
-import { endAll, type StartProcess, startSpandrel } from './start-process.ts';
+import { endAll, type StartProcess, startSpandrel } from './startProcess.ts';
 
 const secondStartWithin = 3;
 

@@ -2,7 +2,7 @@ import { spawn } from 'node:child_process';
 import { createHash } from 'node:crypto';
 import { readdir, readFile, rename, rm, writeFile } from 'node:fs/promises';
 import path from 'node:path';
-import { StartupError, writeFault } from '../../database/startup-error.ts';
+import { StartupError, writeFault } from '../../database/startupError.ts';
 
 const sources = ['index.html', 'package-lock.json', 'public', 'shared', 'src', 'tsconfig.json', 'vite.config.ts'];
 

@@ -1,8 +1,8 @@
 import { randomUUID } from 'node:crypto';
 import { link, mkdir, readFile, rename, rm, statfs, writeFile } from 'node:fs/promises';
 import path from 'node:path';
-import { startTimeOf } from '../../database/process-table.ts';
-import { StartupError, writeFault } from '../../database/startup-error.ts';
+import { startTimeOf } from '../../database/processTable.ts';
+import { StartupError, writeFault } from '../../database/startupError.ts';
 
 const leastFreeBytes = 300 * 1024 * 1024;
 
