@@ -20,7 +20,7 @@ export function AppFrame() {
     <>
       <a
         href="#main"
-        className="fixed top-2 left-2 z-50 -translate-y-20 rounded-control bg-ink px-3 py-2 font-semibold text-sheet focus:translate-y-0"
+        className="fixed top-2 left-2 z-50 -translate-y-20 flex min-h-11 items-center rounded-control bg-ink px-3 font-semibold no-underline text-sheet focus:translate-y-0"
       >
         Skip to the page
       </a>

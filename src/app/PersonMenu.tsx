@@ -57,7 +57,7 @@ export function PersonMenu({ person, places }: PersonMenuProps) {
   return (
     <>
       <Menu
-        label={`${person.name}: menu`}
+        label={`${person.initials}, ${person.name}: menu`}
         align="end"
         className="inline-grid min-h-9 min-w-9 place-items-center rounded-control hover:bg-well touch:min-h-11 touch:min-w-11"
         items={[

@@ -15,13 +15,22 @@ export function Select({ label, hint, error, className, fieldClassName, id, ...r
   const fieldId = id ?? own;
   return (
     <FieldFrame id={fieldId} label={label} hint={hint} error={error} className={className}>
-      <select
-        {...rest}
-        id={fieldId}
-        aria-invalid={error ? true : undefined}
-        aria-describedby={describedBy(fieldId, hint, error)}
-        className={clsx(FIELD_CLASS, fieldClassName)}
-      />
+      <div className="relative">
+        <select
+          {...rest}
+          id={fieldId}
+          aria-invalid={error ? true : undefined}
+          aria-describedby={describedBy(fieldId, hint, error)}
+          className={clsx(FIELD_CLASS, 'appearance-none pr-8', fieldClassName)}
+        />
+        <svg
+          viewBox="0 0 20 20"
+          className="pencil pointer-events-none absolute top-1/2 right-2.5 size-4 -translate-y-1/2"
+          aria-hidden="true"
+        >
+          <path d="M4.5 7.5C6.5 9.5 8 11 10 13c2-2 3.5-3.5 5.5-5.5" />
+        </svg>
+      </div>
     </FieldFrame>
   );
 }

@@ -25,7 +25,7 @@ export function SketchLane({ sketch, className }: { sketch: Sketch; className?: 
   const words = lane === 'up' ? 'up and down, px a frame' : 'across, px a frame';
 
   return (
-    <figure className={clsx('m-0', className)}>
+    <figure className={clsx('m-0 max-w-68', className)}>
       <svg viewBox={`0 0 ${WIDTH} ${HEIGHT}`} className="block w-full" aria-hidden="true">
         <path d={`M0 ${zero}H${WIDTH}`} className="stroke-rule" strokeWidth="1" />
         {steps.map((step) => (

@@ -17,7 +17,7 @@ export function Tabs({ label, tabs, className }: { label: string; tabs: TabLink[
           to={tab.to}
           aria-current={tab.current ? 'page' : undefined}
           className={clsx(
-            'inline-flex min-h-8 items-center rounded-control px-2.5 font-semibold whitespace-nowrap no-underline touch:min-h-11',
+            'inline-flex min-h-8 items-center rounded-control px-2.5 font-semibold max-sm:px-2 max-sm:text-sm whitespace-nowrap no-underline touch:min-h-11',
             tab.current ? 'bg-well text-ink' : 'text-graphite hover:text-ink',
           )}
         >

@@ -41,7 +41,7 @@ export function FeedPage() {
   const address = (one: FeedFilter) => (one === 'everything' ? paths.feed(slug) : `${paths.feed(slug)}?show=${one}`);
 
   return (
-    <div className="mx-auto max-w-[80rem] px-3.5 py-3.5 lg:px-7">
+    <div className="mx-auto max-w-[90rem] px-3.5 py-3.5 lg:px-7">
       <PageHead title="Feed">
         <Tabs
           label="Which takes"

@@ -7,7 +7,7 @@ export function PeoplePage() {
   const slug = useParams().slug!;
   const actor = useActor(slug);
   return (
-    <div className="mx-auto max-w-[70rem] px-3.5 py-3.5 lg:px-7">
+    <div className="mx-auto max-w-[90rem] px-3.5 py-3.5 lg:px-7">
       <PageHead title="People">
         <span className="text-graphite">who is on this production, and what each of them does here</span>
       </PageHead>

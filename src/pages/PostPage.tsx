@@ -13,7 +13,7 @@ export function loader({ params, context }: LoaderFunctionArgs) {
 export function PostPage() {
   const slug = useParams().slug!;
   return (
-    <div className="mx-auto max-w-[80rem] px-3.5 py-3.5 lg:px-7">
+    <div className="mx-auto max-w-[90rem] px-3.5 py-3.5 lg:px-7">
       <PageHead title="Post a strip">
         <span className="text-graphite">nobody sees it until you post it</span>
       </PageHead>

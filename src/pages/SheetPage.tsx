@@ -16,7 +16,7 @@ export function SheetPage() {
   const { data } = useQuery(sheetOptions(slug));
   const count = data?.shots.length ?? 0;
   return (
-    <div className="mx-auto max-w-[82.5rem] px-3.5 py-3.5 lg:px-7">
+    <div className="mx-auto max-w-[90rem] px-3.5 py-3.5 lg:px-7">
       <PageHead title="Shot sheet">
         {count > 0 && (
           <span className="text-graphite">

@@ -33,45 +33,37 @@ export function FeedCardView({ slug, card, stamps }: FeedCardViewProps) {
         <div className="min-w-0 flex-1">
           <p>
             <b className="font-semibold">{poster.name}</b>{' '}
-            <span className="text-xs text-graphite">
+            <span className="text-xs whitespace-nowrap text-graphite">
               {poster.role} · <TimeAgo at={take.postedAt} />
             </span>
           </p>
           <h2 id={`card-${take.id}`} className="text-base leading-snug font-normal">
-            <Link to={address} className="no-underline hover:underline">
+            <Link to={address} className="inline-block no-underline hover:underline touch:-my-2.75 touch:py-2.75">
               <span className="mr-1 font-mono text-graphite">{take.shotNumber}</span>{' '}
               <span className="text-[1rem] font-bold">{shotTitle}</span>
             </Link>
           </h2>
         </div>
-        <div className="flex items-center gap-3">
+        <div className="flex items-center gap-3 max-sm:w-full max-sm:pl-9.5">
           <span className="text-graphite">Take {take.number}</span>
           <StateChip state={take.review} />
         </div>
       </header>
       <div className="grid border-t border-rule md:grid-cols-[16.875rem_minmax(0,1fr)]">
-        <CardReading take={take} className="px-4.5 py-3 md:border-r md:border-rule" />
+        <CardReading
+          take={take}
+          className="px-4.5 py-3 max-md:border-t max-md:border-rule md:border-r md:border-rule"
+        />
         <Link
           to={address}
           tabIndex={-1}
           aria-hidden="true"
-          className="flex items-center justify-center bg-surround max-md:border-t max-md:border-rule"
+          className="block h-56 bg-surround max-md:order-first md:h-full md:min-h-68 xl:min-h-76"
         >
           {sketch ? (
-            <SketchPicture
-              sketch={sketch}
-              src={pictureUrl(take.id, 1)}
-              className="flex max-h-80 w-full justify-center [&>div]:max-h-80"
-            />
+            <SketchPicture sketch={sketch} src={pictureUrl(take.id, 1)} className="size-full" />
           ) : (
-            <img
-              src={pictureUrl(take.id, 1)}
-              alt=""
-              width={take.width}
-              height={take.height}
-              loading="lazy"
-              className="max-h-80 w-auto max-w-full object-contain"
-            />
+            <img src={pictureUrl(take.id, 1)} alt="" loading="lazy" className="size-full object-contain" />
           )}
         </Link>
       </div>

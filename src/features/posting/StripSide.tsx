@@ -4,6 +4,7 @@ import { sentenceOf } from '../../lib/ApiProblem.ts';
 import { ContactSheet } from './ContactSheet.tsx';
 import { DropZone } from './DropZone.tsx';
 import { GridEditor } from './GridEditor.tsx';
+import { ReadsBest } from './ReadsBest.tsx';
 import { RefusedFiles } from './RefusedFiles.tsx';
 import { UploadProgress } from './UploadProgress.tsx';
 import { useLocalPictures } from './useLocalPictures.ts';
@@ -64,6 +65,7 @@ export function StripSide({ draft, sending }: StripSideProps) {
           />
         )
       )}
+      {pictures.length === 0 && upload.status === 'idle' && <ReadsBest />}
       {remove.isError && <ErrorNote>{sentenceOf(remove.error)}</ErrorNote>}
     </div>
   );

@@ -8,7 +8,9 @@ const trueY = (share: number) => FLOOR - 4 * (FLOOR - TOP) * share * (1 - share)
 const x = (share: number) => 80 + (WIDTH - 160) * share;
 
 const shares = Array.from({ length: FRAMES }, (_, index) => index / (FRAMES - 1));
-const arc = shares.map((share) => `${x(share).toFixed(1)} ${trueY(share).toFixed(1)}`);
+const arc = Array.from({ length: 81 }, (_, index) => index / 80).map(
+  (share) => `${x(share).toFixed(1)} ${trueY(share).toFixed(1)}`,
+);
 
 /** A flight and its spacing below it: even across, a straight ramp up and down. The idea of the product in one drawing. */
 export function SignInDrawing() {
