@@ -8,8 +8,8 @@ import { createDataSource } from './data-source.ts';
 import type { Deps } from './deps.ts';
 import type { DatabaseConnection, Env } from './env.ts';
 import { createPassport } from './http/passport.ts';
-import { createSessions } from './http/sessions.ts';
-import { createBroadcast } from './realtime/broadcast.ts';
+import { createSessions, type Sessions } from './http/sessions.ts';
+import { createBroadcast, type LiveServer } from './realtime/broadcast.ts';
 import { createLiveServer, openLiveServer } from './realtime/liveServer.ts';
 import { type DemoSignIn, seedDemo } from './scripts/demo/seed.ts';
 import { createReadingQueue } from './services/readingQueue.ts';
@@ -20,6 +20,10 @@ export interface RunningServer {
   demoSignIns: DemoSignIn[];
   /** For scripts and tests that work with the services directly. */
   deps: Deps;
+  live: LiveServer;
+  sessions: Sessions;
+  /** Where it listens, whatever people type to reach it. */
+  address: AddressInfo;
   /** Ends sockets, requests, readings and the connections to the database, in this order. */
   close(): Promise<void>;
 }
@@ -38,7 +42,9 @@ const CLOSING_PATIENCE = 2_000;
 export async function startServer({ env, database }: StartOptions): Promise<RunningServer> {
   const opened: (() => Promise<unknown>)[] = [];
   const closeAll = async () => {
-    for (const close of opened.splice(0).reverse()) await close();
+    const failures: unknown[] = [];
+    for (const close of opened.splice(0).reverse()) await close().catch((error: unknown) => failures.push(error));
+    if (failures.length > 0) throw new AggregateError(failures, 'The server did not close in order.');
   };
   try {
     const log = pino({ level: env.LOG_LEVEL });
@@ -78,8 +84,12 @@ export async function startServer({ env, database }: StartOptions): Promise<Runn
       clearTimeout(patience);
     });
     await readings.resume();
+    const address = server.address() as AddressInfo;
     return {
-      url: env.PUBLIC_ORIGIN ?? urlOf(env.HOST, server.address() as AddressInfo),
+      url: env.PUBLIC_ORIGIN ?? urlOf(env.HOST, address),
+      address,
+      live: io,
+      sessions,
       demoSignIns,
       deps,
       close: closeAll,

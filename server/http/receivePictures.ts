@@ -7,6 +7,7 @@ import { pipeline } from 'node:stream/promises';
 import type { Request, Response } from 'express';
 import multer from 'multer';
 import { MAX_PICTURE_BYTES, MAX_PICTURES_PER_BATCH } from '../../shared/api/drafts.ts';
+import { AppError, codeOf } from '../errors.ts';
 
 /** A file that arrived: under a name of ours on disk, with the name the person knows it by. */
 export interface ReceivedFile {
@@ -27,10 +28,19 @@ export async function receivePictures(
     limits: { files: MAX_PICTURES_PER_BATCH, fields: 0, parts: MAX_PICTURES_PER_BATCH + 1, fieldNameSize: 100 },
   });
   await new Promise<void>((resolve, reject) => {
-    void upload.array(field)(req, res, (error: unknown) => (error ? reject(error) : resolve()));
+    void upload.array(field)(req, res, (error: unknown) => (error ? reject(asRefusal(error)) : resolve()));
   });
   const files = (req.files ?? []) as Express.Multer.File[];
   return files.map((file) => ({ path: file.path, name: nameOf(file.originalname), bytes: file.size }));
+}
+
+/** The parser throws plain errors for what it cannot parse; those of the disk have a code and are no refusal. */
+function asRefusal(error: unknown): unknown {
+  if (error instanceof multer.MulterError || codeOf(error) !== '') return error;
+  return new AppError('invalid_request', 'The pictures did not arrive as they should; send them again.', {
+    status: 400,
+    cause: error,
+  });
 }
 
 /**

@@ -1,4 +1,3 @@
-import sharp from 'sharp';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { MAX_FRAMES, MAX_PICTURE_BYTES } from '../../shared/api/drafts.ts';
 import { DraftPicture } from '../../server/entities/DraftPicture.ts';
@@ -6,6 +5,7 @@ import type { Production } from '../../server/entities/Production.ts';
 import { type Client, signIn } from '../support/client.ts';
 import { buildMember } from '../support/factories.ts';
 import { drawTossFrame } from '../support/pictures.ts';
+import { blankPng } from '../support/pngBytes.ts';
 import { addPictures, type Dragged, dragToss, startDraft } from '../support/posting.ts';
 import { createTestServer, type TestServer } from '../support/testServer.ts';
 
@@ -54,9 +54,7 @@ describe('a wrong file among good ones is refused by name, and the rest is kept'
   });
 
   test('a picture of 20,000 × 20,000 px', async () => {
-    const size = { width: 20_000, height: 20_000, channels: 3 as const, background: '#345' };
-    const bytes = await sharp({ create: size, limitInputPixels: false }).png({ compressionLevel: 9 }).toBuffer();
-    const { refused } = await dragIn({ name: 'huge.png', bytes });
+    const { refused } = await dragIn({ name: 'huge.png', bytes: blankPng(20_000, 20_000) });
     expect(refused).toEqual([{ name: 'huge.png', reason: expect.stringContaining('20,000 × 20,000 px') }]);
   });
 

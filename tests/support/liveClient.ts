@@ -23,9 +23,13 @@ export interface LiveClient {
 }
 
 /** Opens a socket with the session of a client and waits until it is let in. */
-export async function goLive(server: TestServer, client: Client | null): Promise<LiveClient> {
+export async function goLive(
+  server: TestServer,
+  client: Client | null,
+  headers: Record<string, string> = {},
+): Promise<LiveClient> {
   const socket: LiveClient['socket'] = io(server.url, {
-    extraHeaders: client ? { Cookie: client.cookie() } : {},
+    extraHeaders: { ...headers, ...(client ? { Cookie: client.cookie() } : {}) },
     reconnection: false,
     forceNew: true,
   });

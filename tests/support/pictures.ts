@@ -11,13 +11,15 @@ export interface TossDrawing {
   firstFrame?: number;
   /** Nothing moves. */
   still?: boolean;
+  /** Even spacing up to a corner and down again, where a fall bends. */
+  straight?: boolean;
   /** Balls in flight, side by side. */
   balls?: 1 | 2;
 }
 
 /** One frame of a ball on its way through a level room: y grows downwards, px/frame² for gravity. */
 export async function drawTossFrame(frame: number, drawing: TossDrawing): Promise<Buffer> {
-  const { frames, width = 320, height = 180, format = 'png', still = false, balls = 1 } = drawing;
+  const { frames, width = 320, height = 180, format = 'png', still = false, straight = false, balls = 1 } = drawing;
   const middle = (frames + 1) / 2;
   const at = still ? middle : frame;
   const half = Math.max(1, (frames - 1) / 2);
@@ -25,7 +27,8 @@ export async function drawTossFrame(frame: number, drawing: TossDrawing): Promis
   const marks = Array.from({ length: balls }, (_, index) => {
     const share = (at - 1) / Math.max(1, frames - 1);
     const x = index === 0 ? width * (0.1 + 0.8 * share) : width * (0.9 - 0.35 * share);
-    const lift = (1 - ((at - middle) / half) ** 2) * rise * (index === 0 ? 1 : 0.7);
+    const away = Math.abs(at - middle) / half;
+    const lift = (1 - (straight ? away : away ** 2)) * rise * (index === 0 ? 1 : 0.7);
     return `<circle cx="${x.toFixed(3)}" cy="${(height * 0.85 - lift).toFixed(3)}" r="${height / 18}" fill="#d9682b"/>`;
   });
   const svg = `<svg xmlns="http://www.w3.org/2000/svg" width="${width}" height="${height}">

@@ -33,6 +33,15 @@ export async function createTestServer(env: Partial<StartOptions['env']> = {}): 
     get deps() {
       return running.deps;
     },
+    get live() {
+      return running.live;
+    },
+    get sessions() {
+      return running.sessions;
+    },
+    get address() {
+      return running.address;
+    },
     get demoSignIns() {
       return running.demoSignIns;
     },
