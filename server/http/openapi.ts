@@ -1,9 +1,7 @@
 import { createDocument, type ZodOpenApiOperationObject, type ZodOpenApiPathsObject } from 'zod-openapi';
 import packageJson from '../../package.json' with { type: 'json' };
 import type { Contract } from '../../shared/api/contract.ts';
-import { productionEventSchema } from '../../shared/api/events.ts';
 import { problemSchema } from '../../shared/errors.ts';
-import { readingSchema } from '../../shared/reading/document.ts';
 import { SESSION_COOKIE } from './sessions.ts';
 
 type Responses = ZodOpenApiOperationObject['responses'];
@@ -36,7 +34,6 @@ export function describeApi(contracts: Contract[]) {
     security: [{ session: [] }],
     paths,
     components: {
-      schemas: { Reading: readingSchema, Problem: problemSchema, ProductionEvent: productionEventSchema },
       securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: SESSION_COOKIE } },
     },
   });
