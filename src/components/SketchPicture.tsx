@@ -17,7 +17,7 @@ export interface SketchPictureProps {
 export function SketchPicture({ sketch, src, className }: SketchPictureProps) {
   const { width, height } = sketch;
   return (
-    <div className={clsx('@container-size relative overflow-hidden bg-surround', className)}>
+    <div className={clsx('@container-size overflow-hidden bg-surround', className)}>
       <div className="absolute bg-surround" style={placement(sketch, sketchRegion(sketch))}>
         <img src={src} alt="" loading="lazy" decoding="async" className="size-full" />
         <div className="absolute inset-0 bg-pencil-paper/50" />

@@ -49,7 +49,7 @@ export function FeedPage() {
           className="max-w-full"
         />
       </PageHead>
-      <div className="grid gap-6 lg:grid-cols-[15rem_minmax(0,1fr)] xl:grid-cols-[18.75rem_minmax(0,1fr)]">
+      <div className="grid grid-cols-[minmax(0,1fr)] gap-6 lg:grid-cols-[15rem_minmax(0,1fr)] xl:grid-cols-[18.75rem_minmax(0,1fr)]">
         {wide && (
           <aside className="space-y-3" aria-label="Where things stand">
             <WaitingOnYou slug={slug} me={actor.userId} />

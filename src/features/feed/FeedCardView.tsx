@@ -58,12 +58,17 @@ export function FeedCardView({ slug, card, stamps }: FeedCardViewProps) {
           to={address}
           tabIndex={-1}
           aria-hidden="true"
-          className="block h-56 bg-surround max-md:order-first md:h-full md:min-h-68 xl:min-h-76"
+          className="relative block h-56 bg-surround max-md:order-first md:h-full md:min-h-68 xl:min-h-76"
         >
           {sketch ? (
-            <SketchPicture sketch={sketch} src={pictureUrl(take.id, 1)} className="size-full" />
+            <SketchPicture sketch={sketch} src={pictureUrl(take.id, 1)} className="absolute inset-0" />
           ) : (
-            <img src={pictureUrl(take.id, 1)} alt="" loading="lazy" className="size-full object-contain" />
+            <img
+              src={pictureUrl(take.id, 1)}
+              alt=""
+              loading="lazy"
+              className="absolute inset-0 size-full object-contain"
+            />
           )}
         </Link>
       </div>

@@ -47,7 +47,10 @@ interface TileProps {
 function Tile({ picture, address, onRemove }: TileProps) {
   return (
     <div className="group relative">
-      <div className="aspect-video overflow-hidden rounded-mark border border-rule bg-surround">
+      <div
+        className="overflow-hidden rounded-mark border border-rule bg-surround"
+        style={{ aspectRatio: `${picture.width} / ${picture.height}` }}
+      >
         {address && <img src={address} alt="" loading="lazy" decoding="async" className="size-full object-contain" />}
       </div>
       <p className="truncate text-center font-mono text-2xs text-graphite" title={picture.name}>

@@ -5,7 +5,10 @@ import { Button } from '../../components/Button.tsx';
 import { Card } from '../../components/Card.tsx';
 import { ErrorNote } from '../../components/ErrorNote.tsx';
 import { TextField } from '../../components/TextField.tsx';
-import { cellsOf, firstCut, type GridField, gridProblem, withField } from './gridEdit.ts';
+import { CutFrames } from './CutFrames.tsx';
+import { GridDrawing } from './GridDrawing.tsx';
+import { firstCut, type GridField, gridProblem, withField } from './gridEdit.ts';
+import { StripPicture } from './StripPicture.tsx';
 
 const FIELDS: { field: GridField; label: string }[] = [
   { field: 'columns', label: 'Columns' },
@@ -13,8 +16,8 @@ const FIELDS: { field: GridField; label: string }[] = [
   { field: 'count', label: 'Frames' },
   { field: 'gutterX', label: 'Gutter across, px' },
   { field: 'gutterY', label: 'Gutter down, px' },
-  { field: 'marginX', label: 'Margin left and right, px' },
-  { field: 'marginY', label: 'Margin above and below, px' },
+  { field: 'marginX', label: 'Side margin, px' },
+  { field: 'marginY', label: 'Top margin, px' },
 ];
 
 export interface GridEditorProps {
@@ -22,24 +25,27 @@ export interface GridEditorProps {
   address: string | undefined;
   /** As it is cut now; null: the picture is one frame. */
   grid: Grid | null;
+  /** A correction that can be cut. */
   onGrid: (grid: Grid | null) => void;
+  /** Whether what is written cannot be cut, so that nobody posts something else than is shown. */
+  onWrong: (wrong: boolean) => void;
   onRemove: (name: string) => void;
   /** Why the last correction was not kept. */
   problem: string | null;
 }
 
 /** How a strip picture is cut into frames: the grid that was found, drawn over it and correctable. */
-export function GridEditor({ picture, address, grid, onGrid, onRemove, problem }: GridEditorProps) {
+export function GridEditor({ picture, address, grid, onGrid, onWrong, onRemove, problem }: GridEditorProps) {
   // While a number is half written the drawing follows it, and only a grid that can be cut is sent.
   const [written, setWritten] = useState<Grid | null>(null);
   const shown = written ?? grid;
   const wrong = shown && gridProblem(shown, picture);
 
-  const handleField = (field: GridField, text: string) => {
-    if (!shown) return;
-    const next = withField(shown, field, text === '' ? Number.NaN : Number(text), picture);
+  const set = (next: Grid | null) => {
     setWritten(next);
-    if (!gridProblem(next, picture)) onGrid(next);
+    const canBeCut = next === null || gridProblem(next, picture) === null;
+    onWrong(!canBeCut);
+    if (canBeCut) onGrid(next);
   };
 
   return (
@@ -48,7 +54,7 @@ export function GridEditor({ picture, address, grid, onGrid, onRemove, problem }
         <h2 id="strip-picture" className="text-md">
           {shown ? `A strip of ${Number.isInteger(shown.count) ? shown.count : '…'} frames` : 'One picture'}
         </h2>
-        <span className="text-sm text-graphite">
+        <span className="min-w-0 text-sm text-graphite">
           <span className="font-mono text-xs break-all">{picture.name}</span>, {picture.width} × {picture.height} px
           {shown && !wrong && `, each frame ${shown.cellWidth} × ${shown.cellHeight} px`}
         </span>
@@ -56,24 +62,15 @@ export function GridEditor({ picture, address, grid, onGrid, onRemove, problem }
           Take it out
         </Button>
       </div>
-      <div className="flex justify-center overflow-hidden rounded-control bg-surround">
-        <div className="relative max-h-112 w-full" style={{ aspectRatio: `${picture.width} / ${picture.height}` }}>
-          {address && (
-            <img
-              src={address}
-              alt={`The strip ${picture.name}`}
-              className="absolute inset-0 size-full object-contain"
-            />
-          )}
-          {shown && !wrong && <GridDrawing grid={shown} picture={picture} />}
-        </div>
-      </div>
+      <StripPicture picture={picture} address={address}>
+        {shown && !wrong && <GridDrawing grid={shown} picture={picture} />}
+      </StripPicture>
       {shown ? (
         <>
           <p className="mt-2 text-sm text-graphite">
             Frames are read row by row. Where the lines do not meet your frames, correct the numbers.
           </p>
-          <div className="mt-2 grid grid-cols-2 gap-2.5 sm:grid-cols-4">
+          <div className="mt-2 grid grid-cols-2 gap-2.5 sm:grid-cols-4 xl:grid-cols-7">
             {FIELDS.map(({ field, label }) => (
               <TextField
                 key={field}
@@ -82,93 +79,25 @@ export function GridEditor({ picture, address, grid, onGrid, onRemove, problem }
                 min={0}
                 inputMode="numeric"
                 value={Number.isNaN(shown[field]) ? '' : shown[field]}
-                onChange={(event) => handleField(field, event.target.value)}
+                onChange={(event) => set(withField(shown, field, event.target.valueAsNumber, picture))}
                 fieldClassName="font-mono"
               />
             ))}
           </div>
           {(wrong ?? problem) && <ErrorNote className="mt-2">{wrong ?? problem}</ErrorNote>}
-          <Button
-            size="small"
-            kind="quiet"
-            className="mt-2"
-            onClick={() => {
-              setWritten(null);
-              onGrid(null);
-            }}
-          >
+          {!wrong && address && <CutFrames grid={shown} picture={picture} address={address} />}
+          <Button size="small" kind="quiet" className="mt-2 -ml-2.5" onClick={() => set(null)}>
             This is one frame, not a strip
           </Button>
         </>
       ) : (
         <p className="mt-2 flex flex-wrap items-center gap-3 text-sm text-graphite">
           One frame has no motion to read. Add the others, or cut this picture into frames.
-          <Button
-            size="small"
-            onClick={() => {
-              setWritten(null);
-              onGrid(firstCut(picture));
-            }}
-          >
+          <Button size="small" onClick={() => set(firstCut(picture))}>
             Cut it into frames
           </Button>
         </p>
       )}
     </Card>
-  );
-}
-
-/** Above this many cells their numbers would only hide the picture. */
-const MOST_NUMBERS = 120;
-
-function GridDrawing({ grid, picture }: { grid: Grid; picture: DraftPicture }) {
-  const cells = cellsOf(grid);
-  const unit = picture.width / 700;
-  return (
-    <svg
-      viewBox={`0 0 ${picture.width} ${picture.height}`}
-      preserveAspectRatio="xMidYMid meet"
-      className="absolute inset-0 size-full"
-      role="img"
-      aria-label={`Cut into ${grid.columns} columns and ${grid.rows} rows, ${grid.count} frames`}
-    >
-      {cells.map((cell) => (
-        <g key={cell.index}>
-          <rect
-            x={cell.x}
-            y={cell.y}
-            width={grid.cellWidth}
-            height={grid.cellHeight}
-            fill={cell.used ? 'none' : 'var(--color-surround)'}
-            fillOpacity={cell.used ? undefined : 0.7}
-            className="stroke-pencil-ink"
-            strokeWidth="1.5"
-            vectorEffect="non-scaling-stroke"
-          />
-          <rect
-            x={cell.x}
-            y={cell.y}
-            width={grid.cellWidth}
-            height={grid.cellHeight}
-            fill="none"
-            className="stroke-pencil-paper"
-            strokeWidth="1.5"
-            strokeDasharray="4 4"
-            vectorEffect="non-scaling-stroke"
-          />
-          {cell.used && cells.length <= MOST_NUMBERS && (
-            <text
-              x={cell.x + 5 * unit}
-              y={cell.y + 14 * unit}
-              fontSize={11 * unit}
-              className="fill-pencil-ink stroke-pencil-paper font-mono font-semibold [paint-order:stroke]"
-              strokeWidth={3 * unit}
-            >
-              {cell.index + 1}
-            </text>
-          )}
-        </g>
-      ))}
-    </svg>
   );
 }

@@ -31,14 +31,15 @@ export interface PostFormProps {
   draft: Draft | undefined;
   /** The shot one came from, filled in already. */
   shotNumber: string | null;
-  uploading: boolean;
+  /** Why the strip cannot be posted yet; null when it can. */
+  notYet: string | null;
   posting: boolean;
   problem: Error | null;
   onPost: (post: Post) => void;
 }
 
 /** What the pictures cannot say: which shot, at what rate, what changed and what is meant. */
-export function PostForm({ slug, shots, draft, shotNumber, uploading, posting, problem, onPost }: PostFormProps) {
+export function PostForm({ slug, shots, draft, shotNumber, notYet, posting, problem, onPost }: PostFormProps) {
   const kept = keptValues(slug);
   const form = useForm<PostValues>({
     resolver: schemaResolver(postFormSchema(shots)),
@@ -66,7 +67,6 @@ export function PostForm({ slug, shots, draft, shotNumber, uploading, posting, p
     }
   }, [problem, setError]);
 
-  const canPost = draft?.ready === true && !uploading;
   return (
     <form
       noValidate
@@ -125,28 +125,33 @@ export function PostForm({ slug, shots, draft, shotNumber, uploading, posting, p
       </div>
       <TextArea
         label="What changed"
+        rows={2}
         hint="Since the last take, for those who look again."
         error={errors.changed?.message}
         {...register('changed')}
       />
       <TextArea
         label="What is intended"
+        rows={2}
         hint="A balloon, a wire, a joke of gravity: say what is meant, so nobody mends it away."
         error={errors.intended?.message}
         {...register('intended')}
       />
       {problem && <ErrorNote>{sentenceOf(problem)}</ErrorNote>}
       <FilmingCaution />
-      <Button type="submit" kind="primary" className="w-full" disabled={!canPost} busy={posting && 'Posting…'}>
+      <Button
+        type="submit"
+        kind="primary"
+        className="w-full"
+        disabled={notYet !== null}
+        aria-describedby={notYet ? 'not-yet' : undefined}
+        busy={posting && 'Posting…'}
+      >
         {shot ? `Post take ${nextTakeOf(shot)} of ${shot.number}` : 'Post the strip'}
       </Button>
-      {!canPost && !posting && (
-        <p className="text-center text-sm text-graphite">
-          {uploading
-            ? 'The frames are still on their way.'
-            : draft
-              ? 'The strip is not ready yet.'
-              : 'Choose the frames first.'}
+      {notYet && !posting && (
+        <p id="not-yet" className="text-center text-sm text-graphite">
+          {notYet}
         </p>
       )}
     </form>

@@ -1,14 +1,15 @@
-import { useQuery } from '@tanstack/react-query';
-import { useCallback, useEffect } from 'react';
+import { useIsMutating, useQuery } from '@tanstack/react-query';
+import { useCallback, useEffect, useState } from 'react';
 import { useNavigate, useSearchParams } from 'react-router';
+import type { Draft } from '../../../shared/api/drafts.ts';
 import { draftOptions } from '../../lib/queries/draft.ts';
 import { sheetOptions } from '../../lib/queries/shots.ts';
 import { paths } from '../../lib/paths.ts';
 import { keepValues } from './keptValues.ts';
 import { PostForm } from './PostForm.tsx';
 import { StripSide } from './StripSide.tsx';
-import { usePost } from './usePost.ts';
-import { useUpload } from './useUpload.ts';
+import { draftChanges, usePost } from './usePost.ts';
+import { type Upload, useUpload } from './useUpload.ts';
 
 /** Posting a strip: the pictures on the left, what they cannot say on the right. The address keeps the draft. */
 export function PostStrip({ slug }: { slug: string }) {
@@ -34,18 +35,20 @@ export function PostStrip({ slug }: { slug: string }) {
       [setSearch],
     ),
   );
+  const [wrongCut, setWrongCut] = useState(false);
+  const changing = useIsMutating({ mutationKey: draftChanges(draftId) }) > 0;
   const uploading = sending.upload.status === 'sending';
   useWarningBeforeLeaving(uploading);
 
   return (
-    <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,1fr)_24rem]">
-      <StripSide draft={draft} sending={sending} />
+    <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-4 lg:grid-cols-[minmax(0,1fr)_24rem]">
+      <StripSide draft={draft} sending={sending} onWrongCut={setWrongCut} />
       <PostForm
         slug={slug}
         shots={sheet?.shots ?? []}
         draft={draft}
         shotNumber={search.get('shot')}
-        uploading={uploading || sending.upload.status === 'failed'}
+        notYet={notYet(sending.upload, draft, changing, wrongCut)}
         posting={post.isPending}
         problem={post.error}
         onPost={(body) =>
@@ -59,6 +62,16 @@ export function PostStrip({ slug }: { slug: string }) {
       />
     </div>
   );
+}
+
+/** Why the strip cannot be posted yet, as a sentence; null when it can. */
+function notYet(upload: Upload, draft: Draft | undefined, changing: boolean, wrongCut: boolean): string | null {
+  if (upload.status === 'sending') return 'The frames are still on their way.';
+  if (upload.status === 'failed') return 'Some frames have not arrived. Send the rest or leave them out.';
+  if (!draft || draft.pictures.length === 0) return 'Choose the frames first.';
+  if (wrongCut) return 'The strip cannot be cut as it is written.';
+  if (changing) return 'The strip is being put in order.';
+  return draft.ready ? null : 'The strip is not ready yet.';
 }
 
 function useWarningBeforeLeaving(active: boolean) {

@@ -15,8 +15,14 @@ export function RefusedFiles({ files }: { files: RefusedFile[] }) {
       <ul className="mt-1 divide-y divide-rule text-sm">
         {files.slice(0, SHOWN).map((file) => (
           <li key={file.name} className="py-1.5">
-            <span className="font-mono text-xs font-semibold break-all">{file.name}</span>{' '}
-            <span className="text-graphite">{file.reason}</span>
+            {file.reason.includes(file.name) ? (
+              <span className="break-words">{file.reason}</span>
+            ) : (
+              <>
+                <span className="font-mono text-xs font-semibold break-all">{file.name}</span>{' '}
+                <span className="text-graphite">{file.reason}</span>
+              </>
+            )}
           </li>
         ))}
       </ul>

@@ -14,10 +14,12 @@ import type { useUpload } from './useUpload.ts';
 export interface StripSideProps {
   draft: Draft | undefined;
   sending: ReturnType<typeof useUpload>;
+  /** Whether the cut that is written cannot be made. */
+  onWrongCut: (wrong: boolean) => void;
 }
 
 /** The strip itself: where frames are dropped, how many arrived, what was refused, and how they lie. */
-export function StripSide({ draft, sending }: StripSideProps) {
+export function StripSide({ draft, sending, onWrongCut }: StripSideProps) {
   const { upload, add, cancel, retry } = sending;
   const { addresses, keep } = useLocalPictures();
   const cut = useCut(draft?.id ?? null);
@@ -29,6 +31,7 @@ export function StripSide({ draft, sending }: StripSideProps) {
 
   const handleFiles = (files: File[]) => {
     if (files.length === 0) return;
+    onWrongCut(false);
     keep(files);
     add(files, pictures.length);
   };
@@ -52,7 +55,11 @@ export function StripSide({ draft, sending }: StripSideProps) {
           address={addresses.get(single.name)}
           grid={draft.grid}
           onGrid={(grid) => cut.mutate(grid)}
-          onRemove={(name) => remove.mutate(name)}
+          onWrong={onWrongCut}
+          onRemove={(name) => {
+            onWrongCut(false);
+            remove.mutate(name);
+          }}
           problem={cut.isError ? sentenceOf(cut.error) : null}
         />
       ) : (

@@ -17,10 +17,14 @@ export function usePost(slug: string, draftId: string | null) {
   });
 }
 
+/** Changes of a draft that are on their way: nothing is posted before they arrived. */
+export const draftChanges = (draftId: string | null) => ['draft-changes', draftId] as const;
+
 /** Corrects how the strip picture is cut; one correction after the other, so that the last one stands. */
 export function useCut(draftId: string | null) {
   const client = useQueryClient();
   return useMutation({
+    mutationKey: draftChanges(draftId),
     scope: { id: `cut ${draftId}` },
     mutationFn: (grid: Grid | null) => call(draftContracts.cut, { params: { draftId: draftId! }, body: { grid } }),
     onSuccess: (draft) => client.setQueryData(draftOptions(draft.id).queryKey, draft),
@@ -31,6 +35,7 @@ export function useCut(draftId: string | null) {
 export function useRemovePicture(draftId: string | null) {
   const client = useQueryClient();
   return useMutation({
+    mutationKey: draftChanges(draftId),
     scope: { id: `pictures ${draftId}` },
     mutationFn: (name: string) => call(draftContracts.removePicture, { params: { draftId: draftId!, name } }),
     onSuccess: (draft) => client.setQueryData(draftOptions(draft.id).queryKey, draft),
