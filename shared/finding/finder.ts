@@ -5,6 +5,7 @@ import { difference, noiseThreshold } from './difference.ts';
 import { type Ground, stillGround } from './ground.ts';
 import { bestPath } from './link.ts';
 import { cut, measure } from './measure.ts';
+import { settle } from './settle.ts';
 import { type FoundTrack, thingsAmong, trackOf } from './tracks.ts';
 import type { Picture, PointAt } from './types.ts';
 
@@ -93,24 +94,14 @@ export class Finder {
 }
 
 function marksOf(track: FoundTrack): Mark[] {
-  return track.path.map((candidate, k) => {
-    const shape = track.shapes[k];
-    const radius = Math.sqrt(shape.area / Math.PI);
-    return {
-      frame: candidate.index + 1,
-      x: round(shape.x),
-      y: round(shape.y),
-      radius: round(radius),
-      origin: 'found',
-      confidence: confidenceOf(candidate, shape.area, track),
-    };
-  });
-}
-
-function confidenceOf(candidate: Candidate, area: number, track: FoundTrack): number {
-  const clear = Math.min(1, candidate.contrast / 40);
-  const whole = Math.exp(-Math.abs(Math.log(area / (Math.PI * track.radius ** 2))));
-  return Math.round(100 * Math.min(0.99, clear * whole)) / 100;
+  return settle(track).map(({ candidate, x, y, radius, support }) => ({
+    frame: candidate.index + 1,
+    x: round(x),
+    y: round(y),
+    radius: round(radius),
+    origin: 'found',
+    confidence: Math.round(100 * Math.min(0.99, support * Math.min(1, candidate.contrast / 40))) / 100,
+  }));
 }
 
 function round(value: number): number {

@@ -9,7 +9,9 @@ const LONGEST_GAP = 8;
 const REWARD = 1;
 /** Most that one change of velocity costs: a bounce is a change that physics allows. */
 const BOUNCE = 1.6;
-const PER_HIDDEN_FRAME = 0.35;
+/** Passing over one frame costs more than any turn, so that none is left out to make a turn look smoother. */
+const FIRST_HIDDEN_FRAME = 0.9;
+const NEXT_HIDDEN_FRAME = 0.35;
 
 interface State {
   score: number;
@@ -49,7 +51,8 @@ export function bestPath(frames: Candidate[][]): Path {
 
 function extend(states: State[], earlier: Candidate, candidate: Candidate): State | null {
   const gap = candidate.index - earlier.index;
-  const price = changeOfLook(earlier, candidate) + PER_HIDDEN_FRAME * (gap - 1);
+  const hidden = gap === 1 ? 0 : FIRST_HIDDEN_FRAME + NEXT_HIDDEN_FRAME * (gap - 2);
+  const price = changeOfLook(earlier, candidate) + hidden;
   const held = isSameDrawing(earlier, candidate);
   let best: State | null = null;
   for (const state of states) {
@@ -69,7 +72,8 @@ function extend(states: State[], earlier: Candidate, candidate: Candidate): Stat
 
 /** A drawing shown again: on twos and threes, or a thing at rest. */
 function isSameDrawing(a: Candidate, b: Candidate): boolean {
-  return Math.hypot(b.whole.x - a.whole.x, b.whole.y - a.whole.y) < 0.6;
+  const wander = Math.max(0.6, 0.02 * Math.sqrt(a.whole.area));
+  return Math.hypot(b.whole.x - a.whole.x, b.whole.y - a.whole.y) < wander;
 }
 
 function worth(candidate: Candidate): number {

@@ -1,4 +1,6 @@
 import type { Box } from './grid.ts';
+import { insideLine } from './drawnLine.ts';
+import type { View } from './outline.ts';
 import { type Silhouette, silhouetteOf } from './silhouette.ts';
 import type { Picture } from './types.ts';
 
@@ -15,6 +17,8 @@ export interface Shape {
   area: number;
   long: number;
   short: number;
+  /** Direction of the long axis, radians from the x axis. */
+  tilt: number;
 }
 
 export interface Measured {
@@ -24,12 +28,18 @@ export interface Measured {
   lit: Shape | null;
   /** Share of the differing pixels that only darken the background. */
   shadowShare: number;
-  /** Difference from the background, grey levels: the upper quartile inside the shape. */
+  /** Difference from the background, grey levels, that a tenth of the differing pixels exceed. */
   contrast: number;
+  /** Grey levels by which most of its outline stands out: less than `contrast` where the thing is shaded. */
+  body: number;
   /** Mean colour inside the shape. */
   colour: [number, number, number];
   /** How many px of the shape lie on the picture's edge. */
   onEdge: number;
+  /** The window it was measured in. */
+  view: View;
+  /** The filled shape in that window. */
+  filled: Uint8Array;
   /** How much more the frame shows an outline there than the background does; below 0 for a ghost in the background. */
   outline: number;
 }
@@ -81,14 +91,19 @@ export function measure(
     lit: lit && placed(lit, frame),
     shadowShare: shadowed / Math.max(1, differing),
     contrast: peak,
+    body: Math.max(0.35 * peak, medianInside(differences, whole)),
     colour: meanColour(frame, whole),
     onEdge: edgeLength(whole, frame, size),
+    view: { left: frame.left, top: frame.top, width, height, differences },
+    filled: whole.filled,
     outline: outlineGain(frame, background, whole),
   };
 }
 
 function placed(shape: Silhouette, frame: Cut): Shape {
-  return { x: shape.x + frame.left, y: shape.y + frame.top, area: shape.area, long: shape.long, short: shape.short };
+  const { area, long, short, tilt } = shape;
+  const { x, y } = insideLine(shape, frame);
+  return { x: x + frame.left, y: y + frame.top, area, long, short, tilt };
 }
 
 function windowDifferences(frame: Cut, background: Cut): Uint8Array {
@@ -138,6 +153,15 @@ function shadowMask(frame: Cut, background: Cut, mask: Uint8Array): Uint8Array {
     if (offColour <= 4 + 0.05 * (ground / 3)) out[pixel] = 1;
   }
   return out;
+}
+
+function medianInside(differences: Uint8Array, shape: Silhouette): number {
+  const counts = new Uint32Array(256);
+  for (let at = 0; at < differences.length; at++) if (shape.filled[at] === 1) counts[differences[at]]++;
+  let left = shape.area / 2;
+  let value = 0;
+  while (value < 255 && left > counts[value]) left -= counts[value++];
+  return value;
 }
 
 function meanColour(frame: Cut, shape: Silhouette): [number, number, number] {

@@ -8,6 +8,8 @@ export interface Silhouette {
   /** Standard deviations along the long and the short axis, px; both are radius / 2 for a disc. */
   long: number;
   short: number;
+  /** Direction of the long axis, radians from the x axis. */
+  tilt: number;
   x0: number;
   y0: number;
   x1: number;
@@ -49,6 +51,7 @@ export function silhouetteOf(mask: Uint8Array, width: number, height: number, cl
     area: largest.area,
     long: Math.sqrt(mean + spread),
     short: Math.sqrt(Math.max(0, mean - spread)),
+    tilt: 0.5 * Math.atan2(2 * xy, xx - yy),
     x0: largest.x0,
     y0: largest.y0,
     x1: largest.x1,
