@@ -1,4 +1,5 @@
 import type { Flight } from '../../../shared/reading/document.ts';
+import { apexLevel } from './badges.ts';
 import { HaloLine } from './Halo.tsx';
 import { arrowHead, trueApex } from './lines.ts';
 
@@ -7,9 +8,9 @@ export function ApexGap({ flight, unit }: { flight: Flight; unit: number }) {
   const should = trueApex(flight.trueArc);
   const drawn = flight.apex;
   if (!should || !drawn) return null;
-  const top = Math.min(should.y, drawn.y) - 26 * unit;
+  const level = apexLevel(flight, unit) ?? should.y;
+  const top = level - 8 * unit;
   const foot = Math.max(...flight.trueArc.map((point) => point.y));
-  const level = top + 8 * unit;
   const from = { x: should.x, y: level };
   const to = { x: drawn.x, y: level };
   const arrow = arrowHead(from, to, 9 * unit);

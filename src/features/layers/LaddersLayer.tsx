@@ -1,14 +1,17 @@
 import { memo } from 'react';
+import type { Point } from '../../../shared/reading/document.ts';
 import { arcAt } from '../../lib/arcAt.ts';
-import { drawingOn } from '../../lib/drawings.ts';
+import type { Drawing } from '../../lib/drawings.ts';
 import { useLitFrame } from '../../lib/playhead.ts';
 import { HaloLine } from './Halo.tsx';
 import type { LayerProps } from './layerProps.ts';
 
 /** The two rails of the ladders, px of the picture's plane: one under what is seen, one right of it. */
 export interface Rails {
-  y: number;
   x: number;
+  y: number;
+  /** They stand on the surround, not on the picture. */
+  clear: boolean;
 }
 
 interface LaddersProps extends LayerProps {
@@ -17,54 +20,90 @@ interface LaddersProps extends LayerProps {
   withTrue: boolean;
 }
 
-const TICK = 11;
-const TRUE_TICK = 6;
+/** Lengths of the ticks, px of the screen. On the picture they are short: they lie over the drawing. */
+const ON_SURROUND = { tick: 10, gap: 2.5, should: 6.5, lit: 16 };
+const ON_PICTURE = { tick: 6, gap: 2, should: 4, lit: 10 };
+
+interface Tick {
+  drawing: Drawing;
+  should: Point | null;
+  /** It comes after the apex: its tick stands on the other side of the upright rail. */
+  falls: boolean;
+}
 
 /** Ticks of the drawings in flight; of all drawings when none is. */
-function ticksOf({ objects }: Pick<LayerProps, 'objects'>) {
+function ticksOf(objects: LayerProps['objects']): Tick[] {
   return objects.flatMap((object) => {
-    const inFlight = object.drawings.flatMap((drawing) => {
+    const aloft = object.drawings.flatMap((drawing): Tick[] => {
       const flight = object.flights.find(
         (one) => (one.takeOff ?? -1) - 0.5 <= drawing.frame && drawing.frame <= (one.landing ?? Number.MAX_VALUE) + 0.5,
       );
-      return flight ? [{ drawing, should: arcAt(flight.trueArc, drawing.frame) }] : [];
+      if (!flight) return [];
+      const should = arcAt(flight.trueArc, drawing.frame);
+      return [{ drawing, should, falls: drawing.frame > (flight.apex?.frame ?? 0) }];
     });
-    return inFlight.length > 0 ? inFlight : object.drawings.map((drawing) => ({ drawing, should: null }));
+    return aloft.length > 0 ? aloft : object.drawings.map((drawing) => ({ drawing, should: null, falls: false }));
   });
 }
 
-/** Tick marks under and beside the picture that show spacing: ink for what was drawn, blue for where it should be. */
-export const LaddersLayer = memo(function LaddersLayer({ rails, withTrue, unit, ...rest }: LaddersProps) {
-  const ticks = ticksOf(rest);
+/** On the surround a ladder is a plain line; on the picture it is pencil with a paper edge. */
+function Ticks({ d, width, clear, blue = false }: { d: string; width: number; clear: boolean; blue?: boolean }) {
+  if (!clear) {
+    return <HaloLine d={d} width={width} className={blue ? 'stroke-pencil-blue' : 'stroke-pencil-ink'} halo={0.6} />;
+  }
+  return (
+    <path
+      d={d}
+      fill="none"
+      strokeWidth={width}
+      vectorEffect="non-scaling-stroke"
+      className={blue ? 'stroke-surround-blue' : 'stroke-surround-ink'}
+    />
+  );
+}
+
+/**
+ * Tick marks under and beside the picture that show spacing: ink for what was drawn, blue for where it should be. Beside
+ * it the rise stands left of the rail and the fall right.
+ */
+export const LaddersLayer = memo(function LaddersLayer({ rails, withTrue, unit, objects }: LaddersProps) {
+  const ticks = ticksOf(objects);
   if (ticks.length === 0) return null;
   const xs = ticks.map(({ drawing }) => drawing.x);
   const ys = ticks.map(({ drawing }) => drawing.y);
+  const size = rails.clear ? ON_SURROUND : ON_PICTURE;
+  const side = (tick: Tick) => (tick.falls ? unit : -unit);
   const drawn = ticks.map(
-    ({ drawing }) => `M${drawing.x} ${rails.y}v${-TICK * unit}M${rails.x} ${drawing.y}h${-TICK * unit}`,
+    (tick) =>
+      `M${tick.drawing.x} ${rails.y}v${-size.tick * unit}M${rails.x} ${tick.drawing.y}h${size.tick * side(tick)}`,
   );
-  const should = ticks.flatMap(({ should: point }) =>
-    point ? [`M${point.x} ${rails.y}v${TRUE_TICK * unit}M${rails.x} ${point.y}h${TRUE_TICK * unit}`] : [],
-  );
+  const should = ticks.flatMap((tick) => {
+    const point = tick.should;
+    if (!point) return [];
+    return [
+      `M${point.x} ${rails.y + size.gap * unit}v${size.should * unit}`,
+      `M${rails.x + (size.tick + size.gap) * side(tick)} ${point.y}h${size.should * side(tick)}`,
+    ];
+  });
   const rail = `M${Math.min(...xs)} ${rails.y}H${Math.max(...xs)}M${rails.x} ${Math.min(...ys)}V${Math.max(...ys)}`;
   return (
     <g data-layer="ladders" pointerEvents="none">
-      <HaloLine d={rail + drawn.join('')} width={1.1} className="stroke-pencil-ink" halo={0.5} />
-      {withTrue && <HaloLine d={should.join('')} width={1.4} className="stroke-pencil-blue" halo={0.6} />}
+      <Ticks d={rail + drawn.join('')} width={1.2} clear={rails.clear} />
+      {withTrue && <Ticks d={should.join('')} width={1.6} clear={rails.clear} blue />}
     </g>
   );
 });
 
-/** The ticks of the lit drawing, longer than the rest. */
+/** The ticks of the lit drawing, stronger than the rest. */
 export function LitTicks({ objects, rails, unit, playhead }: LayerProps & { rails: Rails }) {
   const frame = useLitFrame(playhead);
+  const tick = ticksOf(objects).find(({ drawing }) => drawing.frame <= frame && frame <= drawing.until);
+  if (!tick) return null;
+  const reach = (rails.clear ? ON_SURROUND : ON_PICTURE).lit * unit;
+  const d = `M${tick.drawing.x} ${rails.y}v${-reach}M${rails.x} ${tick.drawing.y}h${tick.falls ? reach : -reach}`;
   return (
     <g pointerEvents="none">
-      {objects.map((object) => {
-        const drawing = drawingOn(object.drawings, frame);
-        if (!drawing) return null;
-        const d = `M${drawing.x} ${rails.y}v${-(TICK + 7) * unit}M${rails.x} ${drawing.y}h${-(TICK + 7) * unit}`;
-        return <HaloLine key={object.id} d={d} width={2.4} className="stroke-pencil-ink" halo={0.8} />;
-      })}
+      <Ticks d={d} width={3} clear={rails.clear} />
     </g>
   );
 }

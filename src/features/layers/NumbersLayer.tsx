@@ -1,68 +1,125 @@
 import { memo } from 'react';
-import { shownFrame } from '../../../shared/reading/document.ts';
+import { type Finding, shownFrame } from '../../../shared/reading/document.ts';
 import { useLitFrame } from '../../lib/playhead.ts';
 import { drawingOn } from '../../lib/drawings.ts';
+import { dotsOf } from './badges.ts';
 import { HaloText } from './Halo.tsx';
-import { around, placeLabels } from './labels.ts';
+import { type Box, type PlacedLabel, placeLabels } from './labels.ts';
 import type { DrawnObject, LayerProps } from './layerProps.ts';
 
 const SIZE = 12;
 
-/** Which drawings get their number first: ends of flights and the apex, then every fifth, then the rest while there is room. */
-export function numberedFirst(object: Pick<DrawnObject, 'drawings' | 'flights'>): number[] {
-  const inOrder = object.drawings.map((drawing) => drawing.frame);
-  const nearest = (frame: number) => inOrder.toSorted((a, b) => Math.abs(a - frame) - Math.abs(b - frame)).slice(0, 1);
+/**
+ * Which drawings get a number: those at the ends of flights and at the apex, then every fifth by the production's count.
+ * Of drawings closer than `apart` (picture px) only the first is told.
+ */
+export function numberedFirst(
+  object: Pick<DrawnObject, 'drawings' | 'flights'>,
+  firstFrame: number,
+  apart: number,
+): number[] {
+  const nearest = (frame: number) =>
+    object.drawings.toSorted((a, b) => Math.abs(a.frame - frame) - Math.abs(b.frame - frame)).slice(0, 1);
   const told = object.flights.flatMap((flight) =>
     [flight.takeOff, flight.landing, flight.apex?.frame ?? null].flatMap((frame) =>
       frame === null ? [] : nearest(frame),
     ),
   );
-  const fifths = inOrder.filter((_, index) => index % 5 === 0);
-  return [...new Set([...told, ...inOrder.slice(0, 1), ...inOrder.slice(-1), ...fifths])];
+  const fifths = object.drawings.filter((drawing) => shownFrame(drawing.frame, firstFrame) % 5 === 0);
+  const kept: DrawnObject['drawings'] = [];
+  for (const drawing of [...told, ...fifths]) {
+    if (kept.every((other) => Math.hypot(other.x - drawing.x, other.y - drawing.y) >= apart)) kept.push(drawing);
+  }
+  return kept.map((drawing) => drawing.frame);
 }
 
-/** The production's frame numbers beside the drawings, as many as stand clear of everything else. */
-export const NumbersLayer = memo(function NumbersLayer({ objects, unit, firstFrame, bounds }: LayerProps) {
-  const dots = objects.flatMap((object) => [
-    ...object.drawings.map((drawing) => around(drawing, 5 * unit)),
-    ...object.flights.flatMap((flight) => flight.trueArc.map((point) => around(point, 5 * unit))),
-  ]);
+export interface PlacedNumber extends PlacedLabel {
+  frame: number;
+}
+
+/** Places for the production's frame numbers beside the drawings, as many as stand clear of everything else. */
+export function placeNumbers(
+  { objects, firstFrame, unit, bounds }: Pick<LayerProps, 'objects' | 'firstFrame' | 'unit' | 'bounds'>,
+  taken: readonly Box[],
+): PlacedNumber[] {
   const requests = objects.flatMap((object) =>
-    numberedFirst(object).flatMap((frame) => {
-      const drawing = object.drawings.find((one) => one.frame === frame)!;
-      const text = String(shownFrame(frame, firstFrame));
-      const size = { width: text.length * SIZE * 0.62 * unit, height: SIZE * unit };
-      return [{ key: `${object.id} ${text}`, x: drawing.x, y: drawing.y, away: 7 * unit, ...size }];
+    numberedFirst(object, firstFrame, 12 * unit).flatMap((frame) => {
+      const drawing = object.drawings.find((one) => one.frame === frame);
+      if (!drawing) return [];
+      const width = String(shownFrame(frame, firstFrame)).length * SIZE * 0.62 * unit;
+      return [
+        { key: `${object.id} ${frame}`, frame, x: drawing.x, y: drawing.y, away: 7 * unit, width, height: SIZE * unit },
+      ];
     }),
   );
+  return placeLabels(requests, [...dotsOf(objects, 5 * unit), ...taken], bounds).flatMap((label) => {
+    const request = requests.find((one) => one.key === label.key);
+    return request ? [{ ...label, frame: request.frame }] : [];
+  });
+}
+
+interface NumbersLayerProps extends LayerProps {
+  numbers: readonly PlacedNumber[];
+}
+
+function PlainNumber({
+  place,
+  text,
+  unit,
+  strong = false,
+}: {
+  place: PlacedNumber;
+  text: string;
+  unit: number;
+  strong?: boolean;
+}) {
+  return (
+    <HaloText x={place.left} y={place.top + place.height * 0.85} size={SIZE} unit={unit} weight={strong ? 700 : 500}>
+      {text}
+    </HaloText>
+  );
+}
+
+/** The production's frame numbers beside the drawings. */
+export const NumbersLayer = memo(function NumbersLayer({ numbers, firstFrame, unit }: NumbersLayerProps) {
   return (
     <g data-layer="numbers" pointerEvents="none">
-      {placeLabels(requests, dots, bounds).map((label) => (
-        <HaloText key={label.key} x={label.left} y={label.top + label.height * 0.85} size={SIZE} unit={unit}>
-          {label.key.split(' ')[1]!}
-        </HaloText>
+      {numbers.map((place) => (
+        <PlainNumber key={place.key} place={place} text={String(shownFrame(place.frame, firstFrame))} unit={unit} />
       ))}
     </g>
   );
 });
 
-/** The number of the lit frame, always told, above or below its ring. */
-export function LitNumber({ objects, unit, firstFrame, playhead, bounds }: LayerProps) {
+/** The number of the lit frame, always told: where it stands already, else below its ring, or above when something moves down. */
+export function LitNumber({
+  objects,
+  unit,
+  firstFrame,
+  playhead,
+  bounds,
+  numbers,
+  mend,
+}: NumbersLayerProps & { mend: Finding['mend'] }) {
   const frame = useLitFrame(playhead);
   const drawing = objects.map((object) => drawingOn(object.drawings, frame)).find((one) => one !== undefined);
   if (!drawing) return null;
+  const text = String(shownFrame(frame, firstFrame));
+  const place = numbers.find((one) => one.frame === frame);
+  if (place) return <PlainNumber place={place} text={text} unit={unit} strong />;
   const away = Math.max((drawing.radius ?? 0) + 3 * unit, 9 * unit) + 6 * unit;
-  const fitsBelow = drawing.y + away + 16 * unit < bounds.top + bounds.height;
+  const movesDown = mend.some((one) => one.frame === drawing.frame && one.dy > 0);
+  const below = !movesDown && drawing.y + away + 16 * unit < bounds.top + bounds.height;
   return (
     <HaloText
       x={drawing.x}
-      y={fitsBelow ? drawing.y + away + 10 * unit : drawing.y - away}
+      y={below ? drawing.y + away + 10 * unit : drawing.y - away}
       size={14}
       unit={unit}
       anchor="middle"
       weight={700}
     >
-      {String(shownFrame(frame, firstFrame))}
+      {text}
     </HaloText>
   );
 }

@@ -35,7 +35,7 @@ export interface PictureStageProps {
 
 const NO_ROOM = { top: 0, right: 0, bottom: 0, left: 0 };
 /** Keeps the ladder's rail clear of the picture where the surround has room for it. */
-const LADDER_ROOM = { top: 6, right: 6, bottom: 30, left: 6 };
+const LADDER_ROOM = { top: 6, right: 6, bottom: 36, left: 6 };
 const NOTHING = { objects: [] as DrawnObject[], neighbours: () => [] as number[] };
 
 function drawn(reading: Reading) {

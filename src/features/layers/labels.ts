@@ -15,6 +15,8 @@ export interface LabelRequest {
   height: number;
   /** Free space between the point and the label. */
   away: number;
+  /** The side to try first. */
+  prefer?: 'left' | 'right';
   /** It stands even where it covers something; others are left out when there is no free place. */
   must?: boolean;
 }
@@ -37,14 +39,17 @@ function inside(box: Box, bounds: Box): boolean {
 }
 
 /** Places to try around the point, best first: above left and above right read best beside an arc. */
-function candidates({ x, y, width, height, away }: LabelRequest): Box[] {
+function candidates({ x, y, width, height, away, prefer }: LabelRequest): Box[] {
   const left = x - width - away;
   const right = x + away;
-  const middleX = x - width / 2;
   const above = y - height - away;
   const below = y + away;
+  const middleX = x - width / 2;
   const middleY = y - height / 2;
-  return [
+  const side = prefer === 'left' ? left : right;
+  const places: [number, number][] = [
+    ...(prefer ? ([[side, middleY]] as [number, number][]) : []),
+    ...(prefer ? ([[side, above]] as [number, number][]) : []),
     [left, above],
     [right, above],
     [middleX, above - away],
@@ -55,7 +60,10 @@ function candidates({ x, y, width, height, away }: LabelRequest): Box[] {
     [middleX, below + away],
     [left - 2 * away, above - 2 * away],
     [right + 2 * away, above - 2 * away],
-  ].map(([boxLeft, boxTop]) => ({ left: boxLeft!, top: boxTop!, width, height }));
+    [middleX, above - 4 * away],
+    [middleX, below + 4 * away],
+  ];
+  return places.map(([boxLeft, boxTop]) => ({ left: boxLeft, top: boxTop, width, height }));
 }
 
 /**

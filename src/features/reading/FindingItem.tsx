@@ -6,7 +6,7 @@ import { FindingNumber } from '../../components/FindingNumber.tsx';
 import type { NumberedFinding } from '../../lib/numberedFindings.ts';
 import { TimingChart } from './TimingChart.tsx';
 
-const SEVERITY_WORDS: Record<Severity, string> = { minor: 'slight', visible: 'seen', strong: 'seen at once' };
+const SEVERITY_WORDS: Record<Severity, string> = { minor: 'slight', visible: 'clear', strong: 'strong' };
 
 interface FindingItemProps {
   finding: NumberedFinding;
@@ -31,14 +31,14 @@ export function FindingItem({ finding, firstFrame, chosen, mendShown, onChoose, 
             aria-pressed={chosen}
             onClick={onChoose}
             className={clsx(
-              'text-left font-sans font-semibold hover:underline touch:min-h-11',
+              'relative text-left font-sans font-semibold hover:underline touch:before:absolute touch:before:-inset-x-2 touch:before:-inset-y-3',
               chosen && 'underline decoration-redline decoration-2 underline-offset-3',
             )}
           >
             {finding.title}
           </button>{' '}
           <span className="font-sans text-xs font-normal whitespace-nowrap text-graphite">
-            {SEVERITY_WORDS[finding.severity]}
+            · {SEVERITY_WORDS[finding.severity]}
           </span>
         </h3>
         <p className="mt-px text-sm text-graphite">{finding.detail}</p>
@@ -51,7 +51,7 @@ export function FindingItem({ finding, firstFrame, chosen, mendShown, onChoose, 
           <span className="font-mono text-2xs text-graphite">{from === to ? from : `${from} – ${to}`}</span>
         </div>
         {mendShown && (
-          <div className="mt-2">
+          <div className="mt-2 space-y-1.5">
             {finding.chart.map((chart) => (
               <TimingChart key={`${chart.from}-${chart.to}`} chart={chart} firstFrame={firstFrame} />
             ))}

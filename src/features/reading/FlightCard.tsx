@@ -22,10 +22,17 @@ export function FlightCard({ flight, object, reading, findings, open }: FlightCa
   return (
     <Card className="px-4 py-3" aria-label={`Flight ${flight.id}`}>
       <details open={open}>
-        <summary className="list-none [&::-webkit-details-marker]:hidden">
+        <summary className="relative list-none pr-6 [&::-webkit-details-marker]:hidden">
           <h2 className="flex items-baseline gap-2 text-md">
             Flight {flight.id} <span className="font-mono text-xs font-normal text-graphite">{span}</span>
           </h2>
+          <svg
+            viewBox="0 0 12 12"
+            className="pencil absolute top-1.5 right-0 size-3 text-graphite transition-transform duration-150 in-open:rotate-180"
+            aria-hidden="true"
+          >
+            <path d="M2 4l4 4 4-4" />
+          </svg>
           <p className="mt-0.5 text-sm text-ink">{flightSentence(flight, findings)}</p>
         </summary>
         <dl className="mt-2">

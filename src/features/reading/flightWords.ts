@@ -7,12 +7,17 @@ export function flightSpan(flight: Pick<Flight, 'takeOff' | 'landing'>, firstFra
   return `frames ${shown(flight.takeOff)} – ${shown(flight.landing)}`;
 }
 
+/** A side of a flight shorter than this many frames is none. */
+const SIDE = 0.5;
+
 function riseAndFall(flight: Flight): string | null {
   if (!flight.apex || flight.takeOff === null || flight.landing === null) return null;
   const decimals = Math.max(1, decimalsFor(2 * flight.apex.seFrame, 1));
   const up = flight.apex.frame - flight.takeOff;
   const down = flight.landing - flight.apex.frame;
-  if (up <= 0 || down <= 0) return null;
+  if (up < SIDE && down < SIDE) return null;
+  if (up < SIDE) return `It only falls, for ${shownNumber(down, decimals)} frames.`;
+  if (down < SIDE) return `It only rises, for ${shownNumber(up, decimals)} frames.`;
   return `Up takes ${shownNumber(up, decimals)} frames, down takes ${shownNumber(down, decimals)}.`;
 }
 

@@ -10,10 +10,12 @@ const DID: Record<NonNullable<Take['decision']>['state'], string> = {
 /** Who decided on a take, what, when, and the remark. */
 export function DecisionWords({ decision }: { decision: NonNullable<Take['decision']> }) {
   return (
-    <p className="text-sm">
+    <p className="px-1 text-sm">
       <b className="font-semibold">{decision.by.name}</b> {DID[decision.state]}{' '}
-      <TimeAgo at={decision.decidedAt} className="text-graphite" />
-      {decision.remark && <>: {decision.remark}</>}
+      <span className="text-graphite">
+        · <TimeAgo at={decision.decidedAt} />
+      </span>
+      {decision.remark && <span className="block whitespace-pre-wrap">{decision.remark}</span>}
     </p>
   );
 }

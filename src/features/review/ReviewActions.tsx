@@ -11,7 +11,7 @@ interface ReviewActionsProps {
   slug: string;
   take: Take;
   actor: Actor;
-  /** Under the thumb of a phone: wide buttons with short words. */
+  /** Under the thumb of a phone: wide buttons with short words; waiving is seldom and stands in the take's menu. */
   thumb?: boolean;
 }
 
@@ -37,9 +37,7 @@ export function ReviewActions({ slug, take, actor, thumb = false }: ReviewAction
       <Button className={width} onClick={() => setAsked('another-pass')}>
         Another pass…
       </Button>
-      <Button className={width} onClick={() => setAsked('waived')}>
-        Waive…
-      </Button>
+      {!thumb && <Button onClick={() => setAsked('waived')}>Waive…</Button>}
       <Button
         kind="primary"
         className={width}

@@ -5,8 +5,10 @@ import { type Actor, can } from '../../../shared/policy/can.ts';
 import { buttonClass } from '../../components/Button.tsx';
 import { Menu, type MenuItem } from '../../components/Menu.tsx';
 import { sheetOptions } from '../../lib/queries/shots.ts';
+import { useMediaQuery } from '../../lib/useReducedMotion.ts';
+import { DecisionDialog } from './DecisionDialog.tsx';
 import { MoveDialog } from './MoveDialog.tsx';
-import { useMove } from './useReview.ts';
+import { useDecide, useMove } from './useReview.ts';
 
 interface TakeMenuProps {
   slug: string;
@@ -19,10 +21,16 @@ interface TakeMenuProps {
 /** What is seldom done to a take: reading it again, moving it to another shot. */
 export function TakeMenu({ slug, take, actor, onReadAgain, onMoved }: TakeMenuProps) {
   const [moving, setMoving] = useState(false);
+  const [waiving, setWaiving] = useState(false);
+  const narrow = useMediaQuery('(max-width: 47.99rem)');
+  const decide = useDecide(slug, take.id);
   const move = useMove(slug, take.id);
   const sheet = useQuery({ ...sheetOptions(slug), enabled: moving });
   const underWay = take.reading.status === 'queued' || take.reading.status === 'reading';
   const items: MenuItem[] = [
+    ...(narrow && can(actor, 'take:decide', { postedById: take.postedBy.id })
+      ? [{ label: 'Waive what is off…', run: () => setWaiving(true) }]
+      : []),
     ...(can(actor, 'take:readAgain') && !underWay ? [{ label: 'Read again', run: onReadAgain }] : []),
     ...(can(actor, 'take:move', { postedById: take.postedBy.id })
       ? [{ label: 'Move to another shot…', run: () => setMoving(true) }]
@@ -36,8 +44,16 @@ export function TakeMenu({ slug, take, actor, onReadAgain, onMoved }: TakeMenuPr
           <path d="M4 10h.1M10 10h.1M16 10h.1" strokeWidth="3" />
         </svg>
       </Menu>
+      <DecisionDialog
+        key={`waive-${waiving}`}
+        asked={waiving ? 'waived' : null}
+        busy={decide.isPending}
+        error={decide.error}
+        onClose={() => setWaiving(false)}
+        onDecide={(state, remark) => decide.mutate({ state, remark }, { onSuccess: () => setWaiving(false) })}
+      />
       <MoveDialog
-        key={String(moving)}
+        key={`move-${moving}`}
         open={moving}
         takeNumber={take.number}
         from={take.shotNumber}

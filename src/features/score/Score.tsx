@@ -3,6 +3,7 @@ import {
   type PointerEvent,
   type ReactNode,
   type RefObject,
+  useCallback,
   useEffect,
   useMemo,
   useRef,
@@ -12,7 +13,7 @@ import type { NumberedFinding } from '../../lib/numberedFindings.ts';
 import { type Playhead, useFrame } from '../../lib/playhead.ts';
 import { useMediaQuery } from '../../lib/useReducedMotion.ts';
 import { useSize } from '../../lib/useSize.ts';
-import { columnMiddle, frameAt, layColumns, scrollToSee } from './columns.ts';
+import { columnMiddle, frameAt, layColumns, MIN_COLUMN, scrollToSee, THUMB_COLUMN } from './columns.ts';
 import { FindingsLane } from './FindingsLane.tsx';
 import { HangingCard } from './HangingCard.tsx';
 import { LitColumn } from './LitColumn.tsx';
@@ -28,6 +29,7 @@ export interface ScoreProps {
   frames: number;
   missing: readonly number[];
   playhead: Playhead;
+  picture: { width: number; height: number };
   /** Null while there is none: the strip and the notes are shown alone. */
   reading: Reading | null;
   /** The thing whose spacing the lanes show. */
@@ -54,7 +56,7 @@ export function Score(props: ScoreProps) {
   const narrow = useMediaQuery('(max-width: 47.99rem)');
   const names = narrow ? 76 : 116;
   const seen = Math.max(0, useSize(scroller).width - names);
-  const columns = useMemo(() => layColumns(frames, seen), [frames, seen]);
+  const columns = useMemo(() => layColumns(frames, seen, narrow ? THUMB_COLUMN : MIN_COLUMN), [frames, seen, narrow]);
   const { scrollLeft, ...range } = useVisibleFrames(scroller, columns, seen);
   useFollow(scroller, playhead, columns, seen);
 
@@ -63,6 +65,15 @@ export function Score(props: ScoreProps) {
   const source = reading?.source ?? NOTHING;
   const across = useMemo(() => (object ? spacingOf(object, source, own, 'across') : []), [object, source, own]);
   const up = useMemo(() => (object ? spacingOf(object, source, own, 'up') : []), [object, source, own]);
+
+  const { width } = props.picture;
+  const thingAt = useCallback(
+    (frame: number) => {
+      const mark = object?.marks.find((one) => one.frame === frame);
+      return mark ? mark.x / width : null;
+    },
+    [object, width],
+  );
 
   const frameUnder = (event: PointerEvent) => {
     const box = scroller.current!.getBoundingClientRect();
@@ -93,7 +104,14 @@ export function Score(props: ScoreProps) {
       >
         <div className="relative" style={{ width: names + columns.total }}>
           <LitColumn columns={columns} playhead={playhead} />
-          <StripLane {...shared} takeId={takeId} playhead={playhead} missing={props.missing} />
+          <StripLane
+            {...shared}
+            takeId={takeId}
+            playhead={playhead}
+            missing={props.missing}
+            aspect={props.picture.width / props.picture.height}
+            thingAt={thingAt}
+          />
           {reading && (
             <>
               <SpacingLane {...shared} name="Across" spacing={across} height={ACROSS} playhead={playhead} />

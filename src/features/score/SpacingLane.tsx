@@ -86,8 +86,10 @@ function LitValue({ spacing, playhead }: Pick<SpacingLaneProps, 'spacing' | 'pla
   if (!bar) return 'px a frame';
   return (
     <>
-      <span className="font-mono whitespace-nowrap">
-        <b className={bar.off ? 'text-red' : 'text-ink'}>{shownNumber(bar.drawn, 1)}</b> px a frame
+      <span className="whitespace-nowrap">
+        <b className={`font-mono ${bar.off ? 'text-red' : 'text-ink'}`}>{shownNumber(bar.drawn, 1)}</b>
+        <span className="max-md:hidden"> px a frame</span>
+        <span className="md:hidden"> px/f</span>
       </span>
       {bar.true !== null && (
         <span className="block font-mono whitespace-nowrap text-blue">

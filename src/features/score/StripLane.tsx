@@ -4,6 +4,7 @@ import { shownFrame } from '../../../shared/reading/document.ts';
 import { type Playhead, useFrame } from '../../lib/playhead.ts';
 import type { Columns, FrameRange } from './columns.ts';
 import { Lane } from './Lane.tsx';
+import { thumbShift } from './thumbShift.ts';
 
 interface StripLaneProps {
   takeId: string;
@@ -13,10 +14,16 @@ interface StripLaneProps {
   playhead: Playhead;
   /** Production numbers that are missing between the posted files. */
   missing: readonly number[];
+  /** Width of the picture over its height. */
+  aspect: number;
+  /** Where the thing is across the picture on a frame, 0 to 1; null where it is not seen. */
+  thingAt: (frame: number) => number | null;
 }
 
 const THUMB = 34;
 const LANE = 54;
+/** Width of a digit of a frame number with its share of space, px. */
+const DIGIT = 7.6;
 
 const Thumbs = memo(function Thumbs({
   takeId,
@@ -24,8 +31,12 @@ const Thumbs = memo(function Thumbs({
   columns,
   from,
   to,
+  aspect,
+  thingAt,
 }: Omit<StripLaneProps, 'range' | 'playhead' | 'missing'> & FrameRange) {
-  const every = columns.width < 30 ? 2 : 1;
+  const digits = String(shownFrame(columns.frames, firstFrame)).length;
+  const every = Math.ceil((digits * DIGIT) / columns.width);
+  const width = columns.width - 4;
   return Array.from({ length: to - from + 1 }, (_, index) => from + index).map((frame) => (
     <div
       key={frame}
@@ -39,9 +50,13 @@ const Thumbs = memo(function Thumbs({
         decoding="async"
         draggable={false}
         className="mt-1 rounded-[3px] bg-well object-cover outline outline-rule select-none"
-        style={{ width: columns.width - 4, height: THUMB }}
+        style={{
+          width,
+          height: THUMB,
+          objectPosition: `${100 * thumbShift(thingAt(frame) ?? 0.5, THUMB * aspect, width)}% 50%`,
+        }}
       />
-      {frame % every === 0 && (
+      {shownFrame(frame, firstFrame) % every === 0 && (
         <span className="mt-px font-mono text-2xs leading-tight text-graphite">{shownFrame(frame, firstFrame)}</span>
       )}
     </div>
@@ -74,11 +89,19 @@ function Cursor({ firstFrame, columns, playhead }: Pick<StripLaneProps, 'firstFr
 }
 
 /** The posted frames in small, under the numbers the production gives them. */
-export function StripLane({ takeId, firstFrame, columns, range, playhead, missing }: StripLaneProps) {
+export function StripLane({ takeId, firstFrame, columns, range, playhead, missing, aspect, thingAt }: StripLaneProps) {
   const gap = missing.length > 0 ? `, ${missing.length} missing` : '';
   return (
     <Lane name="Strip" sub={`${columns.frames} frames${gap}`} height={LANE} width={columns.total} first>
-      <Thumbs takeId={takeId} firstFrame={firstFrame} columns={columns} from={range.from} to={range.to} />
+      <Thumbs
+        takeId={takeId}
+        firstFrame={firstFrame}
+        columns={columns}
+        from={range.from}
+        to={range.to}
+        aspect={aspect}
+        thingAt={thingAt}
+      />
       <Cursor firstFrame={firstFrame} columns={columns} playhead={playhead} />
     </Lane>
   );

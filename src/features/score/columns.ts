@@ -1,5 +1,7 @@
-/** Narrowest column that a thumb can hit and a frame number fits in, px of the screen. */
-export const MIN_COLUMN = 36;
+/** Narrowest column that a frame number of four digits fits in, px of the screen. */
+export const MIN_COLUMN = 28;
+/** Narrowest column that a thumb can hit. */
+export const THUMB_COLUMN = 40;
 const MAX_COLUMN = 84;
 
 /** The frame axis that all lanes share: every frame is a column. Lengths are px of the screen. */
@@ -11,8 +13,8 @@ export interface Columns {
 }
 
 /** Lays `frames` columns into `room` px. A strip too long for the room keeps a readable column and scrolls. */
-export function layColumns(frames: number, room: number): Columns {
-  const width = Math.min(MAX_COLUMN, Math.max(MIN_COLUMN, frames > 0 ? room / frames : room));
+export function layColumns(frames: number, room: number, least = MIN_COLUMN): Columns {
+  const width = Math.min(MAX_COLUMN, Math.max(least, frames > 0 ? room / frames : room));
   return { frames, width, total: width * frames };
 }
 

@@ -35,8 +35,11 @@ const SHOWN_IN: Record<FindingKind, readonly Direction[]> = {
 /** A bar leaves its line when the gap is more than this share of the flight's usual step, and more than its scatter. */
 const LEAVES_BY = 0.1;
 
-/** Half a frame: contacts lie between frames, and the drawing at a contact still belongs to the flight it ends. */
-const CONTACT_SLACK = 0.5;
+/**
+ * Contacts lie between frames. A step that runs further than this past one is partly flight and partly not, so no blue
+ * line can be drawn for it.
+ */
+const CONTACT_SLACK = 0.15;
 
 function flightOver(flights: readonly Flight[], from: number, to: number): Flight | undefined {
   return flights.find(

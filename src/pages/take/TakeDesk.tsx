@@ -1,5 +1,5 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
-import { useMemo, useState } from 'react';
+import { useMemo, useRef, useState } from 'react';
 import { useNavigate } from 'react-router';
 import type { ShotWithTakes } from '../../../shared/api/shots.ts';
 import { type Take, takeContracts } from '../../../shared/api/takes.ts';
@@ -47,7 +47,13 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
   const { layers, setLayers } = useTakeAddress(playhead, firstFrame);
   const readingQuery = useQuery({ ...readingOptions(take.id), enabled: take.reading.status === 'read' });
   const reading = (take.reading.status === 'read' && readingQuery.data) || null;
-  const findings = useFindings(reading, playhead);
+  const desk = useRef<HTMLDivElement>(null);
+  // Where the margin lies below the picture, what it points at would be out of sight.
+  const showPicture = () => {
+    const top = desk.current?.getBoundingClientRect().top ?? 0;
+    if (top < 0) desk.current?.scrollIntoView({ behavior: 'smooth', block: 'start' });
+  };
+  const findings = useFindings(reading, playhead, showPicture);
   const talk = useThreads(take, actor.person, playhead);
   const readAgain = useMutation({
     mutationFn: () => call(takeContracts.readAgain, { params: { takeId: take.id } }),
@@ -78,19 +84,27 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
   const latest = Math.max(take.number, ...(shot?.takes.map((one) => one.number) ?? []));
   return (
     <div className={DESK}>
-      <TakeHead slug={slug} take={take} title={shot?.title ?? null} latest={latest} whyNot={whyNot(actor, take)}>
+      <TakeHead
+        slug={slug}
+        take={take}
+        title={shot?.title ?? null}
+        latest={latest}
+        whyNot={whyNot(actor, take)}
+        menu={
+          <TakeMenu
+            slug={slug}
+            take={take}
+            actor={actor}
+            onReadAgain={() => readAgain.mutate()}
+            onMoved={(moved) => void navigate(paths.take(slug, moved.shotNumber, moved.number), { replace: true })}
+          />
+        }
+      >
         {mayWrite && (
           <Button title="N" onClick={startNote}>
             Write a note
           </Button>
         )}
-        <TakeMenu
-          slug={slug}
-          take={take}
-          actor={actor}
-          onReadAgain={() => readAgain.mutate()}
-          onMoved={(moved) => void navigate(paths.take(slug, moved.shotNumber, moved.number), { replace: true })}
-        />
         <ReviewActions slug={slug} take={take} actor={actor} />
       </TakeHead>
       {readAgain.error && <ErrorNote className="mb-3">{sentenceOf(readAgain.error)}</ErrorNote>}
@@ -105,7 +119,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
           onRetry={() => void readingQuery.refetch()}
           findings={findings}
         />
-        <div className="order-1 min-w-0 lg:order-2">
+        <div ref={desk} className="order-1 min-w-0 lg:order-2">
           <div className="overflow-hidden rounded-t-card border border-rule bg-sheet max-md:rounded-none max-md:border-x-0">
             <PegBar layers={layers} onLayers={setLayers} hasReading={reading !== null}>
               <ObjectSwitch ids={objectIds} chosen={objectId} onChoose={setOwnObject} />
@@ -130,6 +144,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
             takeId={take.id}
             firstFrame={firstFrame}
             frames={take.frames}
+            picture={picture}
             missing={take.missingFrames}
             playhead={playhead}
             reading={reading}
@@ -167,8 +182,8 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
       </div>
       <div className="fixed inset-x-0 bottom-0 z-30 flex gap-2 border-t border-rule bg-sheet px-3.5 py-2.5 md:hidden">
         {mayWrite && (
-          <Button className="flex-1 px-2" onClick={startNote}>
-            Write a note
+          <Button className="flex-1 px-2" aria-label="Write a note" onClick={startNote}>
+            Note
           </Button>
         )}
         <ReviewActions slug={slug} take={take} actor={actor} thumb />

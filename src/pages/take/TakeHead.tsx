@@ -14,11 +14,13 @@ interface TakeHeadProps {
   latest: number;
   /** Why someone who reviews may not decide here. */
   whyNot: string | null;
+  /** What is seldom done to it; stands in the head of a phone too. */
+  menu: ReactNode;
   children: ReactNode;
 }
 
 /** Which take this is, what became of it, and what can be done with it. */
-export function TakeHead({ slug, take, title, latest, whyNot, children }: TakeHeadProps) {
+export function TakeHead({ slug, take, title, latest, whyNot, menu, children }: TakeHeadProps) {
   const hold = take.hold === null ? '' : `, ${holdWords(take.hold)}`;
   return (
     <div className="mb-3 flex flex-wrap items-center gap-x-3.5 gap-y-1.5 max-md:px-3.5">
@@ -26,7 +28,9 @@ export function TakeHead({ slug, take, title, latest, whyNot, children }: TakeHe
       <Link to={paths.sheet(slug)} className="font-mono text-sm text-graphite no-underline hover:underline">
         {take.shotNumber}
       </Link>
-      <h1 className="text-2xl max-md:order-first max-md:w-full max-md:text-[1.25rem]">{title ?? take.shotNumber}</h1>
+      <h1 className="text-2xl max-md:-order-2 max-md:w-[calc(100%-4rem)] max-md:text-[1.25rem]">
+        {title ?? take.shotNumber}
+      </h1>
       <StateChip state={take.review} />
       <span className="text-graphite">
         Take {take.number} · {fpsWords(take.fps)}
@@ -41,6 +45,7 @@ export function TakeHead({ slug, take, title, latest, whyNot, children }: TakeHe
         {whyNot && <span className="text-sm text-graphite">{whyNot}</span>}
         {children}
       </div>
+      <div className="max-md:-order-1 max-md:ml-auto">{menu}</div>
     </div>
   );
 }

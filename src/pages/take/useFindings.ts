@@ -11,8 +11,8 @@ export function tellingFrame(finding: Pick<NumberedFinding, 'mend' | 'fromFrame'
 
 const NONE: NumberedFinding[] = [];
 
-/** The findings of a reading, the chosen one, and the one whose mend is shown. */
-export function useFindings(reading: Reading | null, playhead: Playhead) {
+/** The findings of a reading, the chosen one, and the one whose mend is shown. `onShown`: a mend is to be seen now. */
+export function useFindings(reading: Reading | null, playhead: Playhead, onShown: () => void) {
   const findings = useMemo(() => (reading ? numberedFindings(reading) : NONE), [reading]);
   const [chosen, setChosen] = useState<string | null>(null);
   const [mend, setMend] = useState<string | null>(null);
@@ -28,7 +28,10 @@ export function useFindings(reading: Reading | null, playhead: Playhead) {
     choose: (id: string) => {
       const finding = findings.find((one) => one.id === id);
       if (chosen === id) setChosen(null);
-      else if (finding) go(finding);
+      else if (finding) {
+        go(finding);
+        onShown();
+      }
     },
     step: (by: 1 | -1) => {
       const at = findings.findIndex((one) => one.id === chosen);
@@ -41,6 +44,7 @@ export function useFindings(reading: Reading | null, playhead: Playhead) {
       setMend(id);
       const finding = findings.find((one) => one.id === id);
       if (!finding) return;
+      onShown();
       setChosen(finding.id);
       if (!finding.mend.some((one) => one.frame === playhead.frame())) playhead.choose(tellingFrame(finding));
     },

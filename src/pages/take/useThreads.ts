@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import type { Person } from '../../../shared/api/people.ts';
 import type { Take } from '../../../shared/api/takes.ts';
 import type { Thread } from '../../../shared/api/threads.ts';
@@ -26,6 +26,13 @@ export function useThreads(take: Take, me: Person, playhead: Playhead) {
   const pending = notYetThere(usePendingNotes(take.id), threads, me.id);
   const [open, setOpen] = useState<Open>('latest');
   const writing = useWriteNote(take.id, (thread) => setOpen({ thread }));
+
+  // Whoever comes without a frame lands where the talk is.
+  const landing = open === 'latest' ? latestThread(threads)?.frame : undefined;
+  useEffect(() => {
+    const hasFrame = new URLSearchParams(window.location.search).has('frame');
+    if (landing !== undefined && !hasFrame && playhead.frame() === 1) playhead.choose(landing);
+  }, [landing, playhead]);
 
   const hanging = hangingOf(open, threads, pending, playhead);
   const openId = hanging?.kind === 'thread' ? hanging.thread.id : null;
