@@ -115,19 +115,19 @@ export function pantry(): string {
   ].join('');
 }
 
-/** 010-0060: the terracotta corner; an egg goes over the shoulder into the bowl. */
+/** 010-0060: the kitchen corner; an egg goes over the shoulder into the bowl. */
 export function eggCorner(): string {
   const bunting = Array.from({ length: 9 }, (_, index) => {
     const x = 40 + index * 108;
     return shape(
       `M${x} ${44 + 12 * Math.sin(index * 1.3)} l34 2 l-17 34 Z`,
-      ['#ead7a4', '#8fa07a', '#f4ecd6'][index % 3]!,
+      ['#d9963f', '#6f8562', '#f4ecd6'][index % 3]!,
     );
   });
   return [
-    wash('plaster', 0, 540, ['#cf9b76', '#c48862', '#b67850']),
-    flecks(41, 320, '#f3cba6', 0.3),
-    flecks(42, 120, '#7f4a2e', 0.18),
+    wash('plaster', 0, 540, ['#c9c39a', '#bab389', '#a8a077']),
+    flecks(41, 320, '#eeeacb', 0.35),
+    flecks(42, 120, '#6b6644', 0.18),
     line('M0 40 Q240 74 480 46 T960 44', '#6b4630', 3),
     bunting.join(''),
     // A half door with the fog behind it.
