@@ -18,6 +18,8 @@ export interface Account {
   freedom: number;
   /** Minus twice the log likelihood, with the price of what is assumed: what accounts are compared by; less is better. */
   cost: number;
+  /** How many of its contacts are no contacts. */
+  impossible: number;
   /** Covariance of the parameters over noise², worked out for the account that is chosen. */
   covariance: Float64Array | null;
 }
@@ -48,34 +50,35 @@ export interface Field {
   replicates: { sum: number; freedom: number };
   /** Frames from one drawing to the next, as most are. */
   step: number;
+  /** Noise per axis as neighbouring drawings show it, px. */
+  noise: number;
 }
 
-/** Fits one account, leaving out drawings that cost more than they are worth. */
-export function fitAccount(
-  path: Path,
-  theta: Float64Array,
+/** Fits one account with the weights given. */
+export function fitOnce(
+  start: { path: Path; theta: Float64Array },
   fault: Fault | null,
   depth: boolean,
   weight: Float64Array,
   field: Field,
 ): Account {
-  const used = Float64Array.from(weight);
-  const samples: Samples = { ...field.samples, weight: used };
-  let account = judge(fitPath(path, theta, samples), fault, depth, used, field);
+  return judge(fitPath(start.path, start.theta, { ...field.samples, weight }), fault, depth, weight, field);
+}
+
+/** Fits an account again and again without the drawing that lies farthest off, as long as leaving it out is worth its price. */
+export function trim(first: Account, field: Field): Account {
+  let account = first;
   const most = 1 + Math.floor(field.drawings.length / 6);
   for (let round = 0; round < most; round += 1) {
     const worst = worstDrawing(account, field);
     if (worst < 0) break;
-    const kept = used[worst]!;
-    used[worst] = 0;
-    const next = judge(fitPath(path, account.fit.theta, samples), fault, depth, used, field);
-    if (next.cost >= account.cost) {
-      used[worst] = kept;
-      break;
-    }
+    const weight = Float64Array.from(account.weight);
+    weight[worst] = 0;
+    const next = fitOnce(account.fit, account.fault, account.depth, weight, field);
+    if (next.cost >= account.cost) break;
     account = next;
   }
-  return readmit(account, field);
+  return account.left.length ? readmit(account, field) : account;
 }
 
 /** Takes drawings back in that the path passes through after all. */
@@ -86,13 +89,7 @@ function readmit(account: Account, field: Field): Account {
     if (off * field.drawings[i]!.weight > 30 * best.noise2) continue;
     const weight = Float64Array.from(best.weight);
     weight[i] = field.drawings[i]!.weight;
-    const next = judge(
-      fitPath(best.fit.path, best.fit.theta, { ...field.samples, weight }),
-      best.fault,
-      best.depth,
-      weight,
-      field,
-    );
+    const next = fitOnce(best.fit, best.fault, best.depth, weight, field);
     if (next.cost < best.cost) best = next;
   }
   return best;
@@ -128,18 +125,23 @@ function judge(fit: PathFit, fault: Fault | null, depth: boolean, weight: Float6
   const free = Math.max(1, 2 * used + field.replicates.freedom - fit.path.size - extra);
   const squares = fit.rss + field.replicates.sum + PRIOR_FREEDOM * PRIOR_NOISE ** 2;
   const marks = 2 * used + field.replicates.freedom + PRIOR_FREEDOM;
-  const odd = impossible(fit, weight, field) * IMPOSSIBLE_PRICE;
+  const odd = impossible(fit, weight, field);
   const plain = fit.path.size - (fit.path.shape ? 1 : 0) - (depth ? 2 : 0);
   const price = PARAMETER_PRICE * plain + (fault ? PRICE[fault.kind] : 0) + (depth ? PRICE.depth : 0);
   return {
     fault,
     depth,
     fit,
-    weight: Float64Array.from(weight),
+    weight,
     left,
     noise2: squares / (free + PRIOR_FREEDOM),
     freedom: free,
-    cost: marks * Math.log(squares / marks) + (price * marks) / (free + PRIOR_FREEDOM) + left.length * LOST_PRICE + odd,
+    cost:
+      marks * Math.log(squares / marks) +
+      (price * marks) / (free + PRIOR_FREEDOM) +
+      left.length * LOST_PRICE +
+      odd * IMPOSSIBLE_PRICE,
+    impossible: odd,
     covariance: null,
   };
 }

@@ -35,6 +35,8 @@ export interface Path {
   delayFrom: number;
   delay: number;
   size: number;
+  /** Per parameter: first and last span whose places depend on it. */
+  reach: Int32Array;
 }
 
 /** Lays out the parameters of a path whose spans are known. `fixed` are the times of the two outer knots. */
@@ -54,6 +56,7 @@ export function layOut(spans: Span[], fixed: { start: number; end: number }, opt
     delayFrom: Infinity,
     delay: 0,
     size: gravities,
+    reach: new Int32Array(0),
     ...options,
   };
   path.fixedTime[0] = fixed.start;
@@ -76,7 +79,27 @@ export function layOut(spans: Span[], fixed: { start: number; end: number }, opt
     path.shapeAt = path.size;
     path.size += path.shape.parameters;
   }
+  path.reach = reachOf(path);
   return path;
+}
+
+/** Which spans each parameter moves: a knot moves the spans beside it and those whose knots follow from it. */
+function reachOf(path: Path): Int32Array {
+  const last = path.spans.length - 1;
+  const reach = new Int32Array(2 * path.size);
+  for (let p = 0; p < path.size; p += 1) reach[2 * p + 1] = last;
+  if (path.depthAt >= 0) return reach;
+  for (let k = 0; k <= last + 1; k += 1) {
+    let end = Math.min(last, k);
+    while (end < last && end + 1 > k && (path.xAt[end + 1]! < 0 || path.yAt[end + 1]! < 0)) end += 1;
+    for (const at of [path.timeAt[k]!, path.xAt[k]!, path.yAt[k]!]) {
+      if (at < 0) continue;
+      reach[2 * at] = Math.max(0, k - 1);
+      reach[2 * at + 1] = end;
+    }
+  }
+  if (path.shape) reach[2 * path.shapeAt] = reach[2 * path.shapeAt + 1] = path.shape.span;
+  return reach;
 }
 
 /** Places of the knots for given parameters, written into the four arrays of `out`. */
@@ -124,6 +147,8 @@ export function follow(
   times: Float64Array,
   xs: Float64Array,
   ys: Float64Array,
+  from = 0,
+  to = times.length,
 ): void {
   const { spans, shape } = path;
   const last = spans.length - 1;
@@ -131,7 +156,7 @@ export function follow(
   const moveFrom = spans[0]!.kind === 'rest' ? knots.t[1]! : -Infinity;
   const moveTo = spans[last]!.kind === 'rest' && last > 0 ? knots.t[last]! : Infinity;
   let s = 0;
-  for (let i = 0; i < times.length; i += 1) {
+  for (let i = from; i < to; i += 1) {
     const t = times[i]! - (i >= path.delayFrom ? path.delay : 0);
     while (s < last && t > knots.t[s + 1]!) s += 1;
     while (s > 0 && t <= knots.t[s]!) s -= 1;

@@ -107,6 +107,7 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
   const field = {
     drawings: local,
     replicates,
+    noise: rough,
     step: quantile(
       local.slice(1).map((d, i) => d.t - local[i]!.t),
       0.5,

@@ -23,6 +23,23 @@ export const SHAPE_NOTHING: Record<ShapeName, number> = {
   'even-steps': 0,
 };
 
+/** Where the search for a shape's number starts (some more than once): a number, and a share of the time between drawings. */
+export const SHAPE_STARTS: Record<ShapeName, readonly { base: number; steps: number }[]> = {
+  apex: [{ base: 0, steps: 0 }],
+  power: [{ base: 2, steps: 0 }],
+  hang: [
+    { base: 0, steps: 1 },
+    { base: 0, steps: 3.5 },
+  ],
+  'hang-up': [
+    { base: 0, steps: 1 },
+    { base: 0, steps: 3.5 },
+  ],
+  ease: [{ base: 0, steps: 0 }],
+  'even-path': [{ base: 0.2, steps: 0 }],
+  'even-steps': [{ base: 0.2, steps: 0 }],
+};
+
 /**
  * Time within the true flight at which its x and its y stand at time `u` after take-off, into `out`.
  * `length` is the flight's duration, `apex` the time of its apex (frames after take-off, may lie outside) and `bend` its

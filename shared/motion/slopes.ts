@@ -1,0 +1,131 @@
+import type { Samples } from './fit.ts';
+import type { Knots, Path } from './path.ts';
+import { follow, makeKnotsFor, placeKnots } from './path.ts';
+
+/** Working room of a fit, used again from fit to fit: slopes of every place by every parameter, and the normal equations. */
+export interface Slopes {
+  /** Row k holds the slopes of all x, then of all y, by parameter k; outside `from[k]`…`to[k]` they are zero and not written. */
+  rows: Float64Array;
+  stride: number;
+  from: Int32Array;
+  to: Int32Array;
+  tx: Float64Array;
+  ty: Float64Array;
+  normal: Float64Array;
+  damped: Float64Array;
+  gradient: Float64Array;
+  step: Float64Array;
+  trial: Float64Array;
+}
+
+let shared: Slopes | null = null;
+let sharedMarks = 0;
+let sharedSize = 0;
+
+/** Room for `n` drawings and `p` parameters. */
+export function roomFor(n: number, p: number): Slopes {
+  if (!shared || n > sharedMarks || p > sharedSize) {
+    sharedMarks = Math.max(n, sharedMarks, 64);
+    sharedSize = Math.max(p, sharedSize, 24);
+    shared = {
+      rows: new Float64Array(sharedSize * 2 * sharedMarks),
+      stride: sharedMarks,
+      from: new Int32Array(sharedSize),
+      to: new Int32Array(sharedSize),
+      tx: new Float64Array(sharedMarks),
+      ty: new Float64Array(sharedMarks),
+      normal: new Float64Array(sharedSize * sharedSize),
+      damped: new Float64Array(sharedSize * sharedSize),
+      gradient: new Float64Array(sharedSize),
+      step: new Float64Array(sharedSize),
+      trial: new Float64Array(sharedSize),
+    };
+  }
+  return shared;
+}
+
+/** Step of the forward difference of each parameter: times and places in their own units, depth and gravity relative. */
+function differenceOf(path: Path, k: number, value: number): number {
+  if (path.depthAt >= 0 && (k === path.depthAt || k === path.depthAt + 1)) return 1e-8;
+  if (k < path.gravities) return 1e-6 * Math.max(1e-3, Math.abs(value));
+  if (k === path.shapeAt) return 1e-6;
+  return 1e-5;
+}
+
+/** Slopes of every place by every parameter, by forward differences over the drawings that the parameter reaches. */
+export function differentiate(
+  path: Path,
+  theta: Float64Array,
+  samples: Samples,
+  xs: Float64Array,
+  ys: Float64Array,
+  room: Slopes,
+): void {
+  const p = path.size;
+  const n = samples.t.length;
+  const knots: Knots = makeKnotsFor(path);
+  placeKnots(path, theta, knots);
+  const first = firstDrawings(path, knots, samples.t);
+  const { rows, stride, tx, ty } = room;
+  for (let k = 0; k < p; k += 1) {
+    const from = first[path.reach[2 * k]!]!;
+    const to = first[path.reach[2 * k + 1]! + 1]!;
+    room.from[k] = from;
+    room.to[k] = to;
+    const value = theta[k]!;
+    theta[k] = value + differenceOf(path, k, value);
+    const inverse = 1 / (theta[k]! - value);
+    placeKnots(path, theta, knots);
+    follow(path, theta, knots, samples.t, tx, ty, from, to);
+    theta[k] = value;
+    const x = 2 * k * stride;
+    const y = x + stride;
+    for (let i = from; i < to; i += 1) {
+      rows[x + i] = (tx[i]! - xs[i]!) * inverse;
+      rows[y + i] = (ty[i]! - ys[i]!) * inverse;
+    }
+  }
+  if (n === 0) room.from.fill(0);
+}
+
+/** Index of the first drawing of every span, and of the end. */
+function firstDrawings(path: Path, knots: Knots, times: Float64Array): Int32Array {
+  const spans = path.spans.length;
+  const first = new Int32Array(spans + 1);
+  first[spans] = times.length;
+  let i = 0;
+  for (let s = 1; s < spans; s += 1) {
+    while (i < times.length && times[i]! - (i >= path.delayFrom ? path.delay : 0) <= knots.t[s]!) i += 1;
+    first[s] = i;
+  }
+  return first;
+}
+
+/** Normal matrix and gradient of the weighted residuals, from slopes worked out before. */
+export function gather(samples: Samples, xs: Float64Array, ys: Float64Array, p: number, room: Slopes): void {
+  const { rows, stride, from, to, normal, gradient, tx, ty } = room;
+  const { weight } = samples;
+  for (let i = 0; i < xs.length; i += 1) {
+    tx[i] = weight[i]! * (samples.x[i]! - xs[i]!);
+    ty[i] = weight[i]! * (samples.y[i]! - ys[i]!);
+  }
+  for (let a = 0; a < p; a += 1) {
+    const ax = 2 * a * stride;
+    const ay = ax + stride;
+    let slope = 0;
+    for (let i = from[a]!; i < to[a]!; i += 1) slope += rows[ax + i]! * tx[i]! + rows[ay + i]! * ty[i]!;
+    gradient[a] = slope;
+    for (let b = 0; b <= a; b += 1) {
+      const bx = 2 * b * stride;
+      const by = bx + stride;
+      const start = Math.max(from[a]!, from[b]!);
+      const end = Math.min(to[a]!, to[b]!);
+      let sum = 0;
+      for (let i = start; i < end; i += 1) {
+        sum += weight[i]! * (rows[ax + i]! * rows[bx + i]! + rows[ay + i]! * rows[by + i]!);
+      }
+      normal[a * p + b] = sum;
+      normal[b * p + a] = sum;
+    }
+  }
+}

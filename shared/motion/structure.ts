@@ -1,0 +1,106 @@
+import type { Account, Fault, Field } from './account.ts';
+import { fitOnce, trim } from './account.ts';
+import { SHAPE_STARTS } from './shapes.ts';
+import type { ShapeName } from './shapes.ts';
+import type { Sketch } from './sketch.ts';
+import { flightLast, pathOf, recast, restFirst, restLast, rollFirst, sketchFrom, withoutKnot } from './sketch.ts';
+
+interface Option {
+  sketch: Sketch;
+  fault: Fault | null;
+  depth: boolean;
+  shape?: number;
+}
+
+/** A structure that explains the track at less cost: other ends, a contact more or fewer; null when there is none. */
+export function restructure(account: Account, field: Field, full: Float64Array): Account | null {
+  const weight = Float64Array.from(account.weight);
+  for (let i = 0; i < weight.length; i += 1) if (i < OUTER || i >= weight.length - OUTER) weight[i] = full[i]!;
+  const { path, theta } = account.fit;
+  const depth: [number, number] | undefined = account.depth
+    ? [theta[path.depthAt]!, theta[path.depthAt + 1]!]
+    : undefined;
+  let best: Account | null = null;
+  let second: Account | null = null;
+  for (const option of optionsFor(account, field)) {
+    const { fault } = option;
+    if (fault && 'span' in fault && option.sketch.spans[fault.span]?.kind !== 'flight') continue;
+    const start = pathOf(option.sketch, fault, option.depth, field, { shape: option.shape, depth });
+    const next = fitOnce(start, fault, option.depth, weight, field);
+    if (next.cost < (best?.cost ?? Infinity)) {
+      second = best;
+      best = next;
+    } else if (next.cost < (second?.cost ?? Infinity)) second = next;
+  }
+  const tries = [best, second].filter((one) => one !== null && one.cost < account.cost + 60) as Account[];
+  const trimmed = tries.map((one) => trim(one, field)).sort((a, b) => a.cost - b.cost)[0];
+  return trimmed && trimmed.cost < account.cost - 1e-6 ? trimmed : null;
+}
+
+/** Drawings at either end whose place in the structure is tried anew. */
+const OUTER = 4;
+
+function optionsFor(account: Account, field: Field): Option[] {
+  const { path, theta, knots } = account.fit;
+  const sketch = sketchFrom(path, theta, knots);
+  const { spans } = sketch;
+  const last = spans.length - 1;
+  const { fault, depth } = account;
+  const shape = path.shapeAt >= 0 ? theta[path.shapeAt]! : undefined;
+  const options: Option[] = [];
+  const add = (next: Sketch | null, shift: (span: number) => number = (span) => span) => {
+    if (!next) return;
+    const moved = fault && 'span' in fault ? { ...fault, span: shift(fault.span) } : fault;
+    options.push({ sketch: next, fault: moved, depth, shape });
+  };
+  for (const count of [1, 2, 3]) add(restFirst(sketch, count, field), (span) => span + 1);
+  for (const count of [1, 2, 3]) add(restLast(sketch, count, field));
+  for (const count of [2, 3, 4]) add(flightLast(sketch, count, field));
+  if (spans[0]!.kind === 'flight') {
+    for (const share of [0.15, 0.3, 0.45, 0.6, 0.75]) {
+      const rolled = rollFirst(sketch, share, field);
+      if (!rolled) continue;
+      options.push({ sketch: rolled, fault: null, depth: false }, { sketch: rolled, fault: null, depth: true });
+    }
+  }
+  if (last > 0) {
+    if (spans[0]!.kind === 'flight') add(recast(sketch, 0, 'rest', false));
+    if (spans[last]!.kind === 'flight') add(recast(sketch, last, 'rest', false));
+  }
+  for (let k = 1; k <= last; k += 1) {
+    const before = spans[k - 1]!.kind;
+    const after = spans[k]!.kind;
+    if (after === 'flight' && before !== 'flight') add(recast(sketch, k, 'flight', !spans[k]!.tangent));
+    const outer = (k === 1 && before === 'rest') || (k === last && after === 'rest');
+    if (before !== 'flight' && !outer) continue;
+    if (after !== 'flight' && !outer) continue;
+    const joined = withoutKnot(sketch, k);
+    add(joined, (span) => (span >= k ? span - 1 : span));
+    if (before === 'flight' && after === 'flight' && isDoubtful(account, k)) {
+      for (const name of ALL_SHAPES) {
+        for (const start of SHAPE_STARTS[name]) {
+          options.push({
+            sketch: joined,
+            fault: { kind: 'shape', name, span: k - 1 },
+            depth: false,
+            shape: start.base + start.steps * field.step,
+          });
+        }
+      }
+    }
+  }
+  return options;
+}
+
+const ALL_SHAPES: readonly ShapeName[] = ['ease', 'even-path', 'apex', 'power', 'hang', 'hang-up', 'even-steps'];
+
+/** A contact that kicks far less than a bounce between two flights of these lengths would. */
+function isDoubtful(account: Account, k: number): boolean {
+  const { knots, theta } = account.fit;
+  const g = theta[0]!;
+  const left = knots.t[k]! - knots.t[k - 1]!;
+  const right = knots.t[k + 1]! - knots.t[k]!;
+  const down = (knots.y[k]! - knots.y[k - 1]!) / left + 0.5 * g * left;
+  const up = (knots.y[k + 1]! - knots.y[k]!) / right - 0.5 * g * right;
+  return down - up < 0.3 * g * (left + right);
+}
