@@ -32,11 +32,21 @@ export interface OutlineFit {
 const DISC_POINTS = 72;
 const MOST_POINTS = 96;
 
-export function discOutline(radius: number): Outline {
-  const angle = (k: number): number => (2 * Math.PI * k) / DISC_POINTS;
+/**
+ * The outline of a disc, or of the band that a disc leaves when it moves during the exposure.
+ * @param smear way that the disc goes during the exposure, px
+ */
+export function discOutline(radius: number, smear = { x: 0, y: 0 }): Outline {
+  const angle = (k: number): number => (2 * Math.PI * (k + 0.5)) / DISC_POINTS;
   const outX = Float64Array.from({ length: DISC_POINTS }, (_, k) => Math.cos(angle(k)));
   const outY = Float64Array.from({ length: DISC_POINTS }, (_, k) => Math.sin(angle(k)));
-  return { x: outX.map((value) => value * radius), y: outY.map((value) => value * radius), outX, outY };
+  const end = (k: number): number => (outX[k] * smear.x + outY[k] * smear.y >= 0 ? 0.5 : -0.5);
+  return {
+    x: outX.map((value, k) => value * radius + end(k) * smear.x),
+    y: outY.map((value, k) => value * radius + end(k) * smear.y),
+    outX,
+    outY,
+  };
 }
 
 /** The outline of a filled shape around its centroid; normals are smoothed over a few pixels. */

@@ -27,18 +27,17 @@ export function settle(track: FoundTrack): Placed[] {
   const usual = usualSizes(track);
   const offs = track.shapes.map((shape, k) => Math.log(shape.area / usual[k].area));
   const spread = 1.5 * median(offs.map(Math.abs));
-  const odd = offs.map(
-    (off, k) => Math.abs(off) > Math.max(LEAST_ODDITY, 3 * spread) && !isBlurred(track, k, usual[k].short),
-  );
+  const odd = offs.map((off) => Math.abs(off) > Math.max(LEAST_ODDITY, 3 * spread));
   const round = isRound(track, odd);
+  const rim = round ? rimShare(track, odd, usual) : 1;
   return track.path.flatMap((candidate, k) => {
     const shape = track.shapes[k];
-    const radius = Math.sqrt(usual[k].area / Math.PI);
+    const radius = rim * discRadius(usual[k]);
     const cutOff = candidate.onEdge > 0.3 * radius;
     const plain: Placed = { candidate, x: shape.x, y: shape.y, radius, support: Math.exp(-Math.abs(offs[k])) };
     const doubtful = odd[k] || cutOff;
     if (!doubtful && !round) return [plain];
-    const outline = round ? discOutline(radius) : nearestOutline(track, odd, k);
+    const outline = round ? discOutline(radius, usual[k].smear) : nearestOutline(track, odd, k);
     if (!outline) return [plain];
     // A patch too much or too little moves a centroid by no more than its share of the area times two radii.
     const pull = 2.2 * radius * Math.abs(Math.exp(offs[k]) - 1);
@@ -52,56 +51,61 @@ export function settle(track: FoundTrack): Placed[] {
 
 const TURNS = Array.from({ length: 25 }, (_, k) => ((k - 12) * Math.PI) / 60);
 
-/** True where a shape is larger only because it is smeared along its own way during the exposure. */
-function isBlurred(track: FoundTrack, k: number, short: number): boolean {
-  const shape = track.shapes[k];
-  const before = track.shapes[Math.max(0, k - 1)];
-  const after = track.shapes[Math.min(track.shapes.length - 1, k + 1)];
-  const [dx, dy] = [after.x - before.x, after.y - before.y];
-  if (Math.hypot(dx, dy) < 4 || Math.abs(Math.log(shape.short / short)) > 0.09) return false;
-  const along = Math.abs(Math.cos(Math.atan2(dy, dx) - shape.tilt));
-  return shape.long / shape.short < 1.04 || along > 0.94;
-}
-
+/** What the thing looks like on a frame when nothing else touches it. */
 interface Usual {
   area: number;
-  short: number;
+  /** Way that it goes during the exposure, px. */
+  smear: { x: number; y: number };
 }
 
 /** Frames on either side that say how large the thing is where it comes nearer or goes away. */
 const NEIGHBOURS = 9;
 
-/** How large the thing is on each frame: of one size, or smoothly changing where it comes nearer or goes away. */
+/** How large the thing is on each frame: of one size, smeared where it is fast, or growing where it comes nearer. */
 function usualSizes(track: FoundTrack): Usual[] {
   const { path, shapes } = track;
-  const speed = path.map((_, k) =>
-    k === 0 ? 0 : Math.hypot(shapes[k].x - shapes[k - 1].x, shapes[k].y - shapes[k - 1].y),
-  );
+  const velocity = velocities(track);
+  const speed = velocity.map(({ x, y }) => Math.hypot(x, y));
   const free = path.map((_, k) => k).filter((k) => path[k].onEdge === 0);
   const moving = free.filter((k) => speed[k] > 1);
   const ks = moving.length >= 6 ? moving : free.length >= 3 ? free : path.map((_, k) => k);
   const logs = ks.map((k) => Math.log(shapes[k].area));
   const middle = median(logs);
   const flat = median(logs.map((value) => Math.abs(value - middle)));
-  const local = path.map((candidate) =>
-    localSize(
-      candidate.index,
-      ks.map((k) => path[k].index),
-      logs,
-    ),
-  );
+  const times = ks.map((k) => path[k].index);
+  const local = path.map((candidate) => localSize(candidate.index, times, logs));
   const rest = median(ks.map((k, n) => Math.abs(logs[n] - local[k])));
   const range = Math.max(...ks.map((k) => local[k])) - Math.min(...ks.map((k) => local[k]));
-  if (range > 0.25 && rest < 0.5 * flat) {
-    const flatness = median(ks.map((k) => shapes[k].short / Math.sqrt(shapes[k].area)));
-    return local.map((value) => ({ area: Math.exp(value), short: flatness * Math.exp(value / 2) }));
-  }
-  // The slower half of the frames is the less blurred one.
-  const limit = median(ks.map((k) => speed[k]));
-  const slow = ks.filter((k) => speed[k] <= limit);
-  const area = median(slow.map((k) => shapes[k].area));
-  const short = median(slow.map((k) => shapes[k].short));
-  return path.map(() => ({ area, short }));
+  const still = { x: 0, y: 0 };
+  if (range > 0.25 && rest < 0.5 * flat) return local.map((value) => ({ area: Math.exp(value), smear: still }));
+
+  const areas = ks.map((k) => shapes[k].area);
+  const line = medianLine(
+    ks.map((k) => speed[k]),
+    areas,
+  );
+  const sharp = line.at - line.slope * line.time;
+  const fastest = Math.max(...ks.map((k) => speed[k]));
+  const smeared = line.slope * fastest > 0.06 * sharp && sharp > 0;
+  const width = 2 * Math.sqrt(sharp / Math.PI);
+  return path.map((_, k) => {
+    if (!smeared) return { area: Math.exp(middle), smear: still };
+    const perSpeed = line.slope / width;
+    return {
+      area: sharp + line.slope * speed[k],
+      smear: { x: velocity[k].x * perSpeed, y: velocity[k].y * perSpeed },
+    };
+  });
+}
+
+/** Velocity on each frame from its neighbours on both sides, px/frame. */
+function velocities({ path, shapes }: FoundTrack): { x: number; y: number }[] {
+  return path.map((_, k) => {
+    const before = Math.max(0, k - 1);
+    const after = Math.min(path.length - 1, k + 1);
+    const frames = Math.max(1, path[after].index - path[before].index);
+    return { x: (shapes[after].x - shapes[before].x) / frames, y: (shapes[after].y - shapes[before].y) / frames };
+  });
 }
 
 function localSize(index: number, times: number[], logs: number[]): number {
@@ -134,7 +138,37 @@ function medianLine(times: number[], values: number[]): { slope: number; at: num
 /** True for a disc, also one that is smeared along its way: short across, and everywhere as a disc moved along would be. */
 function isRound(track: FoundTrack, odd: boolean[]): boolean {
   const errors = track.shapes.filter((_, k) => !odd[k] && track.path[k].onEdge === 0).map(offDisc);
-  return errors.length >= 3 && median(errors) < 0.02;
+  return errors.length >= 3 && median(errors) < 0.012;
+}
+
+/** Frames on which the radius of a disc is sought. */
+const RIM_FRAMES = 7;
+
+/**
+ * How large a disc is against the area that its blurred edge and its smear give it: the radius under which the outline
+ * stands out most, as a share of the radius of a disc of that area.
+ */
+function rimShare(track: FoundTrack, odd: boolean[], usual: Usual[]): number {
+  const clear = track.path.map((_, k) => k).filter((k) => !odd[k] && track.path[k].onEdge === 0);
+  const stride = Math.max(1, Math.floor(clear.length / RIM_FRAMES));
+  const chosen = clear.filter((_, n) => n % stride === 0);
+  let best = { share: 1, score: Number.NEGATIVE_INFINITY };
+  for (let share = 0.8; share < 1.07; share += 0.03) {
+    let score = 0;
+    for (const k of chosen) {
+      const { view, body } = track.path[k];
+      const outline = discOutline(share * discRadius(usual[k]), usual[k].smear);
+      score += fitOutline(view, outline, track.shapes[k], 2, body, [0]).score / body;
+    }
+    if (score > best.score) best = { share, score };
+  }
+  return best.share;
+}
+
+/** Radius of the disc that has a frame's usual area when it is smeared as far as there. */
+function discRadius({ area, smear }: Usual): number {
+  const way = Math.hypot(smear.x, smear.y);
+  return (Math.sqrt(way ** 2 + Math.PI * area) - way) / Math.PI;
 }
 
 /**

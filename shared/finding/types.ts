@@ -19,6 +19,8 @@ export interface PointAt {
 export interface AnalysisRequest {
   id: string;
   framePaths: string[];
+  /** Frame of the document each picture belongs to, from 1 and rising; left out: one after the other, none missing. */
+  frameNumbers?: number[];
   kind: Extract<Source['kind'], 'frames' | 'strip' | 'animation' | 'video'>;
   /** What the production calls the first picture. */
   firstFrame: number;
