@@ -1,7 +1,7 @@
 import clsx from 'clsx';
 import type { ReactNode } from 'react';
 import { useKeys } from '../../lib/keys.ts';
-import { LAYER_NAMES, LAYERS, type Layer, switchLayer } from './layerChoice.ts';
+import { LAYER_NAMES, LAYERS, type Layer } from './layerChoice.ts';
 
 /** What each layer looks like on the picture, small. */
 const SAMPLES: Record<Layer, ReactNode> = {
@@ -55,7 +55,7 @@ function LayerSwitch({
 
 export interface PegBarProps {
   layers: ReadonlySet<Layer>;
-  onLayers: (layers: ReadonlySet<Layer>) => void;
+  onSwitch: (layer: Layer) => void;
   hasReading: boolean;
   /** Play and the frame's number, at the right end. */
   children: ReactNode;
@@ -65,13 +65,13 @@ const AT_LEFT = LAYERS.slice(0, 4);
 const AT_RIGHT = LAYERS.slice(4);
 
 /** The bar with the three pegs: the layers over the picture, each on and off, and Play. */
-export function PegBar({ layers, onLayers, hasReading, children }: PegBarProps) {
+export function PegBar({ layers, onSwitch, hasReading, children }: PegBarProps) {
   useKeys(
     'Layers',
     LAYERS.map((layer, index) => ({
       key: String(index + 1),
       says: `${LAYER_NAMES[layer]} on or off`,
-      run: () => hasReading && onLayers(switchLayer(layers, layer)),
+      run: () => hasReading && onSwitch(layer),
     })),
   );
   const switches = (some: readonly Layer[]) =>
@@ -81,7 +81,7 @@ export function PegBar({ layers, onLayers, hasReading, children }: PegBarProps) 
         layer={layer}
         hasReading={hasReading}
         on={layers.has(layer)}
-        onSwitch={() => onLayers(switchLayer(layers, layer))}
+        onSwitch={() => onSwitch(layer)}
       />
     ));
   return (

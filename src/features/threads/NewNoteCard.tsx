@@ -27,7 +27,7 @@ export function NewNoteCard(props: NewNoteCardProps) {
   const { frame, firstFrame, draft, draftName, me, pending, open, writing, onOpen, onSent, onLeave } = props;
   const shown = shownFrame(frame, firstFrame);
   return (
-    <section aria-label={`New note on frame ${shown}`} className="px-3.5 pt-2 pb-1.5">
+    <section aria-label="New note" className="px-3.5 pt-2 pb-1.5">
       <h2 className="flex items-center gap-2 font-sans text-sm font-semibold">
         New note <FrameTag>{shown}</FrameTag>
       </h2>

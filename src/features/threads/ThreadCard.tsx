@@ -33,7 +33,7 @@ export function ThreadCard(props: ThreadCardProps) {
   const draft = useDraft(draftName);
   const shown = shownFrame(thread.frame, firstFrame);
   return (
-    <section aria-label={`Notes on frame ${shown}`} className="px-3.5 pt-1 pb-1.5">
+    <section aria-label={`Thread on frame ${shown}`} className="px-3.5 pt-1 pb-1.5">
       <div className="float-right -mr-2 flex items-center gap-1">
         {place}
         <IconButton label="Fold this note" onClick={onClose} className="size-8!">

@@ -44,7 +44,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
   const [playhead] = useState(() =>
     createPlayhead(take.frames, frameOfAddress(new URLSearchParams(window.location.search), firstFrame) ?? 1),
   );
-  const { layers, setLayers } = useTakeAddress(playhead, firstFrame);
+  const { layers, onSwitch } = useTakeAddress(playhead, firstFrame);
   const readingQuery = useQuery({ ...readingOptions(take.id), enabled: take.reading.status === 'read' });
   const reading = (take.reading.status === 'read' && readingQuery.data) || null;
   const desk = useRef<HTMLDivElement>(null);
@@ -121,7 +121,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
         />
         <div ref={desk} className="order-1 min-w-0 lg:order-2">
           <div className="overflow-hidden rounded-t-card border border-rule bg-sheet max-md:rounded-none max-md:border-x-0">
-            <PegBar layers={layers} onLayers={setLayers} hasReading={reading !== null}>
+            <PegBar layers={layers} onSwitch={onSwitch} hasReading={reading !== null}>
               <ObjectSwitch ids={objectIds} chosen={objectId} onChoose={setOwnObject} />
               <PlayControl takeId={take.id} fps={take.fps} playhead={playhead} />
               <FrameNumber playhead={playhead} firstFrame={firstFrame} />

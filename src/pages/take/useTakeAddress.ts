@@ -1,10 +1,15 @@
-import { useCallback, useEffect, useRef } from 'react';
-import { useSearchParams } from 'react-router';
-import { type Layer, layersFromAddress, layersToAddress } from '../../features/layers/layerChoice.ts';
+import { useCallback, useEffect, useRef, useState } from 'react';
+import { useLocation, useSearchParams } from 'react-router';
+import { type Layer, layersFromAddress, layersToAddress, switchLayer } from '../../features/layers/layerChoice.ts';
 import type { Playhead } from '../../lib/playhead.ts';
 
 /** Longer than a key repeats, so that stepping through a strip writes the address once. */
 const SETTLED_MS = 200;
+
+/** Marks an address that this page wrote itself. */
+const OWN = { writtenBy: 'take' };
+const isOwn = (state: unknown) =>
+  typeof state === 'object' && state !== null && 'writtenBy' in state && state.writtenBy === OWN.writtenBy;
 
 /** The frame of an address in the document's count; null when it names none. */
 export function frameOfAddress(search: URLSearchParams, firstFrame: number): number | null {
@@ -14,27 +19,31 @@ export function frameOfAddress(search: URLSearchParams, firstFrame: number): num
 
 /**
  * Keeps the address and the page together: the chosen frame (in the production's number) and the layers. Changes replace
- * the address, so that "back" leaves the take. A frame that comes by the address, as from a link, is chosen.
+ * the address, so that "back" leaves the take. What comes by the address, as from a link, is taken over.
  */
 export function useTakeAddress(playhead: Playhead, firstFrame: number) {
   const [search, setSearch] = useSearchParams();
-  const written = useRef<string | null>(search.get('frame'));
+  const [layers, setLayers] = useState(() => layersFromAddress(search.get('layers')));
+  // The router answers a moment later; until then this is what the address will say.
+  const said = useRef({ frame: search.get('frame'), layers: search.get('layers') });
 
-  const change = useCallback(
-    (name: string, value: string | null) => {
-      // What React Router hands out may be a step behind when two changes follow at once.
+  const write = useCallback(
+    (change: Partial<typeof said.current>) => {
+      said.current = { ...said.current, ...change };
       const next = new URLSearchParams(window.location.search);
-      if (value === null) next.delete(name);
-      else next.set(name, value);
-      setSearch(next, { replace: true, preventScrollReset: true });
+      for (const [name, value] of Object.entries(said.current)) {
+        if (value === null) next.delete(name);
+        else next.set(name, value);
+      }
+      setSearch(next, { replace: true, preventScrollReset: true, state: OWN });
     },
     [setSearch],
   );
-
-  const latest = useRef(change);
+  const latest = useRef(write);
   useEffect(() => {
-    latest.current = change;
+    latest.current = write;
   });
+
   useEffect(() => {
     let timer: ReturnType<typeof setTimeout> | undefined;
     let before = playhead.frame();
@@ -43,8 +52,7 @@ export function useTakeAddress(playhead: Playhead, firstFrame: number) {
       clearTimeout(timer);
       timer = setTimeout(() => {
         before = playhead.frame();
-        written.current = String(before + firstFrame - 1);
-        latest.current('frame', written.current);
+        latest.current({ frame: String(before + firstFrame - 1) });
       }, SETTLED_MS);
     });
     return () => {
@@ -53,14 +61,23 @@ export function useTakeAddress(playhead: Playhead, firstFrame: number) {
     };
   }, [playhead, firstFrame]);
 
-  const asked = search.get('frame');
+  const { key, state } = useLocation();
   useEffect(() => {
-    if (asked === null || asked === written.current) return;
-    written.current = asked;
-    const frame = frameOfAddress(new URLSearchParams({ frame: asked }), firstFrame);
+    // Our own words come back here too, maybe after newer ones.
+    if (isOwn(state)) return;
+    said.current = { frame: search.get('frame'), layers: search.get('layers') };
+    const frame = frameOfAddress(search, firstFrame);
     if (frame !== null) playhead.choose(frame);
-  }, [asked, playhead, firstFrame]);
+    setLayers(layersFromAddress(said.current.layers));
+  }, [key, state, search, firstFrame, playhead]);
 
-  const setLayers = useCallback((layers: ReadonlySet<Layer>) => change('layers', layersToAddress(layers)), [change]);
-  return { layers: layersFromAddress(search.get('layers')), setLayers };
+  const onSwitch = useCallback((layer: Layer) => {
+    setLayers((have) => switchLayer(have, layer));
+  }, []);
+  useEffect(() => {
+    const words = layersToAddress(layers);
+    if (words !== said.current.layers) latest.current({ layers: words });
+  }, [layers]);
+
+  return { layers, onSwitch };
 }

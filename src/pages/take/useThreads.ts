@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useEffect, useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import type { Person } from '../../../shared/api/people.ts';
 import type { Take } from '../../../shared/api/takes.ts';
 import type { Thread } from '../../../shared/api/threads.ts';
@@ -27,12 +27,15 @@ export function useThreads(take: Take, me: Person, playhead: Playhead) {
   const [open, setOpen] = useState<Open>('latest');
   const writing = useWriteNote(take.id, (thread) => setOpen({ thread }));
 
-  // Whoever comes without a frame lands where the talk is.
-  const landing = open === 'latest' ? latestThread(threads)?.frame : undefined;
+  // Whoever comes without a frame lands where the talk is; news that arrive later move nobody.
+  const landed = useRef(false);
+  const landing = latestThread(threads)?.frame;
   useEffect(() => {
+    if (!query.isSuccess || landed.current) return;
+    landed.current = true;
     const hasFrame = new URLSearchParams(window.location.search).has('frame');
     if (landing !== undefined && !hasFrame && playhead.frame() === 1) playhead.choose(landing);
-  }, [landing, playhead]);
+  }, [query.isSuccess, landing, playhead]);
 
   const hanging = hangingOf(open, threads, pending, playhead);
   const openId = hanging?.kind === 'thread' ? hanging.thread.id : null;
