@@ -38,37 +38,52 @@ export function mainObject(sketch: Sketch): string | null {
 
 /**
  * The small lane of a card: one step for each drawing of the main thing but the first, px a frame. A drawing held over
- * several frames is one step; the drawings of one frame rate mixed with holds share their step over the frames between.
+ * several frames is one step, spread over the frames a drawing is usually held for; a rest before the throw is no part
+ * of the first step.
  */
 export function sketchSteps(sketch: Sketch, lane: SketchLane): SketchStep[] {
   const object = mainObject(sketch);
-  const marks = sketch.marks.filter((mark) => mark.object === object).sort((a, b) => a.frame - b.frame);
-  const drawings = marks.filter((mark, index) => {
-    const before = marks[index - 1];
-    return !before || Math.hypot(mark.x - before.x, mark.y - before.y) > 0.05;
-  });
+  const drawings = drawingsOf(sketch.marks.filter((mark) => mark.object === object));
+  const gaps = drawings.slice(1).map((drawing, index) => drawing.frame - drawings[index]!.frame);
+  const usual = gaps.toSorted((a, b) => a - b)[gaps.length >> 1] ?? 1;
   const arcs = sketch.arcs.filter((arc) => arc.object === object);
-  return drawings.slice(1).map((mark, index) => {
+
+  return drawings.slice(1).map((drawing, index) => {
     const before = drawings[index]!;
-    const frames = mark.frame - before.frame;
+    const frames = Math.min(drawing.frame - before.frame, Math.max(usual, drawing.frame - before.until));
+    const left = drawing.frame - frames;
     const along = (from: { x: number; y: number }, to: { x: number; y: number }) =>
       lane === 'up' ? (from.y - to.y) / frames : Math.abs(to.x - from.x) / frames;
-    const arc = arcs.find(({ points }) => covers(points, before.frame) && covers(points, mark.frame));
-    const from = arc && arcAt(arc.points, before.frame);
-    const to = arc && arcAt(arc.points, mark.frame);
+    const arc = arcs.find(({ points }) => covers(points, left) && covers(points, drawing.frame));
+    const from = arc && arcAt(arc.points, left);
+    const to = arc && arcAt(arc.points, drawing.frame);
     return {
-      frame: mark.frame,
-      drawn: along(before, mark),
+      frame: drawing.frame,
+      drawn: along(before, drawing),
       true: from && to ? along(from, to) : null,
       off: sketch.findings.some(
         ({ kind, fromFrame, toFrame }) =>
           !WHOLE.has(kind) &&
           (lane === 'across') === ACROSS.has(kind) &&
-          before.frame >= fromFrame &&
-          mark.frame <= Math.max(toFrame, fromFrame + 1),
+          left >= fromFrame &&
+          drawing.frame <= Math.max(toFrame, fromFrame + 1),
       ),
     };
   });
+}
+
+/** Less than this between two frames is the same drawing, px: marks of a sketch are rounded to a tenth. */
+const SAME_PLACE = 0.15;
+
+/** Runs of frames on which the thing stands still, as one drawing with its last frame. */
+function drawingsOf(marks: Sketch['marks']): (Sketch['marks'][number] & { until: number })[] {
+  const drawings: (Sketch['marks'][number] & { until: number })[] = [];
+  for (const mark of marks.toSorted((a, b) => a.frame - b.frame)) {
+    const last = drawings.at(-1);
+    if (last && Math.hypot(mark.x - last.x, mark.y - last.y) < SAME_PLACE) last.until = mark.frame;
+    else drawings.push({ ...mark, until: mark.frame });
+  }
+  return drawings;
 }
 
 function covers(points: Sketch['arcs'][number]['points'], frame: number): boolean {

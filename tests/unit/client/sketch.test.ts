@@ -1,0 +1,78 @@
+import { describe, expect, test } from 'vitest';
+import { laneOf, mainObject, sketchSteps } from '../../../src/lib/sketchSpacing.ts';
+import { sketchRegion } from '../../../src/lib/sketchRegion.ts';
+import { buildFinding, buildSketch } from '../../support/wire.ts';
+
+describe('the small lane of a card', () => {
+  test('is a straight ramp through zero for a true arc, on its line at every bar', () => {
+    const steps = sketchSteps(buildSketch(), 'up');
+    expect(steps.map((step) => step.drawn)).toEqual([112, 80, 48, 16, -16, -48, -80, -112]);
+    for (const step of steps) expect(step.true).toBeCloseTo(step.drawn, 6);
+    expect(steps.every((step) => !step.off)).toBe(true);
+  });
+
+  test('is flat across, whichever side the thing flies to', () => {
+    const sketch = buildSketch();
+    const mirrored = buildSketch({ marks: sketch.marks.map((mark) => ({ ...mark, x: 640 - mark.x })) });
+    expect(sketchSteps(sketch, 'across').map((step) => step.drawn)).toEqual(Array(8).fill(50));
+    expect(sketchSteps(mirrored, 'across').map((step) => step.drawn)).toEqual(Array(8).fill(50));
+  });
+
+  test('counts a drawing that is held over frames once, at its speed', () => {
+    const onTwos = buildSketch().marks.flatMap((mark) => {
+      const frame = 2 + (mark.frame - 2) * 2;
+      return [
+        { ...mark, frame },
+        { ...mark, frame: frame + 1 },
+      ];
+    });
+    const steps = sketchSteps(buildSketch({ marks: onTwos, arcs: [] }), 'up');
+    expect(steps.map((step) => step.drawn)).toEqual([56, 40, 24, 8, -8, -24, -40, -56]);
+    expect(steps.every((step) => step.true === null)).toBe(true);
+  });
+
+  test('does not spread the first step over the rest before it, nor a step over frames it was not seen on', () => {
+    const { marks } = buildSketch();
+    const rest = [1, 0, -1, -2].map((frame) => ({ ...marks[0]!, frame }));
+    expect(sketchSteps(buildSketch({ marks: [...rest, ...marks] }), 'up')[0]).toMatchObject({ frame: 3, drawn: 112 });
+    const hidden = sketchSteps(buildSketch({ marks: marks.filter((mark) => mark.frame !== 4) }), 'up');
+    expect(hidden[1]).toMatchObject({ frame: 5, drawn: 64 });
+    expect(hidden[1]?.true).toBeCloseTo(64, 6);
+  });
+
+  test('marks the bars a finding speaks of, and no others', () => {
+    const steps = sketchSteps(buildSketch({ findings: [buildFinding({ fromFrame: 2, toFrame: 5 })] }), 'up');
+    expect(steps.filter((step) => step.off).map((step) => step.frame)).toEqual([3, 4, 5]);
+  });
+
+  test('leaves the bars of a finding about the whole flight as they are', () => {
+    const finding = buildFinding({ kind: 'apex-off-centre', fromFrame: 2, toFrame: 10 });
+    expect(sketchSteps(buildSketch({ findings: [finding] }), 'up').some((step) => step.off)).toBe(false);
+  });
+
+  test('is the lane of the first finding', () => {
+    expect(laneOf(buildSketch())).toBe('up');
+    expect(laneOf(buildSketch({ findings: [buildFinding({ kind: 'across-uneven' })] }))).toBe('across');
+  });
+
+  test('follows the thing with the most marks', () => {
+    const other = { object: 'B', frame: 3, x: 10, y: 10 };
+    expect(mainObject(buildSketch({ marks: [other, ...buildSketch().marks] }))).toBe('A');
+    expect(mainObject(buildSketch({ marks: [] }))).toBeNull();
+    expect(sketchSteps(buildSketch({ marks: [], arcs: [] }), 'up')).toEqual([]);
+  });
+});
+
+describe('the part of the picture a card shows', () => {
+  test('holds every mark with room around, inside the picture', () => {
+    const region = sketchRegion(buildSketch());
+    expect(region.x).toBeLessThan(100);
+    expect(region.x + region.width).toBeGreaterThan(500);
+    expect(region.y).toBeGreaterThanOrEqual(0);
+    expect(region.y + region.height).toBeLessThanOrEqual(400);
+  });
+
+  test('is the whole picture when nothing was found', () => {
+    expect(sketchRegion(buildSketch({ marks: [], arcs: [] }))).toEqual({ x: 0, y: 0, width: 640, height: 400 });
+  });
+});
