@@ -2,6 +2,7 @@ import { ontoPictures, ontoStage } from '../../shared/finding/cameraMove.ts';
 import type { AnalysisRequest, AnalysisResult, ReportProgress } from '../../shared/finding/types.ts';
 import { readMotion } from '../../shared/motion/read.ts';
 import type { Reading, ReadObject } from '../../shared/reading/document.ts';
+import { atTheirFrames } from './atTheirFrames.ts';
 import { findInFrames } from './findInFrames.ts';
 
 /**
@@ -16,12 +17,16 @@ export async function analyseFrames(
   signal?: AbortSignal,
 ): Promise<AnalysisResult> {
   const total = request.framePaths.length;
-  const { tracks, camera, cautions, width, height } = await findInFrames(request, report, signal);
+  const found = await findInFrames(request, report, signal);
+  const onStage = found.tracks.map((track) => ({ ...track, marks: ontoStage(track.marks, found.camera) }));
+  const { frameNumbers } = request;
+  const staged = { ...found, tracks: onStage };
+  const { tracks, camera, cautions, width, height } = frameNumbers ? atTheirFrames(staged, frameNumbers) : staged;
+  const frames = frameNumbers?.at(-1) ?? total;
   report({ done: 0, total, phase: 'reading' });
   const { id, kind, firstFrame, fps, hold, scale, tolerances } = request;
-  const onStage = tracks.map((track) => ({ ...track, marks: ontoStage(track.marks, camera) }));
   const reading = readMotion(
-    { id, kind, frames: total, width, height, firstFrame, fps, hold, scale, camera, tracks: onStage, cautions },
+    { id, kind, frames, width, height, firstFrame, fps, hold, scale, camera, tracks, cautions },
     { tolerances },
   );
   report({ done: total, total, phase: 'reading' });

@@ -1,4 +1,4 @@
-import { mkdir } from 'node:fs/promises';
+import { mkdir, writeFile } from 'node:fs/promises';
 import { basename, join } from 'node:path';
 import sharp from 'sharp';
 import { detectGrid } from '../../shared/finding/detectGrid.ts';
@@ -38,10 +38,12 @@ export async function splitStrip(path: string, grid: Grid, outDir: string): Prom
       throw new PictureError(name, 'no_grid', sentence);
     }
     const framePath = join(outDir, `frame-${String(index + 1).padStart(4, '0')}.png`);
-    await sharp(strip.data, { raw, limitInputPixels: MAX_PIXELS })
+    const png = await sharp(strip.data, { raw, limitInputPixels: MAX_PIXELS })
       .extract(cell)
       .png({ compressionLevel: 4 })
-      .toFile(framePath);
+      .toBuffer();
+    // Written by Node: sharp's own errors have no code, and a full disk must be told from a broken picture.
+    await writeFile(framePath, png);
     frames.push({ path: framePath, width: cell.width, height: cell.height });
   }
   return frames;

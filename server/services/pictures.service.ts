@@ -1,4 +1,5 @@
 import path from 'node:path';
+import { LessThanOrEqual } from 'typeorm';
 import { TakeFrame } from '../entities/TakeFrame.ts';
 import type { Deps } from '../deps.ts';
 import { notFound } from '../errors.ts';
@@ -24,11 +25,19 @@ export async function findThumbnail(deps: Deps, userId: string, takeId: string, 
   return { path: file, mediaType: 'image/webp' };
 }
 
-/** Paths come from our own rows, never from a request. */
+/**
+ * The row of a frame; of one that is missing between the posted files the picture before it, which is what stands on
+ * the screen until the next. Paths come from our own rows, never from a request.
+ */
 async function findFrame(deps: Deps, userId: string, takeId: string, frame: number): Promise<TakeFrame> {
   const { manager } = deps.dataSource;
-  await accessByTake(manager, userId, takeId);
-  const row = await manager.findOneBy(TakeFrame, { takeId, frame });
+  const { take } = await accessByTake(manager, userId, takeId);
+  if (frame > take.frames) throw notFound('frame');
+  const [row] = await manager.find(TakeFrame, {
+    where: { takeId, frame: LessThanOrEqual(frame) },
+    order: { frame: 'DESC' },
+    take: 1,
+  });
   if (!row) throw notFound('frame');
   return row;
 }

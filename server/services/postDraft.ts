@@ -33,9 +33,15 @@ export async function postDraft(deps: Deps, userId: string, draftId: string, giv
     await rm(draftFolder(deps.dataDir, draftId), { recursive: true, force: true });
     return take;
   } catch (error) {
+    await rm(cellFolder(deps, draftId), { recursive: true, force: true });
     await manager.update(Draft, { id: draftId, status: 'posting' }, { status: 'open' });
     throw error;
   }
+}
+
+/** Where a strip picture is cut into, until its frames are the take's. */
+function cellFolder(deps: Deps, draftId: string): string {
+  return path.join(draftFolder(deps.dataDir, draftId), 'cells');
 }
 
 function refuseUnready({ draft, pictures, ready }: DraftParts): void {
@@ -47,14 +53,14 @@ function refuseUnready({ draft, pictures, ready }: DraftParts): void {
   }
 }
 
-async function stripOf(deps: Deps, { draft, pictures, missingFrames }: DraftParts): Promise<Strip> {
+async function stripOf(deps: Deps, { draft, pictures, firstFrame, missingFrames }: DraftParts): Promise<Strip> {
   const folder = draftFolder(deps.dataDir, draft.id);
   const first = pictures[0]!.picture;
   if (draft.grid && pictures.length === 1) {
-    const cells = await splitStrip(path.join(folder, first.file), draft.grid, path.join(folder, 'cells'));
+    const cells = await splitStrip(path.join(folder, first.file), draft.grid, cellFolder(deps, draft.id));
     const frames = cells.map((cell) => ({ path: cell.path, format: 'png' as const, name: first.name }));
     const { cellWidth: width, cellHeight: height } = draft.grid;
-    return { kind: 'strip', frames, width, height, missingFrames: [] };
+    return { kind: 'strip', frames, width, height };
   }
   const frames = pictures.map(({ picture: { file, format, name } }) => ({
     path: path.join(folder, file),
@@ -62,5 +68,7 @@ async function stripOf(deps: Deps, { draft, pictures, missingFrames }: DraftPart
     name,
     thumbnail: path.join(folder, thumbnailName(file)),
   }));
-  return { kind: 'frames', frames, width: first.width, height: first.height, missingFrames };
+  const strip: Strip = { kind: 'frames', frames, width: first.width, height: first.height };
+  if (missingFrames.length === 0 || firstFrame === null) return strip;
+  return { ...strip, frameNumbers: pictures.map(({ number }) => number! - firstFrame + 1) };
 }

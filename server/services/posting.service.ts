@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto';
 import type { z } from 'zod';
 import type { postSchema } from '../../shared/api/drafts.ts';
 import type { Take as WireTake } from '../../shared/api/takes.ts';
+import { shownFrame } from '../../shared/reading/document.ts';
 import { Shot } from '../entities/Shot.ts';
 import { Take } from '../entities/Take.ts';
 import { TakeFrame } from '../entities/TakeFrame.ts';
@@ -12,14 +13,14 @@ import { openShot } from './openShot.ts';
 import { type Recording, record } from './record.ts';
 import { aboutTake } from './takes.service.ts';
 
-/** The frames of a post, in order, all of one size in px. */
+/** The pictures of a post, in order, all of one size in px. */
 export interface Strip {
   kind: 'frames' | 'strip';
   frames: FrameFile[];
   width: number;
   height: number;
-  /** Numbers that no frame has, as the production counts. */
-  missingFrames: number[];
+  /** Frame of the document each picture belongs to, from 1 and rising; left out: none is missing between them. */
+  frameNumbers?: number[];
 }
 
 export type PostGiven = z.output<typeof postSchema>;
@@ -68,6 +69,8 @@ interface NewTake {
 async function insertTake({ manager, seq, at }: Recording, parts: NewTake): Promise<void> {
   const { takeId, shot, userId, strip, given, kept } = parts;
   const number = shot.lastTakeNumber + 1;
+  const frameNumbers = strip.frameNumbers ?? kept.map((_, index) => index + 1);
+  const frames = frameNumbers.at(-1) ?? 0;
   await manager.update(Shot, { id: shot.id }, { lastTakeNumber: number });
   await manager.insert(Take, {
     id: takeId,
@@ -85,15 +88,21 @@ async function insertTake({ manager, seq, at }: Recording, parts: NewTake): Prom
     fpsDen: given.fps.den,
     hold: given.hold,
     firstFrame: given.firstFrame,
-    frames: kept.length,
+    frames,
     width: strip.width,
     height: strip.height,
     changed: given.changed,
     intended: given.intended,
-    missingFrames: strip.missingFrames,
+    missingFrames: missingAmong(frameNumbers).map((frame) => shownFrame(frame, given.firstFrame)),
   });
   await manager.insert(
     TakeFrame,
-    kept.map((frame, index) => ({ takeId, frame: index + 1, ...frame })),
+    kept.map((picture, index) => ({ takeId, frame: frameNumbers[index]!, ...picture })),
   );
+}
+
+function missingAmong(frameNumbers: number[]): number[] {
+  const there = new Set(frameNumbers);
+  const all = Array.from({ length: frameNumbers.at(-1) ?? 0 }, (_, index) => index + 1);
+  return all.filter((frame) => !there.has(frame));
 }

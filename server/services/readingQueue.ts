@@ -1,5 +1,6 @@
 import path from 'node:path';
 import { In } from 'typeorm';
+import { sayNumbers } from '../../shared/frames/frameNumbers.ts';
 import type { AnalysisProgress, AnalysisRequest, ReportProgress } from '../../shared/finding/types.ts';
 import { type Reading as ReadingDocument, readingSchema } from '../../shared/reading/document.ts';
 import { AnalysisError } from '../analysis/AnalysisError.ts';
@@ -86,10 +87,11 @@ async function readTakeNow(
     await deps.dataSource.manager.update(Take, { id: takeId }, { readingStatus: 'reading' });
     const request = await requestFor(deps, take);
     const report = throttled((progress) => deps.broadcast.progress(take.productionId, { takeId, ...progress }));
-    report({ phase: 'decoding', done: 0, total: take.frames });
+    report({ phase: 'decoding', done: 0, total: request.framePaths.length });
     let outcome: ReadingDocument | string;
     try {
-      outcome = readingSchema.parse((await analysis.analyse(request, report, signal)).reading);
+      const { reading } = await analysis.analyse(request, report, signal);
+      outcome = readingSchema.parse(sayMissing(reading, take));
     } catch (error) {
       if (signal.aborted) return;
       outcome = sentenceFor(deps, takeId, error);
@@ -109,12 +111,21 @@ async function requestFor(deps: QueueDeps, take: Take): Promise<AnalysisRequest>
   return {
     id: `${take.shot.number}/${take.number}`,
     framePaths: frames.map(({ file }) => path.join(folder, file)),
+    ...(take.missingFrames.length > 0 ? { frameNumbers: frames.map(({ frame }) => frame) } : {}),
     kind: take.kind,
     firstFrame: take.firstFrame,
     fps: { num: take.fpsNum, den: take.fpsDen },
     ...(take.hold === null ? {} : { hold: take.hold }),
     ...(take.production.tolerances ? { tolerances: take.production.tolerances } : {}),
   };
+}
+
+/** Only the post knows which files were not there. */
+function sayMissing(reading: ReadingDocument, { missingFrames }: Take): ReadingDocument {
+  if (missingFrames.length === 0) return reading;
+  const [frames, were] = missingFrames.length === 1 ? ['Frame', 'was'] : ['Frames', 'were'];
+  const caution = `${frames} ${sayNumbers(missingFrames)} ${were} not posted; the arc is read from the others.`;
+  return { ...reading, cautions: [caution, ...reading.cautions] };
 }
 
 /** Sentences of the analysis are for people; anything else is ours to mend and stays in the log. */

@@ -100,7 +100,10 @@ test('a gap in the numbers is said before the post and kept with the take', asyn
   expect(filled).toMatchObject({ firstFrame: 1001, missingFrames: [1003, 1005, 1006], ready: true });
   expect(filled.warnings).toEqual(['Frames 1003, 1005–1006 are missing between the files. Add them if you can.']);
   const { body: take } = await client.post(`/drafts/${draft.id}/post`, post).expect(201);
-  expect(take).toMatchObject({ missingFrames: [1003, 1005, 1006], frames: 5 });
+  expect(take).toMatchObject({ missingFrames: [1003, 1005, 1006], frames: 8 });
+  const picture = (frame: number) => client.get(`/takes/${take.id}/frames/${frame}/picture`).expect(200);
+  expect((await picture(7)).body.equals(files[3]!.bytes)).toBe(true);
+  expect((await picture(6)).body).toEqual((await picture(4)).body);
 });
 
 test('one frame is not a flight', async () => {

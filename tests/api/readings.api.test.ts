@@ -88,6 +88,22 @@ describe('a strip with a thing in flight', () => {
   });
 });
 
+test('a strip with a gap is read on the frames that it has, and the gap is said', async () => {
+  const draft = await startDraft(client, production.slug);
+  const files = (await dragToss({ frames: 24, ...room })).filter((_, index) => ![7, 15].includes(index));
+  await addPictures(client, draft.id, files);
+  const post = { shotNumber: '300-0010', fps: { num: 24, den: 1 }, firstFrame: 101 };
+  const { body: take } = await client.post(`/drafts/${draft.id}/post`, post).expect(201);
+  expect(take).toMatchObject({ frames: 24, missingFrames: [108, 116] });
+  await tab.next('take:read');
+  const reading: Reading = (await client.get(`/takes/${take.id}/reading`).expect(200)).body;
+  expect(reading.cautions).toContain('Frames 108, 116 were not posted; the arc is read from the others.');
+  expect(reading.findings).toEqual([]);
+  const [thing] = reading.objects;
+  expect(thing!.marks.map(({ frame }) => frame)).not.toContain(8);
+  expect(thing!.flights[0]!.apex!.frame).toBeCloseTo(12.5, 1);
+});
+
 test('a strip with nothing moving is read as such, without a finding', async () => {
   const { event, take } = await postAndRead({ frames: 16, ...room, still: true });
   expect(event.payload.card.take.reading.status).toBe('read');

@@ -48,5 +48,13 @@ export async function drawToss(folder: string, drawing: TossDrawing): Promise<St
     await writeFile(file, await drawTossFrame(frame, drawing));
     files.push({ path: file, format, name });
   }
-  return { kind: 'frames', frames: files, width, height, missingFrames: [] };
+  return { kind: 'frames', frames: files, width, height };
+}
+
+/** A picture of grain, which no format makes small. */
+export function drawGrain(width: number, height: number): Promise<Buffer> {
+  const noise = { type: 'gaussian' as const, mean: 128, sigma: 40 };
+  return sharp({ create: { width, height, channels: 3, background: '#000', noise } })
+    .png()
+    .toBuffer();
 }

@@ -89,7 +89,7 @@ async function post(
     deps,
     by,
     cast.slug,
-    { kind: 'frames', frames, width: PICTURE_WIDTH, height: PICTURE_HEIGHT, missingFrames: [] },
+    { kind: 'frames', frames, width: PICTURE_WIDTH, height: PICTURE_HEIGHT },
     {
       shotNumber,
       shotTitle: SHOT_TITLES[shotNumber],
