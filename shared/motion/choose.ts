@@ -5,7 +5,7 @@ import { SHAPE_STARTS } from './shapes.ts';
 import type { Sketch } from './sketch.ts';
 import { oneFlight, pathOf, restFirst, restLast, sketchFrom, sketchOf } from './sketch.ts';
 import type { Stretch } from './spans.ts';
-import { restructure } from './structure.ts';
+import { isDoubtful, restructure } from './structure.ts';
 
 /** All accounts of one track, the one chosen first of all, and the best one without a fault. */
 export interface Contest {
@@ -30,24 +30,16 @@ export function holdContest(field: Field, stretches: readonly Stretch[], lost: r
     }
   }
   if (!best || isPoor(best.chosen, field)) {
-    for (const [before, after] of [
-      [0, 0],
-      [1, 0],
-      [2, 0],
-      [1, 1],
-      [2, 1],
-      [3, 1],
-    ] as const) {
-      const sketch = oneFlight(field, before, after);
-      const next = sketch && compete(sketch, full, field);
-      if (next && (!best || next.chosen.cost < best.chosen.cost)) best = next;
+    for (const sketch of plainSketches(field, full)) {
+      const next = compete(sketch, full, field);
+      if (!best || next.chosen.cost < best.chosen.cost) best = next;
     }
   }
   if (!best) return null;
   for (let round = 0; round < 3; round += 1) {
     let better: Account | null = null;
     if (!isDoubtful(best.chosen, field)) break;
-    for (const account of best.accounts.slice(0, 3)) {
+    for (const account of best.accounts.slice(0, 2)) {
       const next = restructure(account, field, full);
       if (next && next.cost < (better ?? best.chosen).cost) better = next;
     }
@@ -69,9 +61,26 @@ function firstSketches(sketch: Sketch, stretches: readonly Stretch[], field: Fie
   return resting ? [sketch, resting] : [sketch];
 }
 
-/** Whether other structures are worth a try: drawings left out, contacts that are none, or more misfit than the noise explains. */
-function isDoubtful(account: Account, field: Field): boolean {
-  return account.left.length > 0 || account.impossible > 0 || Math.sqrt(account.noise2) > 1.35 * field.noise + 0.1;
+/** The two best of the plainest sketches: one flight, with rest before and after it or without. */
+function plainSketches(field: Field, weight: Float64Array): Sketch[] {
+  const ends: [number, number][] = [
+    [0, 0],
+    [1, 0],
+    [2, 0],
+    [1, 1],
+    [2, 1],
+    [3, 1],
+  ];
+  return ends
+    .flatMap(([before, after]) => {
+      const sketch = oneFlight(field, before, after);
+      return sketch
+        ? [{ sketch, cost: fitOnce(pathOf(sketch, null, false, field), null, false, weight, field).cost }]
+        : [];
+    })
+    .sort((a, b) => a.cost - b.cost)
+    .slice(0, 2)
+    .map((one) => one.sketch);
 }
 
 /** An account that leaves out much or fits badly: its structure may be wrong. */

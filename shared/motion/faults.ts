@@ -10,7 +10,7 @@ export interface Promise {
   gain: number;
 }
 
-const LEAST_PROMISE = 5;
+const LEAST_PROMISE = 11;
 const MOST_TRIED = 6;
 
 /**

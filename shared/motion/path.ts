@@ -37,6 +37,8 @@ export interface Path {
   size: number;
   /** Per parameter: first and last span whose places depend on it. */
   reach: Int32Array;
+  /** Per parameter: the knot it places where the path depends on it in a straight line, else -1. */
+  straight: Int32Array;
 }
 
 /** Lays out the parameters of a path whose spans are known. `fixed` are the times of the two outer knots. */
@@ -57,6 +59,7 @@ export function layOut(spans: Span[], fixed: { start: number; end: number }, opt
     delay: 0,
     size: gravities,
     reach: new Int32Array(0),
+    straight: new Int32Array(0),
     ...options,
   };
   path.fixedTime[0] = fixed.start;
@@ -80,7 +83,28 @@ export function layOut(spans: Span[], fixed: { start: number; end: number }, opt
     path.size += path.shape.parameters;
   }
   path.reach = reachOf(path);
+  path.straight = straightOf(path);
   return path;
+}
+
+/** Parameters that place a knot and nothing bends by: no depth, no shape fault beside them, nothing tangent to them. */
+function straightOf(path: Path): Int32Array {
+  const straight = new Int32Array(path.size).fill(-1);
+  if (path.depthAt >= 0) return straight;
+  const last = path.spans.length - 1;
+  for (let k = 0; k <= last + 1; k += 1) {
+    let bends = false;
+    for (const at of [path.xAt[k]!, path.yAt[k]!]) {
+      if (at < 0) continue;
+      for (let s = path.reach[2 * at]!; s <= path.reach[2 * at + 1]!; s += 1) {
+        bends ||= path.shape?.span === s || path.spans[s]!.tangent;
+      }
+    }
+    if (bends) continue;
+    if (path.xAt[k]! >= 0) straight[path.xAt[k]!] = k;
+    if (path.yAt[k]! >= 0) straight[path.yAt[k]!] = k;
+  }
+  return straight;
 }
 
 /** Which spans each parameter moves: a knot moves the spans beside it and those whose knots follow from it. */
@@ -91,7 +115,7 @@ function reachOf(path: Path): Int32Array {
   if (path.depthAt >= 0) return reach;
   for (let k = 0; k <= last + 1; k += 1) {
     let end = Math.min(last, k);
-    while (end < last && end + 1 > k && (path.xAt[end + 1]! < 0 || path.yAt[end + 1]! < 0)) end += 1;
+    while (end < last && (path.xAt[end + 1]! < 0 || path.yAt[end + 1]! < 0)) end += 1;
     for (const at of [path.timeAt[k]!, path.xAt[k]!, path.yAt[k]!]) {
       if (at < 0) continue;
       reach[2 * at] = Math.max(0, k - 1);

@@ -62,8 +62,8 @@ export function differentiate(
   room: Slopes,
 ): void {
   const p = path.size;
-  const n = samples.t.length;
   const knots: Knots = makeKnotsFor(path);
+  const moved: Knots = makeKnotsFor(path);
   placeKnots(path, theta, knots);
   const first = firstDrawings(path, knots, samples.t);
   const { rows, stride, tx, ty } = room;
@@ -72,11 +72,15 @@ export function differentiate(
     const to = first[path.reach[2 * k + 1]! + 1]!;
     room.from[k] = from;
     room.to[k] = to;
+    if (path.straight[k]! >= 0) {
+      straightSlopes(path, knots, samples.t, path.straight[k]!, k, first, room);
+      continue;
+    }
     const value = theta[k]!;
     theta[k] = value + differenceOf(path, k, value);
     const inverse = 1 / (theta[k]! - value);
-    placeKnots(path, theta, knots);
-    follow(path, theta, knots, samples.t, tx, ty, from, to);
+    placeKnots(path, theta, moved);
+    follow(path, theta, moved, samples.t, tx, ty, from, to);
     theta[k] = value;
     const x = 2 * k * stride;
     const y = x + stride;
@@ -85,7 +89,39 @@ export function differentiate(
       rows[y + i] = (ty[i]! - ys[i]!) * inverse;
     }
   }
-  if (n === 0) room.from.fill(0);
+}
+
+/**
+ * Slopes by the place of a knot where the path depends on it in a straight line: the share of the way between the knots
+ * around it. `knot` is the first knot that the parameter places; those tied to it move along.
+ */
+function straightSlopes(
+  path: Path,
+  knots: Knots,
+  times: Float64Array,
+  knot: number,
+  parameter: number,
+  first: Int32Array,
+  room: Slopes,
+): void {
+  const { rows, stride } = room;
+  const across = path.xAt[knot] === parameter;
+  const at = across ? path.xAt : path.yAt;
+  const main = 2 * parameter * stride + (across ? 0 : stride);
+  const other = 2 * parameter * stride + (across ? stride : 0);
+  let tied = knot;
+  while (tied + 1 < at.length && at[tied + 1]! < 0) tied += 1;
+  for (let s = Math.max(0, knot - 1); s <= Math.min(path.spans.length - 1, tied); s += 1) {
+    const begins = s >= knot && s <= tied ? 1 : 0;
+    const ends = s + 1 >= knot && s + 1 <= tied ? 1 : 0;
+    const start = knots.t[s]!;
+    const rate = (ends - begins) / (knots.t[s + 1]! - start || 1);
+    for (let i = first[s]!; i < first[s + 1]!; i += 1) {
+      const t = times[i]! - (i >= path.delayFrom ? path.delay : 0);
+      rows[main + i] = path.spans[s]!.kind === 'rest' ? 1 : begins + rate * (t - start);
+      rows[other + i] = 0;
+    }
+  }
 }
 
 /** Index of the first drawing of every span, and of the end. */

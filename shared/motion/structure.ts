@@ -53,10 +53,17 @@ function optionsFor(account: Account, field: Field): Option[] {
     const moved = fault && 'span' in fault ? { ...fault, span: shift(fault.span) } : fault;
     options.push({ sketch: next, fault: moved, depth, shape });
   };
-  for (const count of [1, 2, 3]) add(restFirst(sketch, count, field), (span) => span + 1);
-  for (const count of [1, 2, 3]) add(restLast(sketch, count, field));
-  for (const count of [2, 3, 4]) add(flightLast(sketch, count, field));
-  if (spans[0]!.kind === 'flight') {
+  const misfit = misfits(account, field);
+  const { left } = account;
+  const n = field.drawings.length;
+  if (misfit || left.some((i) => i < OUTER)) {
+    for (const count of [1, 2, 3]) add(restFirst(sketch, count, field), (span) => span + 1);
+  }
+  if (misfit || left.some((i) => i >= n - OUTER)) {
+    for (const count of [1, 2, 3]) add(restLast(sketch, count, field));
+    for (const count of [2, 3, 4]) add(flightLast(sketch, count, field));
+  }
+  if (misfit && spans[0]!.kind === 'flight') {
     for (const share of [0.15, 0.3, 0.45, 0.6, 0.75]) {
       const rolled = rollFirst(sketch, share, field);
       if (!rolled) continue;
@@ -76,7 +83,7 @@ function optionsFor(account: Account, field: Field): Option[] {
     if (after !== 'flight' && !outer) continue;
     const joined = withoutKnot(sketch, k);
     add(joined, (span) => (span >= k ? span - 1 : span));
-    if (before === 'flight' && after === 'flight' && isDoubtful(account, k)) {
+    if (before === 'flight' && after === 'flight' && hardlyKicks(account, k)) {
       for (const name of ALL_SHAPES) {
         for (const start of SHAPE_STARTS[name]) {
           options.push({
@@ -92,10 +99,25 @@ function optionsFor(account: Account, field: Field): Option[] {
   return options;
 }
 
+/** Whether an account leaves more unexplained than noise does. */
+export function misfits(account: Account, field: Field): boolean {
+  return (
+    account.impossible > 0 ||
+    Math.sqrt(account.noise2) > 1.5 * field.noise + 0.1 ||
+    account.left.some((i) => account.left.includes(i + 1))
+  );
+}
+
+/** Whether other structures are worth a try: misfit, or drawings left out near an end, where rest or a contact may explain them. */
+export function isDoubtful(account: Account, field: Field): boolean {
+  const n = field.drawings.length;
+  return misfits(account, field) || account.left.some((i) => i < OUTER || i >= n - OUTER);
+}
+
 const ALL_SHAPES: readonly ShapeName[] = ['ease', 'even-path', 'apex', 'power', 'hang', 'hang-up', 'even-steps'];
 
 /** A contact that kicks far less than a bounce between two flights of these lengths would. */
-function isDoubtful(account: Account, k: number): boolean {
+function hardlyKicks(account: Account, k: number): boolean {
   const { knots, theta } = account.fit;
   const g = theta[0]!;
   const left = knots.t[k]! - knots.t[k - 1]!;
