@@ -93,7 +93,9 @@ it('the mentor pins a note to a frame and stamps it; the animator sees both', as
   await page.goto(`/p/${production.slug}/shots/${SHOT}/takes/1?frame=1018`);
   await see(page.locator('[data-layer="marks"]'));
   await page.keyboard.press('n');
-  await page.getByRole('textbox', { name: 'Note on frame 1018' }).fill('It still climbs on 1017. The top belongs on 1014.');
+  await page
+    .getByRole('textbox', { name: 'Note on frame 1018' })
+    .fill('It still climbs on 1017. The top belongs on 1014.');
   await page.getByRole('button', { name: 'Pin it here' }).click();
   const note = page.getByRole('article', { name: 'Note by Rufus Pell' });
   await see(note);

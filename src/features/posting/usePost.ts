@@ -10,10 +10,8 @@ export function usePost(slug: string, draftId: string | null) {
   const client = useQueryClient();
   return useMutation({
     mutationFn: (body: Post) => call(draftContracts.post, { params: { draftId: draftId! }, body }),
-    onSuccess: (take) => {
-      applyTake(client, slug, take);
-      client.removeQueries({ queryKey: draftOptions(draftId!).queryKey });
-    },
+    // The draft stays in the cache until the page is left: asking for it once more would answer that it is closed.
+    onSuccess: (take) => applyTake(client, slug, take),
   });
 }
 
