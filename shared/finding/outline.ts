@@ -138,27 +138,40 @@ const AROUND = [
   [1, 1],
 ] as const;
 
-/** The score's peak between the places tried, from a parabola through three of them along each axis. */
+/**
+ * The middle of the score's top. A sharp edge scores the same over a pixel or so, and the place found first on that
+ * plateau is its rim: so the top of the score is balanced along each axis.
+ */
 function peakOf(view: View, outline: Outline, best: OutlineFit, contrast: number): OutlineFit {
-  const by = 0.6;
-  const at = (dx: number, dy: number): number =>
-    scoreAt(view, outline, best.x + dx, best.y + dy, best.angle, contrast).score;
-  const shift = (before: number, middle: number, after: number): number => {
-    const bend = before - 2 * middle + after;
-    return bend >= 0 ? 0 : Math.max(-by, Math.min(by, (0.5 * by * (before - after)) / bend));
-  };
-  const middle = at(0, 0);
-  return {
-    ...best,
-    x: best.x + shift(at(-by, 0), middle, at(by, 0)),
-    y: best.y + shift(at(0, -by), middle, at(0, by)),
-  };
+  let { x, y } = best;
+  for (let round = 0; round < 2; round++) {
+    x += topOf((shift) => scoreAt(view, outline, x + shift, y, best.angle, contrast).score);
+    y += topOf((shift) => scoreAt(view, outline, x, y + shift, best.angle, contrast).score);
+  }
+  const { score, support } = scoreAt(view, outline, x, y, best.angle, contrast);
+  return { ...best, x, y, score, support };
+}
+
+/** How far from 0 the top tenth of a score balances. */
+function topOf(scoreOf: (shift: number) => number): number {
+  const shifts = Array.from({ length: 21 }, (_, k) => (k - 10) / 5);
+  const scores = shifts.map(scoreOf);
+  const most = Math.max(...scores);
+  if (most <= 0) return 0;
+  let sum = 0;
+  let weights = 0;
+  scores.forEach((score, k) => {
+    const weight = Math.max(0, score - 0.9 * most);
+    weights += weight;
+    sum += weight * shifts[k];
+  });
+  return sum / weights;
 }
 
 function scoreAt(view: View, outline: Outline, x: number, y: number, angle: number, contrast: number) {
   const cos = Math.cos(angle);
   const sin = Math.sin(angle);
-  const most = 0.6 * contrast;
+  const most = contrast;
   const least = -0.3 * contrast;
   const clear = 0.22 * contrast;
   let sum = 0;

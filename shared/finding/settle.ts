@@ -16,7 +16,7 @@ export interface Placed {
 /** Spread of the usual size beyond which a frame's shape is not the thing alone, log of the area. */
 const LEAST_ODDITY = 0.06;
 /** A shape of the usual size keeps its centroid unless its outline fits clearly better elsewhere. */
-const BETTER = 0.88;
+const BETTER = 0.94;
 
 /**
  * Looks at every frame of a track again, now that its usual size and shape are known: where a shadow touches the thing,
