@@ -1,3 +1,4 @@
+import { spawnSync } from 'node:child_process';
 import { once } from 'node:events';
 import { mkdtemp, readdir, readFile, rm, watch, writeFile } from 'node:fs/promises';
 import { createServer } from 'node:net';
@@ -87,6 +88,27 @@ describe('npm start', { timeout: 120_000 }, () => {
     expect(code).toBe(1);
     expect(stderr).toMatch(/^\S+ is in use by another run of Spandrel \(process \d+\); stop that one or choose .+\n$/);
     expect((await fetch(`${address}/api/health`)).status).toBe(200);
+  });
+
+  it('gives the folder to one of two starts at the same moment', async () => {
+    const both = [start(), start()];
+    const loser = await Promise.race(both.map((one) => one.exited));
+    expect(loser.code).toBe(1);
+    expect(loser.stderr).toContain('is in use by another run of Spandrel');
+    expect((await fetch(`${await Promise.any(both.map((one) => one.ready))}/api/health`)).status).toBe(200);
+  });
+
+  it('refuses a disk with too little room, before it fills it', async ({ skip }) => {
+    if (spawnSync('mount', ['-t', 'tmpfs', '-o', 'size=100m', 'tmpfs', dataDir]).status !== 0)
+      skip('only root may mount');
+    try {
+      const { code, stderr } = await start().exited;
+      expect(code).toBe(1);
+      expect(stderr).toMatch(/^The disk that holds \S+ has (99|100) MB free and Spandrel needs 300 MB; .+\.\n$/);
+      expect(await readdir(dataDir)).toEqual([]);
+    } finally {
+      spawnSync('umount', [dataDir]);
+    }
   });
 
   it('takes the folder over from a run that was killed, and keeps what that one wrote', async () => {
