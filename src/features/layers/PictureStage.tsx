@@ -1,6 +1,6 @@
 import { type ReactNode, useMemo, useRef } from 'react';
 import type { Reading } from '../../../shared/reading/document.ts';
-import { drawingsOf } from '../../lib/drawings.ts';
+import { drawingOn, drawingsOf } from '../../lib/drawings.ts';
 import { useKeys } from '../../lib/keys.ts';
 import type { NumberedFinding } from '../../lib/numberedFindings.ts';
 import type { Playhead } from '../../lib/playhead.ts';
@@ -11,6 +11,7 @@ import type { Box } from './labels.ts';
 import type { Layer } from './layerChoice.ts';
 import type { DrawnObject } from './layerProps.ts';
 import { Overlay } from './Overlay.tsx';
+import { useFollowThing } from './useFollowThing.ts';
 import { useHand } from './useHand.ts';
 import { useView } from './useView.ts';
 import { ZoomControls } from './ZoomControls.tsx';
@@ -66,9 +67,16 @@ export function PictureStage(props: PictureStageProps) {
     () => ({ left: view.x, top: view.y, width: room.width / view.scale, height: room.height / view.scale }),
     [view, room],
   );
+  const thing = (frame: number) =>
+    objects.map((object) => drawingOn(object.drawings, frame)).find((drawing) => drawing !== undefined);
+  const zoom = (factor: number) => {
+    const at = thing(playhead.frame());
+    control.zoom(factor, at && { x: (at.x - view.x) * view.scale, y: (at.y - view.y) * view.scale });
+  };
+  useFollowThing(control, room, playhead, thing);
   useKeys('Picture', [
-    { key: '+', says: 'Closer', run: () => control.zoom(1.5) },
-    { key: '-', says: 'Further away', run: () => control.zoom(1 / 1.5), shown: '−' },
+    { key: '+', says: 'Closer', run: () => zoom(1.5) },
+    { key: '-', says: 'Further away', run: () => zoom(1 / 1.5), shown: '−' },
     { key: '0', says: 'The whole picture', run: control.fit },
   ]);
   return (
@@ -92,7 +100,7 @@ export function PictureStage(props: PictureStageProps) {
           <Overlay {...props} objects={objects} view={view} seen={seen} room={room} beside={!narrow} />
         </>
       )}
-      <ZoomControls control={control} />
+      <ZoomControls control={control} onZoom={zoom} />
       {children}
     </div>
   );

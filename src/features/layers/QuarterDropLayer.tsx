@@ -38,7 +38,7 @@ export const QuarterDropLayer = memo(function QuarterDropLayer({ objects, unit }
                 className="fill-pencil-blue font-mono"
                 weight={600}
               >
-                ¼
+                quarter
               </HaloText>
             </g>,
           ];

@@ -2,10 +2,10 @@ import { shownNumber } from '../../lib/honestDigits.ts';
 import type { ViewControl } from './useView.ts';
 
 const BUTTON =
-  'grid min-h-7 min-w-7 place-items-center rounded-control border border-rule bg-sheet px-1.5 font-mono text-xs font-semibold text-ink hover:border-graphite disabled:opacity-55 touch:min-h-11 touch:min-w-11';
+  'inline-flex min-h-7 min-w-7 items-center justify-center rounded-control border border-rule bg-sheet px-1.5 font-mono text-xs font-semibold text-ink hover:border-graphite disabled:opacity-55 whitespace-nowrap touch:min-h-11 touch:min-w-11';
 
 /** Closer, further away, the whole picture; on the surround. */
-export function ZoomControls({ control }: { control: ViewControl }) {
+export function ZoomControls({ control, onZoom }: { control: ViewControl; onZoom: (factor: number) => void }) {
   return (
     <fieldset aria-label="Zoom" className="absolute bottom-2 left-2 flex gap-1 max-md:hidden">
       <button
@@ -13,11 +13,11 @@ export function ZoomControls({ control }: { control: ViewControl }) {
         className={BUTTON}
         aria-label="Further away"
         disabled={control.fitted}
-        onClick={() => control.zoom(1 / 1.5)}
+        onClick={() => onZoom(1 / 1.5)}
       >
         −
       </button>
-      <button type="button" className={BUTTON} aria-label="Closer" onClick={() => control.zoom(1.5)}>
+      <button type="button" className={BUTTON} aria-label="Closer" onClick={() => onZoom(1.5)}>
         +
       </button>
       {!control.fitted && (

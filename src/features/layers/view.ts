@@ -59,3 +59,15 @@ export function zoomAbout(view: View, factor: number, at: Point, smallest: numbe
 export function panBy(view: View, dx: number, dy: number): View {
   return { ...view, x: view.x - dx / view.scale, y: view.y - dy / view.scale };
 }
+
+/**
+ * How far to move the picture, px of the screen, so that a picture point comes to the middle of the room; null while it is
+ * well in sight.
+ */
+export function panToSee(view: View, room: Size, point: Point): Point | null {
+  const x = (point.x - view.x) * view.scale;
+  const y = (point.y - view.y) * view.scale;
+  const clear = (at: number, length: number) => at >= 0.12 * length && at <= 0.88 * length;
+  if (clear(x, room.width) && clear(y, room.height)) return null;
+  return { x: room.width / 2 - x, y: room.height / 2 - y };
+}

@@ -22,7 +22,7 @@ export function FlightCard({ flight, object, reading, findings, open }: FlightCa
   return (
     <Card className="px-4 py-3" aria-label={`Flight ${flight.id}`}>
       <details open={open}>
-        <summary className="relative list-none pr-6 [&::-webkit-details-marker]:hidden">
+        <summary className="relative list-none pr-6 touch:min-h-11 [&::-webkit-details-marker]:hidden">
           <h2 className="flex items-baseline gap-2 text-md">
             Flight {flight.id} <span className="font-mono text-xs font-normal text-graphite">{span}</span>
           </h2>

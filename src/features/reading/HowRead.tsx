@@ -9,7 +9,8 @@ const Z95 = 1.96;
 
 const estimate = (value: number, se: number, most: number) => {
   const decimals = decimalsFor(Z95 * se, most);
-  return `${shownNumber(value, decimals)} ± ${shownNumber(Z95 * se, decimals)}`;
+  const half = shownNumber(Z95 * se, decimals);
+  return `${shownNumber(value, decimals)} ± ${Number(half) === 0 ? `< ${shownNumber(10 ** -decimals, decimals)}` : half}`;
 };
 
 function rowsOf(flight: Flight, object: ReadObject, reading: Reading): [string, string][] {
@@ -51,7 +52,7 @@ function rowsOf(flight: Flight, object: ReadObject, reading: Reading): [string, 
 export function HowRead({ flight, object, reading }: { flight: Flight; object: ReadObject; reading: Reading }) {
   return (
     <details className="mt-1.5 text-xs">
-      <summary className="inline-block py-0.5 text-graphite underline underline-offset-2 hover:text-ink touch:py-3">
+      <summary className="inline-block py-0.5 text-graphite underline underline-offset-2 hover:text-ink touch:py-3.5">
         How this was read
       </summary>
       <p className="mt-1.5 text-graphite">

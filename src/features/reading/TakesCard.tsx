@@ -48,7 +48,6 @@ export function TakesCard({ slug, takes, currentId }: TakesCardProps) {
               <Link
                 to={paths.take(slug, take.shotNumber, take.number)}
                 aria-current={isCurrent ? 'page' : undefined}
-                aria-label={`Take ${take.number}, ${STATE_WORDS[take.review]}${count === null ? '' : `, ${count} ${count === 1 ? 'finding' : 'findings'}`}`}
                 className="block rounded-[6px] no-underline"
               >
                 <span className={clsx('block rounded-[6px]', isCurrent && 'outline-2 outline-ink')}>
@@ -56,7 +55,14 @@ export function TakesCard({ slug, takes, currentId }: TakesCardProps) {
                 </span>
                 <span className={clsx('mt-1 block', isCurrent ? 'font-semibold' : 'text-graphite')}>
                   Take {take.number}
-                  {count !== null && ` · ${count}`}
+                  <span className="sr-only">, {STATE_WORDS[take.review].toLowerCase()}</span>
+                  {count !== null && (
+                    <>
+                      {' · '}
+                      {count}
+                      <span className="sr-only">{count === 1 ? ' finding' : ' findings'}</span>
+                    </>
+                  )}
                 </span>
               </Link>
             </li>

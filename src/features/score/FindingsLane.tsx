@@ -43,7 +43,6 @@ export function FindingsLane({ findings, columns, range, firstFrame, chosen, onC
             key={finding.id}
             type="button"
             aria-pressed={chosen === finding.id}
-            aria-label={`Finding ${finding.number}, ${finding.title}, frames ${from} to ${to}`}
             onClick={() => onChoose(finding.id)}
             className="absolute h-[20px] text-left text-xs font-semibold whitespace-nowrap text-red touch:before:absolute touch:before:-inset-y-3 touch:before:inset-x-0"
             style={{ left: left + 1, top: rows[index]! * ROW + 4, minWidth: width - 2 }}
@@ -56,8 +55,12 @@ export function FindingsLane({ findings, columns, range, firstFrame, chosen, onC
               style={{ width: width - 2 }}
             />
             <span className="sticky left-(--names) pl-2">
-              <span className="relative rounded-mark bg-redwash/85 pr-1 font-mono">{finding.number}</span>
+              <span className="relative rounded-mark bg-redwash/85 pr-1 font-mono">
+                <span className="sr-only">Finding </span>
+                {finding.number}
+              </span>{' '}
               <span className="relative rounded-mark bg-redwash/85 px-0.5">{finding.title}</span>
+              <span className="sr-only">, {from === to ? `frame ${from}` : `frames ${from} to ${to}`}</span>
             </span>
           </button>
         );

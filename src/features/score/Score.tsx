@@ -45,8 +45,8 @@ export interface ScoreProps {
   hanging: { frame: number; content: ReactNode } | null;
 }
 
-const ACROSS = 50;
-const UP = 88;
+const ACROSS = 54;
+const UP = 86;
 const NOTHING = { exposure: [], frames: 0 };
 
 /** The score: the lanes under the picture, one column a frame, on one axis. */

@@ -32,7 +32,7 @@ const Bars = memo(function Bars({ spacing, scale, height, columns, from, to }: D
     .map((bar) => {
       const top = laneY(scale, Math.max(0, bar.drawn), height);
       const bottom = laneY(scale, Math.min(0, bar.drawn), height);
-      const look = bar.off ? 'fill-redline' : bar.flight === null ? 'fill-none stroke-rule' : 'fill-bar';
+      const look = bar.off ? 'fill-redline' : bar.flight === null ? 'fill-none stroke-graphite/45' : 'fill-bar';
       return (
         <rect
           key={bar.frame}

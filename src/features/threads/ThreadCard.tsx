@@ -36,7 +36,7 @@ export function ThreadCard(props: ThreadCardProps) {
     <section aria-label={`Thread on frame ${shown}`} className="px-3.5 pt-1 pb-1.5">
       <div className="float-right -mr-2 flex items-center gap-1">
         {place}
-        <IconButton label="Fold this note" onClick={onClose} className="size-8!">
+        <IconButton label="Fold this note" onClick={onClose} className="size-8! touch:size-11!">
           <CrossGlyph />
         </IconButton>
       </div>

@@ -64,13 +64,18 @@ export function HangingNotes({ slug, take, me, mayWrite, playhead, hanging, talk
       place={
         threads.length > 1 && (
           <span className="flex items-center text-xs text-graphite">
-            <IconButton label="Note before" className="size-8!" disabled={place <= 0} onClick={() => talk.step(-1)}>
+            <IconButton
+              label="Note before"
+              className="size-8! touch:size-11!"
+              disabled={place <= 0}
+              onClick={() => talk.step(-1)}
+            >
               ‹
             </IconButton>
             {place + 1} of {threads.length}
             <IconButton
               label="Next note"
-              className="size-8!"
+              className="size-8! touch:size-11!"
               disabled={place >= threads.length - 1}
               onClick={() => talk.step(1)}
             >

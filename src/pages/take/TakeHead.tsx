@@ -5,6 +5,7 @@ import { StateChip } from '../../components/StateChip.tsx';
 import { TimeAgo } from '../../components/TimeAgo.tsx';
 import { fpsWords, holdWords } from '../../lib/fpsWords.ts';
 import { paths } from '../../lib/paths.ts';
+import { useMediaQuery } from '../../lib/useReducedMotion.ts';
 
 interface TakeHeadProps {
   slug: string;
@@ -21,11 +22,15 @@ interface TakeHeadProps {
 
 /** Which take this is, what became of it, and what can be done with it. */
 export function TakeHead({ slug, take, title, latest, whyNot, menu, children }: TakeHeadProps) {
+  const narrow = useMediaQuery('(max-width: 47.99rem)');
   const hold = take.hold === null ? '' : `, ${holdWords(take.hold)}`;
   return (
     <div className="mb-3 flex flex-wrap items-center gap-x-3.5 gap-y-1.5 max-md:px-3.5">
       <title>{`${take.shotNumber} ${title ?? ''}, take ${take.number} · Spandrel`}</title>
-      <Link to={paths.sheet(slug)} className="font-mono text-sm text-graphite no-underline hover:underline">
+      <Link
+        to={paths.sheet(slug)}
+        className="inline-flex items-center font-mono text-sm text-graphite no-underline hover:underline touch:min-h-11"
+      >
         {take.shotNumber}
       </Link>
       <h1 className="text-2xl max-md:-order-2 max-md:w-[calc(100%-4rem)] max-md:text-[1.25rem]">
@@ -37,15 +42,19 @@ export function TakeHead({ slug, take, title, latest, whyNot, menu, children }: 
         {hold} · <TimeAgo at={take.postedAt} />
       </span>
       {latest > take.number && (
-        <Link to={paths.take(slug, take.shotNumber, latest)} className="font-semibold">
+        <Link
+          to={paths.take(slug, take.shotNumber, latest)}
+          className="inline-flex items-center font-semibold touch:min-h-11"
+        >
           Take {latest} is newer
         </Link>
       )}
+      {narrow && <div className="-order-1 ml-auto">{menu}</div>}
       <div className="ml-auto flex flex-wrap items-center gap-2 max-md:hidden">
         {whyNot && <span className="text-sm text-graphite">{whyNot}</span>}
+        {!narrow && menu}
         {children}
       </div>
-      <div className="max-md:-order-1 max-md:ml-auto">{menu}</div>
     </div>
   );
 }

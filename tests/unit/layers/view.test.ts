@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { fitView, holdView, MAX_SCALE, panBy, zoomAbout } from '../../../src/features/layers/view.ts';
+import { fitView, holdView, MAX_SCALE, panBy, panToSee, zoomAbout } from '../../../src/features/layers/view.ts';
 
 const picture = { width: 960, height: 540 };
 const room = { width: 1000, height: 360 };
@@ -43,5 +43,14 @@ describe('what is seen of the picture', () => {
   it('moves the picture with the hand', () => {
     const view = { x: 10, y: 20, scale: 2 };
     expect(panBy(view, 6, -4)).toEqual({ x: 7, y: 22, scale: 2 });
+  });
+
+  it('moves to a thing only when it comes near the edge or leaves', () => {
+    const view = { x: 0, y: 0, scale: 2 };
+    expect(panToSee(view, room, { x: 250, y: 90 })).toBeNull();
+    expect(panToSee(view, room, { x: 495, y: 90 })).toEqual({ x: 500 - 990, y: 0 });
+    const by = panToSee(view, room, { x: 900, y: 500 })!;
+    const after = panBy(view, by.x, by.y);
+    expect(panToSee(after, room, { x: 900, y: 500 })).toBeNull();
   });
 });
