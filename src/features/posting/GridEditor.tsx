@@ -38,6 +38,8 @@ export interface GridEditorProps {
 export function GridEditor({ picture, address, grid, onGrid, onWrong, onRemove, problem }: GridEditorProps) {
   // While a number is half written the drawing follows it, and only a grid that can be cut is sent.
   const [written, setWritten] = useState<Grid | null>(null);
+  // A field is written digit by digit, and 1 on the way to 12 must not throw away what belongs to 12.
+  const [writing, setWriting] = useState<{ field: GridField; from: Grid } | null>(null);
   const shown = written ?? grid;
   const wrong = shown && gridProblem(shown, picture);
 
@@ -79,7 +81,11 @@ export function GridEditor({ picture, address, grid, onGrid, onWrong, onRemove, 
                 min={0}
                 inputMode="numeric"
                 value={Number.isNaN(shown[field]) ? '' : shown[field]}
-                onChange={(event) => set(withField(shown, field, event.target.valueAsNumber, picture))}
+                onFocus={() => setWriting({ field, from: shown })}
+                onChange={(event) => {
+                  const from = writing?.field === field ? writing.from : shown;
+                  set(withField(from, field, event.target.valueAsNumber, picture));
+                }}
                 fieldClassName="font-mono"
               />
             ))}

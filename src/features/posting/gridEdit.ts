@@ -30,6 +30,8 @@ export function firstCut({ width, height }: PictureSize): Grid {
 export function withField(grid: Grid, field: GridField, value: number, picture: PictureSize): Grid {
   const wasFull = grid.count === grid.columns * grid.rows;
   const next = { ...grid, [field]: value };
+  // Half written: nothing follows from it yet.
+  if (!Number.isInteger(value)) return next;
   if (field === 'columns' || field === 'gutterX' || field === 'marginX') {
     next.cellWidth = share(picture.width, next.columns, next.gutterX, next.marginX);
   }
