@@ -11,7 +11,8 @@ import type { Deps } from '../deps.ts';
 import { AppError } from '../errors.ts';
 import { draftFolder, thumbnailName } from '../storage/folders.ts';
 import { writeThumbnail } from '../storage/takeFiles.ts';
-import { changeDraft, openDraft, removePictureFiles, showDraft } from './drafts.service.ts';
+import { changeDraft } from './changeDraft.ts';
+import { openDraft, removePictureFiles, showDraft } from './drafts.service.ts';
 import { proposeGrid } from './proposeGrid.ts';
 
 /** A file as it arrived: under a name of ours on disk, with the name the person knows it by. */

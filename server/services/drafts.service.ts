@@ -11,6 +11,7 @@ import { AppError, notFound } from '../errors.ts';
 import { presentDraft } from '../presenters/drafts.presenter.ts';
 import { draftFolder, thumbnailName } from '../storage/folders.ts';
 import { accessByDraft, accessBySlug, allow } from './access.ts';
+import { changeDraft, draftClosed } from './changeDraft.ts';
 import { viewDraft } from './draftView.ts';
 import { proposeGrid } from './proposeGrid.ts';
 
@@ -71,24 +72,8 @@ export async function discardDraft(deps: Deps, userId: string, draftId: string):
 export async function openDraft(deps: Deps, userId: string, draftId: string) {
   const access = await accessByDraft(deps.dataSource.manager, userId, draftId);
   allow(access.actor, 'take:post');
-  if (access.draft.status !== 'open') throw closed();
+  if (access.draft.status !== 'open') throw draftClosed();
   return access;
-}
-
-/** Changes a draft while nobody else does: batches may arrive side by side. */
-export function changeDraft<Answer>(
-  deps: Deps,
-  draftId: string,
-  change: (manager: EntityManager, draft: Draft) => Promise<Answer>,
-): Promise<Answer> {
-  return deps.dataSource.transaction(async (manager) => {
-    const draft = await manager.findOne(Draft, { where: { id: draftId }, lock: { mode: 'pessimistic_write' } });
-    if (!draft) throw notFound('post');
-    if (draft.status !== 'open') throw closed();
-    const answer = await change(manager, draft);
-    await manager.update(Draft, { id: draftId }, { touchedAt: deps.now() });
-    return answer;
-  });
 }
 
 /** A draft as it goes over the wire. */
@@ -109,8 +94,4 @@ function refuseOutside(grid: Grid, picture: DraftPicture): void {
   if (inside) return;
   const message = `This cut reaches past the picture, which is ${picture.width} × ${picture.height} px.`;
   throw new AppError('invalid_request', message, { fields: [{ path: 'grid', message }] });
-}
-
-function closed(): AppError {
-  return new AppError('draft_closed', 'This post is posted already.');
 }

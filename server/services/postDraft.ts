@@ -9,7 +9,8 @@ import type { Deps } from '../deps.ts';
 import { AppError } from '../errors.ts';
 import type { DraftParts } from '../presenters/drafts.presenter.ts';
 import { draftFolder, thumbnailName } from '../storage/folders.ts';
-import { changeDraft, openDraft } from './drafts.service.ts';
+import { changeDraft } from './changeDraft.ts';
+import { openDraft } from './drafts.service.ts';
 import { viewDraft } from './draftView.ts';
 import { type PostGiven, postTake, type Strip } from './posting.service.ts';
 

@@ -21,6 +21,7 @@ const aboutTake = z.object({ card: feedCardSchema, shot: shotSchema });
 export const productionEventSchema = z
   .discriminatedUnion('kind', [
     numbered.extend({ kind: z.literal('take:posted'), payload: aboutTake }),
+    // Something became of its reading: it was read, it failed, or it waits to be read again.
     numbered.extend({ kind: z.literal('take:read'), payload: aboutTake }),
     numbered.extend({ kind: z.literal('take:decided'), payload: aboutTake }),
     numbered.extend({

@@ -4,14 +4,14 @@ import { tmpdir } from 'node:os';
 import path from 'node:path';
 import type { Role } from '../../shared/api/people.ts';
 import type { Take } from '../../shared/api/takes.ts';
-import type { Note, Thread } from '../../shared/api/threads.ts';
+import type { Thread } from '../../shared/api/threads.ts';
 import type { Deps } from '../../server/deps.ts';
 import { Membership } from '../../server/entities/Membership.ts';
 import { Production } from '../../server/entities/Production.ts';
 import { User } from '../../server/entities/User.ts';
 import { type PostGiven, postTake } from '../../server/services/posting.service.ts';
 import { hashPassword } from '../../server/services/session.service.ts';
-import { pinNote, replyInThread } from '../../server/services/threads.service.ts';
+import { pinNote } from '../../server/services/threads.service.ts';
 import { drawToss } from './pictures.ts';
 
 /** Everyone built here signs in with it; hashing is slow on purpose, so it is done once. */
@@ -113,8 +113,4 @@ export async function buildThread(
   const { frame = 1, body = 'The gaps close too early.' } = given;
   const thread = await pinNote(deps, posted.user.id, posted.take.id, { frame, body });
   return { thread, takeId: posted.take.id, user: posted.user, production: posted.production };
-}
-
-export function buildReply(deps: Deps, user: User, thread: Thread, body = 'Yes, I will open them.'): Promise<Note> {
-  return replyInThread(deps, user.id, thread.id, body);
 }
