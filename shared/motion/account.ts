@@ -43,6 +43,7 @@ const LOST_PRICE = 2 * Math.log(60 * 60) - 2 * Math.log(2 * Math.PI * Math.E) + 
 /** Price of a contact that kicks the thing down, or hardly at all: that is no contact. */
 const IMPOSSIBLE_PRICE = 80;
 const LEAST_KICK = 1.2;
+const WEAK_KICK = 0.3;
 
 export interface Field {
   samples: Samples;
@@ -86,7 +87,8 @@ function readmit(account: Account, field: Field): Account {
   let best = account;
   for (const i of account.left) {
     const off = (field.samples.x[i]! - best.fit.xs[i]!) ** 2 + (field.samples.y[i]! - best.fit.ys[i]!) ** 2;
-    if (off * field.drawings[i]!.weight > 30 * best.noise2) continue;
+    const outer = i < 2 || i >= field.drawings.length - 2;
+    if (!outer && off * field.drawings[i]!.weight > 30 * best.noise2) continue;
     const weight = Float64Array.from(best.weight);
     weight[i] = field.drawings[i]!.weight;
     const next = fitOnce(best.fit, best.fault, best.depth, weight, field);
@@ -127,7 +129,7 @@ function judge(fit: PathFit, fault: Fault | null, depth: boolean, weight: Float6
   const marks = 2 * used + field.replicates.freedom + PRIOR_FREEDOM;
   const odd = impossible(fit, weight, field);
   const plain = fit.path.size - (fit.path.shape ? 1 : 0) - (depth ? 2 : 0);
-  const price = PARAMETER_PRICE * plain + (fault ? PRICE[fault.kind] : 0) + (depth ? PRICE.depth : 0);
+  const price = PARAMETER_PRICE * plain + (fault ? priceOf(fault, fit) : 0) + (depth ? PRICE.depth : 0);
   return {
     fault,
     depth,
@@ -146,27 +148,44 @@ function judge(fit: PathFit, fault: Fault | null, depth: boolean, weight: Float6
   };
 }
 
-/** How many contacts between two flights do not kick the thing up, or have but one drawing after them to say so. */
+/** Price of a fault. Along a straight line up and down, even steps say no more than too straight a rise and fall. */
+function priceOf(fault: Fault, fit: PathFit): number {
+  if (fault.kind !== 'shape' || !fault.name.startsWith('even')) return PRICE[fault.kind];
+  const { knots, theta } = fit;
+  const across = Math.abs(knots.x[fault.span + 1]! - knots.x[fault.span]!);
+  const length = knots.t[fault.span + 1]! - knots.t[fault.span]!;
+  return PRICE.shape + (across < 0.05 * theta[0]! * length * length ? 4 : 0);
+}
+
+/**
+ * How many contacts between two flights do not kick the thing up, or have but one drawing beyond them to say so. A kick far
+ * weaker than a bounce between two such flights gives counts in part.
+ */
 function impossible(fit: PathFit, weight: Float64Array, field: Field): number {
   const { path, knots, theta } = fit;
+  const last = path.spans.length - 1;
   let count = 0;
-  for (let k = 1; k < path.spans.length; k += 1) {
-    const before = path.spans[k - 1]!;
-    const after = path.spans[k]!;
-    if (before.kind !== 'flight' || after.kind !== 'flight') continue;
+  for (let k = 1; k <= last; k += 1) {
+    if (path.spans[k - 1]!.kind !== 'flight' || path.spans[k]!.kind !== 'flight') continue;
     const g = theta[0]!;
     const left = knots.t[k]! - knots.t[k - 1]!;
     const right = knots.t[k + 1]! - knots.t[k]!;
     const down = (knots.y[k]! - knots.y[k - 1]!) / left + 0.5 * g * left;
     const up = (knots.y[k + 1]! - knots.y[k]!) / right - 0.5 * g * right;
-    if (k === path.spans.length - 1 && drawingsAfter(field, weight, knots.t[k]!) < 2) count += 1;
-    else if (down - up < LEAST_KICK * g * field.step || (down < 0 && up > -g)) count += 1;
+    const alone =
+      (k === last && drawingsBetween(field, weight, knots.t[k]!, Infinity) < 2) ||
+      (k === 1 && drawingsBetween(field, weight, -Infinity, knots.t[k]!) < 2);
+    if (alone || down - up < LEAST_KICK * g * field.step || (down < 0 && up > -g)) count += 1;
+    else if (down - up < WEAK_KICK * g * (left + right)) count += 0.3;
   }
   return count;
 }
 
-function drawingsAfter(field: Field, weight: Float64Array, time: number): number {
+function drawingsBetween(field: Field, weight: Float64Array, from: number, to: number): number {
   let count = 0;
-  for (let i = weight.length - 1; i >= 0 && field.samples.t[i]! > time; i -= 1) if (weight[i]! > 0) count += 1;
+  for (let i = 0; i < weight.length; i += 1) {
+    const t = field.samples.t[i]!;
+    if (weight[i]! > 0 && t > from && t < to) count += 1;
+  }
   return count;
 }

@@ -1,32 +1,35 @@
 import type { Account, Field } from './account.ts';
-import { fitOnce, trim } from './account.ts';
-import { promising } from './faults.ts';
-import { SHAPE_STARTS } from './shapes.ts';
+import { fitOnce } from './account.ts';
+import type { Contest } from './compete.ts';
+import { compete } from './compete.ts';
 import type { Sketch } from './sketch.ts';
 import { oneFlight, pathOf, restFirst, restLast, sketchFrom, sketchOf } from './sketch.ts';
 import type { Stretch } from './spans.ts';
 import { isDoubtful, restructure } from './structure.ts';
 
-/** All accounts of one track, the one chosen first of all, and the best one without a fault. */
-export interface Contest {
-  chosen: Account;
-  clean: Account;
-  accounts: Account[];
-}
-
 /**
  * Lets every account of a track compete on the same residuals and takes the one that costs least. Structure and fault are
  * searched in turn: the best fault for a structure, then the best structure for that fault, until neither changes.
  */
-export function holdContest(field: Field, stretches: readonly Stretch[], lost: readonly number[]): Contest | null {
+export function holdContest(
+  field: Field,
+  stretches: readonly Stretch[],
+  lost: readonly number[],
+  odd: readonly number[],
+): Contest | null {
   const full = Float64Array.from(field.drawings, (drawing) => drawing.weight);
-  const weight = Float64Array.from(full);
-  for (const index of lost) weight[index] = 0;
+  const even = full.map((one, i) => (odd.includes(i) ? 0 : one));
+  const weight = even.map((one, i) => (lost.includes(i) ? 0 : one));
   let best: Contest | null = null;
   if (stretches.some((stretch) => stretch.kind === 'flight')) {
     for (const sketch of firstSketches(sketchOf(field, stretches), stretches, field)) {
       const next = compete(sketch, weight, field);
       if (!best || next.chosen.cost < best.chosen.cost) best = next;
+    }
+    if (best && lost.some((i) => best!.chosen.left.includes(i))) {
+      const { path, theta, knots } = best.chosen.fit;
+      const next = compete(sketchFrom(path, theta, knots), even, field);
+      if (next.chosen.cost < best.chosen.cost) best = next;
     }
   }
   if (!best || isPoor(best.chosen, field)) {
@@ -86,34 +89,4 @@ function plainSketches(field: Field, weight: Float64Array): Sketch[] {
 /** An account that leaves out much or fits badly: its structure may be wrong. */
 function isPoor(account: Account, field: Field): boolean {
   return account.left.length > 0.2 * field.drawings.length || account.noise2 > 9;
-}
-
-/** Fits the structure of a sketch without a fault and with every fault that promises something. */
-function compete(sketch: Sketch, weight: Float64Array, field: Field): Contest {
-  const raw = fitOnce(pathOf(sketch, null, false, field), null, false, weight, field);
-  const clean = trim(raw, field);
-  const base = sketchFrom(clean.fit.path, clean.fit.theta, clean.fit.knots);
-  const tried: Account[] = [];
-  const promises = promising(raw, field);
-  if (clean.left.length !== raw.left.length) {
-    for (const more of promising(clean, field)) {
-      if (!promises.some((one) => JSON.stringify(one.fault) === JSON.stringify(more.fault))) promises.push(more);
-    }
-  }
-  for (const { fault, depth } of promises) {
-    const starts =
-      fault?.kind === 'shape'
-        ? SHAPE_STARTS[fault.name].map((start) => start.base + start.steps * field.step)
-        : [undefined];
-    for (const shape of starts)
-      tried.push(fitOnce(pathOf(base, fault, depth, field, { shape }), fault, depth, weight, field));
-  }
-  tried.sort((a, b) => a.cost - b.cost);
-  const accounts = [clean];
-  for (const account of tried.slice(0, 4)) {
-    const worthIt = account.cost < Math.min(clean.cost, tried[0]!.cost) + 60;
-    accounts.push(worthIt ? trim(account, field) : account);
-  }
-  accounts.sort((a, b) => a.cost - b.cost);
-  return { chosen: accounts[0]!, clean, accounts };
 }

@@ -59,8 +59,13 @@ export function gatherDrawings(
 
 /** Marks of one drawing that disagree far beyond the others' noise: the one nearer to the drawings around it stands. */
 function settleDisputes(drawings: Drawing[]): void {
-  const { sum, freedom } = replicateNoise(drawings);
-  const limit = Math.max(4, 7 * Math.sqrt(sum / Math.max(1, freedom)));
+  const spreads = drawings
+    .filter((drawing) => drawing.weight > 1)
+    .map((drawing) =>
+      drawing.marks.reduce((sum, mark) => sum + (mark.x - drawing.x) ** 2 + (mark.y - drawing.y) ** 2, 0),
+    )
+    .sort((a, b) => a - b);
+  const limit = Math.max(4, 8 * Math.sqrt((spreads[Math.floor(spreads.length / 2)] ?? 0) / 1.4));
   drawings.forEach((drawing, i) => {
     const [first, ...others] = drawing.marks;
     if (!first || !others.some((mark) => Math.hypot(mark.x - first.x, mark.y - first.y) > limit)) return;

@@ -23,20 +23,21 @@ export function promising(clean: Account, field: Field): Promise[] {
   const samples = { ...field.samples, weight: clean.weight };
   const marks = 2 * (field.drawings.length - clean.left.length) + field.replicates.freedom;
   const squares = clean.noise2 * (clean.freedom + 2);
+  const deep: [number, number] | undefined = clean.depth ? [theta[path.depthAt]!, theta[path.depthAt + 1]!] : undefined;
   const out: Promise[] = [];
   const consider = (fault: Fault | null, depth: boolean) => {
     if (fault?.kind === 'held') {
       out.push({ fault, depth, gain: Infinity });
       return;
     }
-    const start = pathOf(base, fault, depth, field);
+    const start = pathOf(base, fault, depth, field, { depth: deep });
     const step = fitStep(start.path, start.theta, samples, 0);
     if (!step) return;
     const gain = marks * Math.log(squares / Math.max(squares - step.gain, 0.02 * squares));
     if (gain > LEAST_PROMISE) out.push({ fault, depth, gain });
   };
-  consider(null, true);
-  for (const fault of possibleFaults(clean, field)) consider(fault, false);
+  if (!clean.depth) consider(null, true);
+  for (const fault of possibleFaults(clean, field)) consider(fault, clean.depth);
   out.sort((a, b) => b.gain - a.gain);
   const best = out.find((one) => Number.isFinite(one.gain))?.gain ?? 0;
   return out.filter((one, i) => i < MOST_TRIED && one.gain > 0.15 * best);
@@ -63,7 +64,12 @@ function possibleFaults(clean: Account, field: Field): Fault[] {
   const steps = drawings.map((d, i) => (i ? Math.hypot(d.x - drawings[i - 1]!.x, d.y - drawings[i - 1]!.y) : 0));
   for (let i = 1; i < steps.length; i += 1) {
     const around = Math.max(steps[i - 1] ?? 0, steps[i + 1] ?? 0);
-    if (isFlightAt(clean, field.samples.t[i]!) && steps[i]! < 0.35 * around && around > 3 * Math.sqrt(clean.noise2)) {
+    if (
+      isFlightAt(clean, field.samples.t[i - 1]!) &&
+      isFlightAt(clean, field.samples.t[i]!) &&
+      steps[i]! < 0.35 * around &&
+      around > 3 * Math.sqrt(clean.noise2)
+    ) {
       faults.push({ kind: 'held', drawing: i });
     }
   }

@@ -82,7 +82,10 @@ function factorOf(fit: PathFit, samples: Samples, room: Slopes): boolean {
   differentiate(fit.path, fit.theta, samples, fit.xs, fit.ys, room);
   gather(samples, fit.xs, fit.ys, p, room);
   const { normal } = room;
-  for (let k = 0; k < p; k += 1) normal[k * p + k] = normal[k * p + k]! * (1 + 1e-10) + 1e-14;
+  for (let k = 0; k < p; k += 1) {
+    const own = normal[k * p + k]!;
+    normal[k * p + k] = own > 1e-9 ? own * (1 + 1e-9) : 1;
+  }
   return factorCholesky(normal, p);
 }
 

@@ -119,8 +119,8 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
       weight: Float64Array.from(local, (d) => d.weight),
     },
   };
-  const lost = [...odd, ...pieces.filter((piece) => piece.kind === 'lost').map((piece) => piece.from)];
-  const contest = holdContest(field, stretches, lost);
+  const lost = pieces.filter((piece) => piece.kind === 'lost').map((piece) => piece.from);
+  const contest = holdContest(field, stretches, lost, odd);
   if (!contest || !contest.chosen.fit.path.spans.some((span) => span.kind === 'flight')) {
     return nothing('not-in-flight', `${track.id} rests, rolls or is carried; nothing in it flies.`);
   }

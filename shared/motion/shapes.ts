@@ -13,6 +13,16 @@ export interface Shape {
 }
 export type ShapeName = 'apex' | 'power' | 'hang' | 'hang-up' | 'ease' | 'even-path' | 'even-steps';
 
+export const SHAPE_NAMES: readonly ShapeName[] = [
+  'ease',
+  'even-path',
+  'apex',
+  'power',
+  'hang',
+  'hang-up',
+  'even-steps',
+];
+
 export const SHAPE_NOTHING: Record<ShapeName, number> = {
   apex: 0,
   power: 2,

@@ -1,7 +1,6 @@
 import type { Account, Fault, Field } from './account.ts';
 import { fitOnce, trim } from './account.ts';
-import { SHAPE_STARTS } from './shapes.ts';
-import type { ShapeName } from './shapes.ts';
+import { SHAPE_NAMES, SHAPE_STARTS } from './shapes.ts';
 import type { Sketch } from './sketch.ts';
 import { flightLast, pathOf, recast, restFirst, restLast, rollFirst, sketchFrom, withoutKnot } from './sketch.ts';
 
@@ -84,7 +83,7 @@ function optionsFor(account: Account, field: Field): Option[] {
     const joined = withoutKnot(sketch, k);
     add(joined, (span) => (span >= k ? span - 1 : span));
     if (before === 'flight' && after === 'flight' && hardlyKicks(account, k)) {
-      for (const name of ALL_SHAPES) {
+      for (const name of SHAPE_NAMES) {
         for (const start of SHAPE_STARTS[name]) {
           options.push({
             sketch: joined,
@@ -113,8 +112,6 @@ export function isDoubtful(account: Account, field: Field): boolean {
   const n = field.drawings.length;
   return misfits(account, field) || account.left.some((i) => i < OUTER || i >= n - OUTER);
 }
-
-const ALL_SHAPES: readonly ShapeName[] = ['ease', 'even-path', 'apex', 'power', 'hang', 'hang-up', 'even-steps'];
 
 /** A contact that kicks far less than a bounce between two flights of these lengths would. */
 function hardlyKicks(account: Account, k: number): boolean {

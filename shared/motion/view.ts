@@ -2,7 +2,7 @@ import type { FrameRate } from '../reading/document.ts';
 import { shownFrame } from '../reading/document.ts';
 import type { Tolerances } from '../reading/tolerances.ts';
 import type { Account, Field } from './account.ts';
-import type { Contest } from './choose.ts';
+import type { Contest } from './compete.ts';
 
 /** One flight as the findings and measures see it. Times here are local (frames after the first drawing). */
 export interface FlightView {

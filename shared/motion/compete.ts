@@ -1,0 +1,83 @@
+import type { Account, Fault, Field } from './account.ts';
+import { fitOnce, trim } from './account.ts';
+import { promising } from './faults.ts';
+import { SHAPE_NAMES, SHAPE_STARTS } from './shapes.ts';
+import type { Sketch } from './sketch.ts';
+import { pathOf, sketchFrom } from './sketch.ts';
+
+/** All accounts of one track, the one chosen first of all, and the best one without a fault. */
+export interface Contest {
+  chosen: Account;
+  clean: Account;
+  accounts: Account[];
+}
+
+/** An account so much dearer than the best that leaving drawings out will not save it. */
+const OUT_OF_REACH = 60;
+
+/** Fits the structure of a sketch without a fault and with every fault that promises something. */
+export function compete(sketch: Sketch, weight: Float64Array, field: Field): Contest {
+  const raw = fitOnce(pathOf(sketch, null, false, field), null, false, weight, field);
+  const clean = trim(raw, field);
+  const tried: Account[] = [];
+  for (const start of clean === raw ? [raw] : [raw, clean]) {
+    const base = sketchOfAccount(start);
+    for (const { fault, depth } of promising(start, field))
+      tried.push(...fitStarts(base, fault, depth, start.weight, field));
+  }
+  tried.push(...afterGravity(clean, tried, field));
+  tried.sort((a, b) => a.cost - b.cost);
+  const accounts = [clean];
+  for (const account of tried.slice(0, 4)) {
+    const near = account.cost < Math.min(clean.cost, tried[0]!.cost) + OUT_OF_REACH;
+    accounts.push(near ? trim(account, field) : account);
+  }
+  accounts.sort((a, b) => a.cost - b.cost);
+  const deep = accounts.slice(0, 2).find((account) => account.depth);
+  if (deep) accounts.push(...inDepth(deep, field));
+  accounts.sort((a, b) => a.cost - b.cost);
+  return { chosen: accounts[0]!, clean, accounts };
+}
+
+function fitStarts(base: Sketch, fault: Fault | null, depth: boolean, weight: Float64Array, field: Field): Account[] {
+  if (fault?.kind !== 'shape') return [fitOnce(pathOf(base, fault, depth, field), fault, depth, weight, field)];
+  return SHAPE_STARTS[fault.name].map((start) => {
+    const shape = start.base + start.steps * field.step;
+    return fitOnce(pathOf(base, fault, depth, field, { shape }), fault, depth, weight, field);
+  });
+}
+
+/**
+ * A flight of a strange shape between true ones drags the gravity of all of them. Where letting it bend by its own gravity
+ * helps much, its shapes are tried from there, with the gravity of the others.
+ */
+function afterGravity(clean: Account, tried: readonly Account[], field: Field): Account[] {
+  const free = tried
+    .filter((account) => account.fault?.kind === 'gravity')
+    .reduce<Account | null>((best, one) => (!best || one.cost < best.cost ? one : best), null);
+  if (!free || free.fault?.kind !== 'gravity' || free.cost > clean.cost - 10) return [];
+  if (Math.sqrt(free.noise2) < 1.5 * field.noise + 0.1) return [];
+  const base = sketchOfAccount(free);
+  const { span } = free.fault;
+  return SHAPE_NAMES.flatMap((name) => fitStarts(base, { kind: 'shape', name, span }, false, free.weight, field));
+}
+
+/** Faults on top of motion towards or away from the camera. */
+function inDepth(deep: Account, field: Field): Account[] {
+  const { path, theta } = deep.fit;
+  const base = sketchOfAccount(deep);
+  const depth: [number, number] = [theta[path.depthAt]!, theta[path.depthAt + 1]!];
+  const out: Account[] = [];
+  for (const { fault } of promising(deep, field)) {
+    if (!fault) continue;
+    const start = fault.kind === 'shape' ? SHAPE_STARTS[fault.name][0]! : { base: 0, steps: 0 };
+    const shape = start.base + start.steps * field.step;
+    out.push(fitOnce(pathOf(base, fault, true, field, { shape, depth }), fault, true, deep.weight, field));
+  }
+  out.sort((a, b) => a.cost - b.cost);
+  return out.slice(0, 2).map((account) => trim(account, field));
+}
+
+function sketchOfAccount(account: Account): Sketch {
+  return sketchFrom(account.fit.path, account.fit.theta, account.fit.knots);
+}
