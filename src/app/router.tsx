@@ -1,4 +1,5 @@
 import type { QueryClient } from '@tanstack/react-query';
+import type { ReactNode } from 'react';
 import { createBrowserRouter, RouterContextProvider } from 'react-router';
 import { queryClientContext } from '../lib/routerContext.ts';
 import { AppFrame } from './AppFrame.tsx';
@@ -14,15 +15,18 @@ declare module 'react-router' {
   }
 }
 
+/** Pages inside a production have their `main` from the frame around them; these stand alone. */
+const asMain = (page: ReactNode) => <main>{page}</main>;
+
 /** Every address of the product. Pages load with their data, in parallel. */
 export function createRouter(queryClient: QueryClient) {
   return createBrowserRouter(
     [
       {
-        ErrorBoundary: RouteError,
+        errorElement: asMain(<RouteError />),
         HydrateFallback: FirstLoad,
         children: [
-          { path: '/', middleware: [openFirstProduction], loader: () => null, Component: NoProduction },
+          { path: '/', middleware: [openFirstProduction], loader: () => null, element: asMain(<NoProduction />) },
           {
             path: '/sign-in',
             lazy: { Component: async () => (await import('../pages/SignInPage.tsx')).SignInPage },
@@ -74,7 +78,7 @@ export function createRouter(queryClient: QueryClient) {
               },
             ],
           },
-          { path: '*', Component: NotFound },
+          { path: '*', element: asMain(<NotFound />) },
         ],
       },
     ],

@@ -26,7 +26,7 @@ export function CardTalk({ slug, card }: { slug: string; card: FeedCard }) {
       <Link
         to={paths.take(slug, take.shotNumber, take.number, frame)}
         style={{ marginLeft: `${hangsFrom(card, asked.frame) * 100}%` }}
-        className="mt-0 mb-3 block border-l-[1.5px] border-ink pt-1.5 pl-3 text-sm no-underline hover:bg-paper max-md:!ml-0"
+        className="mt-0 mb-3 block border-l-[1.5px] border-ink pt-1.5 pl-3 text-sm no-underline touch:min-h-11 hover:bg-paper max-md:!ml-0"
       >
         <span className="block">
           <b className="font-semibold">{asked.author.name}</b> <FrameTag>{frame}</FrameTag> {asked.excerpt}
