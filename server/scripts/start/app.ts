@@ -1,7 +1,8 @@
+import { openGivenDatabase } from '../../database/givenDatabase.ts';
 import { startMariadb } from '../../database/mariadb.ts';
 import { readOrMakeSecrets } from '../../database/secrets.ts';
 import { StartupError } from '../../database/startupError.ts';
-import { type DatabaseConnection, databaseOf, type Env, readEnv } from '../../env.ts';
+import { type DatabaseConnection, type Env, readEnv } from '../../env.ts';
 import { checkAddress, listenFault } from './address.ts';
 import { type Cleanup, createCleanup } from './cleanup.ts';
 import { ensureClientBuilt } from './clientBuild.ts';
@@ -72,8 +73,7 @@ async function openDatabase(
   cleanup: Cleanup,
   report: (error: unknown) => void,
 ): Promise<DatabaseConnection> {
-  const given = DATABASE_URL && databaseOf(DATABASE_URL);
-  if (given) return given;
+  if (DATABASE_URL) return openGivenDatabase(DATABASE_URL);
   const running = await startMariadb({ dataDir: DATA_DIR, password, signal: stop.signal });
   let asked = false;
   cleanup.add(() => {
