@@ -122,4 +122,27 @@ describe('sockets', () => {
     tab.close();
     witness.close();
   });
+
+  test('end when the session is over, though nobody signed out', async () => {
+    const { user } = await buildMember(server.deps);
+    const client = await signIn(server, user);
+    const tab = await goLive(server, client);
+    const { sessionId } = [...server.live.of('/').sockets.values()].at(-1)!.data;
+    await server.deps.dataSource.query('UPDATE sessions SET expires = 1 WHERE session_id = ?', [sessionId]);
+    const ended = message(tab, 'session:ended');
+    await recheckSockets(server.live, server.deps, server.sessions);
+    await ended;
+    await client.get('/session').expect(401);
+  });
+});
+
+test('a session is written once a minute at most, not with every request', async () => {
+  const { user } = await buildMember(server.deps);
+  const client = await signIn(server, user);
+  await client.get('/session').expect(200);
+  const expiries = () => server.deps.dataSource.query('SELECT session_id, expires FROM sessions ORDER BY session_id');
+  await server.deps.dataSource.query('UPDATE sessions SET expires = expires - 100 WHERE expires > 1000');
+  const before = await expiries();
+  for (let request = 0; request < 5; request += 1) await client.get('/session').expect(200);
+  expect(await expiries()).toEqual(before);
 });
