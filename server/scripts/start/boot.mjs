@@ -2,6 +2,7 @@
 import path from 'node:path';
 import { pathToFileURL } from 'node:url';
 import { ensurePackages } from './packages.mjs';
+import { startupError } from './sentence.mjs';
 
 const root = path.resolve(import.meta.dirname, '../../..');
 
@@ -32,8 +33,4 @@ export async function boot(module) {
     console.error(ours ? error.message : error);
     process.exit(1);
   }
-}
-
-export function startupError(message) {
-  return Object.assign(new Error(message), { name: 'StartupError' });
 }

@@ -60,7 +60,7 @@ function unlessMissing(error: NodeJS.ErrnoException): void {
 
 async function viteBuild(root: string, outDir: string, signal: AbortSignal): Promise<void> {
   const vite = path.join(root, 'node_modules/vite/bin/vite.js');
-  const args = [vite, 'build', '--outDir', outDir, '--emptyOutDir', '--logLevel', 'warn'];
+  const args = [vite, 'build', '--outDir', outDir, '--emptyOutDir', '--logLevel', 'error'];
   const env = { ...process.env, NODE_ENV: 'production' };
   const child = spawn(process.execPath, args, { cwd: root, env, stdio: ['ignore', 2, 2] });
   const end = () => child.kill('SIGKILL');

@@ -2,6 +2,7 @@
 import { spawn } from 'node:child_process';
 import { readFile } from 'node:fs/promises';
 import path from 'node:path';
+import { startupError } from './sentence.mjs';
 
 /** Installs the npm packages unless npm's own record in node_modules agrees with the lock file. */
 export async function ensurePackages(root, signal) {
@@ -10,9 +11,7 @@ export async function ensurePackages(root, signal) {
   const code = await npmCi(root, signal);
   signal.throwIfAborted();
   if (code === 0) return;
-  throw Object.assign(new Error('The npm packages could not be installed; npm says why above.'), {
-    name: 'StartupError',
-  });
+  throw startupError('The npm packages could not be installed; npm says why above.');
 }
 
 /** Every package of the lock file is installed in that version; only optional ones (other platforms') may be missing. */
