@@ -1,7 +1,7 @@
 import { memo } from 'react';
-import type { Point } from '../../../shared/reading/document.ts';
+import type { Flight, Point } from '../../../shared/reading/document.ts';
 import { arcAt } from '../../lib/arcAt.ts';
-import type { Drawing } from '../../lib/drawings.ts';
+import { type Drawing, drawingOn } from '../../lib/drawings.ts';
 import { useLitFrame } from '../../lib/playhead.ts';
 import { HaloLine } from './Halo.tsx';
 import type { LayerProps } from './layerProps.ts';
@@ -31,13 +31,16 @@ interface Tick {
   falls: boolean;
 }
 
+/** Half a frame to both sides: the drawings at the contacts belong to a flight's ladder. */
+function isIn(flight: Flight, frame: number): boolean {
+  return (flight.takeOff ?? -1) - 0.5 <= frame && frame <= (flight.landing ?? Number.POSITIVE_INFINITY) + 0.5;
+}
+
 /** Ticks of the drawings in flight; of all drawings when none is. */
 function ticksOf(objects: LayerProps['objects']): Tick[] {
   return objects.flatMap((object) => {
     const aloft = object.drawings.flatMap((drawing): Tick[] => {
-      const flight = object.flights.find(
-        (one) => (one.takeOff ?? -1) - 0.5 <= drawing.frame && drawing.frame <= (one.landing ?? Number.MAX_VALUE) + 0.5,
-      );
+      const flight = object.flights.find((one) => isIn(one, drawing.frame));
       if (!flight) return [];
       const should = arcAt(flight.trueArc, drawing.frame);
       return [{ drawing, should, falls: drawing.frame > (flight.apex?.frame ?? 0) }];
@@ -97,10 +100,13 @@ export const LaddersLayer = memo(function LaddersLayer({ rails, withTrue, unit, 
 /** The ticks of the lit drawing, stronger than the rest. */
 export function LitTicks({ objects, rails, unit, playhead }: LayerProps & { rails: Rails }) {
   const frame = useLitFrame(playhead);
-  const tick = ticksOf(objects).find(({ drawing }) => drawing.frame <= frame && frame <= drawing.until);
-  if (!tick) return null;
+  const object = objects.find((one) => drawingOn(one.drawings, frame));
+  const drawing = object && drawingOn(object.drawings, frame);
+  if (!drawing) return null;
+  const flight = object.flights.find((one) => isIn(one, drawing.frame));
+  const falls = flight !== undefined && drawing.frame > (flight.apex?.frame ?? 0);
   const reach = (rails.clear ? ON_SURROUND : ON_PICTURE).lit * unit;
-  const d = `M${tick.drawing.x} ${rails.y}v${-reach}M${rails.x} ${tick.drawing.y}h${tick.falls ? reach : -reach}`;
+  const d = `M${drawing.x} ${rails.y}v${-reach}M${rails.x} ${drawing.y}h${falls ? reach : -reach}`;
   return (
     <g pointerEvents="none">
       <Ticks d={d} width={3} clear={rails.clear} />

@@ -29,7 +29,7 @@ const RAIL_INSET = 10;
 const RAIL_AWAY = 20;
 const TICK_ROOM = 14;
 
-/** All layers as one SVG in picture px: whatever the zoom, lines and words keep their size on the screen and stay sharp. */
+/** All layers in SVG and picture px: whatever the zoom, lines and words keep their size on the screen and stay sharp. */
 export function Overlay(props: OverlayProps) {
   const { objects, findings, firstFrame, playhead, picture, layers, view, seen, room, mend, chosenFinding, beside } =
     props;
@@ -57,27 +57,32 @@ export function Overlay(props: OverlayProps) {
   );
   const mended = findings.find((finding) => finding.id === mend);
   const shared = { objects, findings, firstFrame, playhead, unit, bounds };
+  const sheet = {
+    width: room.width,
+    height: room.height,
+    viewBox: `${seen.left} ${seen.top} ${seen.width} ${seen.height}`,
+    'aria-hidden': true,
+  };
+  // What is lit lies on a sheet of its own, so that a step does not paint the rest again.
   return (
-    <svg
-      className="absolute inset-0"
-      width={room.width}
-      height={room.height}
-      viewBox={`${seen.left} ${seen.top} ${seen.width} ${seen.height}`}
-      aria-hidden="true"
-    >
-      {layers.has('findings') && <WashLayer {...shared} chosen={chosenFinding} />}
-      {layers.has('quarter') && <QuarterDropLayer {...shared} />}
-      {layers.has('arc') && <TrueArcLayer {...shared} />}
-      {layers.has('ladders') && <LaddersLayer {...shared} rails={rails} withTrue={layers.has('arc')} />}
-      {layers.has('marks') && <MarksLayer {...shared} />}
-      {layers.has('ladders') && <LitTicks {...shared} rails={rails} />}
-      {layers.has('findings') && (
-        <FindingsLayer {...shared} badges={badges} chosen={chosenFinding} onChoose={props.onChooseFinding} />
-      )}
-      {mend && <MendLayer {...shared} finding={mend} />}
-      {layers.has('marks') && <LitMark {...shared} />}
-      {layers.has('numbers') && <NumbersLayer {...shared} numbers={numbers} />}
-      {layers.has('numbers') && <LitNumber {...shared} numbers={numbers} mend={mended?.mend ?? NO_MEND} />}
-    </svg>
+    <>
+      <svg {...sheet} className="absolute inset-0 will-change-transform">
+        {hasFindings && <WashLayer {...shared} chosen={chosenFinding} />}
+        {layers.has('quarter') && <QuarterDropLayer {...shared} />}
+        {layers.has('arc') && <TrueArcLayer {...shared} />}
+        {layers.has('ladders') && <LaddersLayer {...shared} rails={rails} withTrue={layers.has('arc')} />}
+        {layers.has('marks') && <MarksLayer {...shared} />}
+        {hasFindings && (
+          <FindingsLayer {...shared} badges={badges} chosen={chosenFinding} onChoose={props.onChooseFinding} />
+        )}
+        {layers.has('numbers') && <NumbersLayer {...shared} numbers={numbers} />}
+      </svg>
+      <svg {...sheet} className="pointer-events-none absolute inset-0 will-change-transform">
+        {layers.has('ladders') && <LitTicks {...shared} rails={rails} />}
+        {mend && <MendLayer {...shared} finding={mend} />}
+        {layers.has('marks') && <LitMark {...shared} />}
+        {layers.has('numbers') && <LitNumber {...shared} numbers={numbers} mend={mended?.mend ?? NO_MEND} />}
+      </svg>
+    </>
   );
 }

@@ -10,7 +10,7 @@ import {
 } from 'react';
 import type { Reading } from '../../../shared/reading/document.ts';
 import type { NumberedFinding } from '../../lib/numberedFindings.ts';
-import { type Playhead, useFrame } from '../../lib/playhead.ts';
+import type { Playhead } from '../../lib/playhead.ts';
 import { useMediaQuery } from '../../lib/useReducedMotion.ts';
 import { useSize } from '../../lib/useSize.ts';
 import { columnMiddle, frameAt, layColumns, MIN_COLUMN, scrollToSee, THUMB_COLUMN } from './columns.ts';
@@ -144,11 +144,15 @@ function useFollow(
   columns: ReturnType<typeof layColumns>,
   seen: number,
 ) {
-  const frame = useFrame(playhead);
   useEffect(() => {
-    const element = scroller.current;
-    if (!element || seen <= 0) return;
-    const to = scrollToSee(columns, frame, element.scrollLeft, seen);
-    if (to !== null) element.scrollTo({ left: to });
-  }, [scroller, frame, columns, seen]);
+    const see = () => {
+      const element = scroller.current;
+      if (!element || seen <= 0) return;
+      const to = scrollToSee(columns, playhead.frame(), element.scrollLeft, seen);
+      if (to !== null) element.scrollTo({ left: to });
+    };
+    see();
+    // Not through React: a step would draw all lanes again only to scroll them.
+    return playhead.subscribe(see);
+  }, [scroller, playhead, columns, seen]);
 }

@@ -8,7 +8,7 @@ import { ErrorNote } from '../../components/ErrorNote.tsx';
 import { AnimatorWord } from '../../features/reading/AnimatorWord.tsx';
 import { Cautions } from '../../features/reading/Cautions.tsx';
 import { FindingsCard } from '../../features/reading/FindingsCard.tsx';
-import { FlightCard } from '../../features/reading/FlightCard.tsx';
+import { FlightList } from '../../features/reading/FlightList.tsx';
 import { OutcomeCard, outcomeOf } from '../../features/reading/OutcomeCard.tsx';
 import { ReadingUnderWay } from '../../features/reading/ReadingUnderWay.tsx';
 import { TakesCard } from '../../features/reading/TakesCard.tsx';
@@ -27,23 +27,6 @@ interface TakeMarginProps {
   error: unknown;
   onRetry: () => void;
   findings: ReturnType<typeof useFindings>;
-}
-
-function Flights({ reading, findings }: { reading: Reading; findings: ReturnType<typeof useFindings>['findings'] }) {
-  const flights = reading.objects.flatMap((object) => object.flights.map((flight) => ({ object, flight })));
-  return flights.map(({ object, flight }) => {
-    const own = findings.filter((finding) => finding.flight === flight.id);
-    return (
-      <FlightCard
-        key={flight.id}
-        flight={flight}
-        object={object}
-        reading={reading}
-        findings={own}
-        open={flights.length === 1 || own.length > 0}
-      />
-    );
-  });
 }
 
 /** The left margin: what was written and decided, the reading, what is off, the shot's takes. */
@@ -76,7 +59,7 @@ export function TakeMargin({ slug, take, shot, actor, reading, error, onRetry, f
         </ErrorNote>
       )}
       {outcome && outcome !== 'read' && <OutcomeCard outcome={outcome} />}
-      {reading && hasFlights && <Flights reading={reading} findings={findings.findings} />}
+      {reading && hasFlights && <FlightList reading={reading} findings={findings.findings} />}
       {reading && (
         <FindingsCard
           findings={findings.findings}
