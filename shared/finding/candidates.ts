@@ -1,11 +1,36 @@
+import type { Pose } from './align.ts';
 import { labelRegions, type Region } from './components.ts';
 import type { Box } from './grid.ts';
-import type { Measured } from './measure.ts';
+import type { Measured, Shape } from './measure.ts';
 
 /** Something that stands out from the background on one frame. */
 export interface Candidate extends Measured {
   /** Index of the frame, from 0. */
   index: number;
+  /** Where the camera was. `whole` and `lit` are on the stage, `view` is of the picture. */
+  pose: Pose;
+}
+
+/** What was measured on a picture, laid on the stage. */
+export function candidateOf(measured: Measured, index: number, pose: Pose): Candidate {
+  const whole = ontoStage(measured.whole, pose);
+  return { ...measured, whole, lit: measured.lit && ontoStage(measured.lit, pose), index, pose };
+}
+
+function ontoStage(shape: Shape, { dx, dy, zoom }: Pose): Shape {
+  return {
+    ...shape,
+    x: shape.x / zoom + dx,
+    y: shape.y / zoom + dy,
+    area: shape.area / zoom ** 2,
+    long: shape.long / zoom,
+    short: shape.short / zoom,
+  };
+}
+
+/** A place on the stage as a picture shows it, px. */
+export function ontoPicture({ x, y }: { x: number; y: number }, { dx, dy, zoom }: Pose): { x: number; y: number } {
+  return { x: (x - dx) * zoom, y: (y - dy) * zoom };
 }
 
 /** Most things looked at on one frame; the largest and clearest come first. */

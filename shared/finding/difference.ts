@@ -26,6 +26,48 @@ export function difference(picture: Picture, background: Picture, into: Uint8Arr
   return into;
 }
 
+/** Share of a background's step from pixel to pixel that a camera followed to a fraction of a pixel leaves behind. */
+const SLACK = 0.6;
+
+/**
+ * The difference from a background that was followed under a moving camera: less what a small error of the camera's
+ * place makes of the background's own edges, and nothing where the background is not known.
+ */
+export function looseDifference(
+  picture: Picture,
+  background: Picture,
+  known: Uint8Array,
+  into: Uint8Array,
+): Uint8Array {
+  difference(picture, background, into);
+  const { width, height, data } = background;
+  for (let y = 0, at = 0; y < height; y++) {
+    const up = y > 0 ? -width : 0;
+    const down = y < height - 1 ? width : 0;
+    for (let x = 0; x < width; x++, at++) {
+      if (into[at] === 0) continue;
+      if (known[at] === 0) {
+        into[at] = 0;
+        continue;
+      }
+      const left = x > 0 ? -1 : 0;
+      const right = x < width - 1 ? 1 : 0;
+      let slope = 0;
+      for (let c = 0; c < 3; c++) {
+        const here = data[at * 3 + c];
+        const across = Math.max(
+          Math.abs(data[(at + right) * 3 + c] - here),
+          Math.abs(data[(at + left) * 3 + c] - here),
+        );
+        const along = Math.max(Math.abs(data[(at + down) * 3 + c] - here), Math.abs(data[(at + up) * 3 + c] - here));
+        slope = Math.max(slope, across, along);
+      }
+      into[at] = Math.max(0, into[at] - SLACK * slope);
+    }
+  }
+  return into;
+}
+
 /** The difference that noise does not reach, grey levels: the thing covers less than a quarter of the picture. */
 export function noiseThreshold(differences: Uint8Array): number {
   const counts = new Uint32Array(256);

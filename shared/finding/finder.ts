@@ -1,10 +1,11 @@
 import type { Mark, Reading } from '../reading/document.ts';
-import { type Candidate, regionsOf, windowOf } from './candidates.ts';
+import type { Pose } from './align.ts';
+import { type Candidate, candidateOf, regionsOf, windowOf } from './candidates.ts';
 import { coarseFactor, reduce } from './coarse.ts';
-import { difference, noiseThreshold } from './difference.ts';
-import { type Ground, stillGround } from './ground.ts';
+import { difference, looseDifference, noiseThreshold } from './difference.ts';
+import { type Ground, learnGround } from './ground.ts';
 import { bestPath } from './link.ts';
-import { cut, measure } from './measure.ts';
+import { cut, type GroundCut, measure } from './measure.ts';
 import { settle } from './settle.ts';
 import { type FoundTrack, thingsAmong, trackOf } from './tracks.ts';
 import type { Picture, PointAt } from './types.ts';
@@ -38,11 +39,15 @@ export class Finder {
   readonly sampleIndices: number[];
   readonly #frames: Candidate[][];
   readonly #factor: number;
+  readonly #camera: FinderOptions['camera'];
+  readonly #poses: (Pose | undefined)[];
   #ground: Ground | null = null;
   #differences = new Uint8Array(0);
 
   constructor(options: FinderOptions) {
     this.#factor = coarseFactor(options.width, options.height);
+    this.#camera = options.camera;
+    this.#poses = Array.from({ length: options.frames });
     this.#frames = Array.from({ length: options.frames }, () => []);
     const count = Math.min(MOST_SAMPLES, options.frames);
     const step = (options.frames - 1) / Math.max(1, count - 1);
@@ -51,8 +56,7 @@ export class Finder {
 
   /** Learns the background from the pictures at `sampleIndices`, in that order. They are kept until `finish`. */
   learn(samples: Picture[]): void {
-    this.#ground = stillGround(samples, this.#factor);
-    this.#differences = new Uint8Array(this.#ground.coarse.width * this.#ground.coarse.height);
+    this.#ground = learnGround(samples, this.sampleIndices, this.#factor, this.#camera);
   }
 
   /**
@@ -64,13 +68,22 @@ export class Finder {
     const ground = this.#ground;
     if (!ground) throw new Error('The finder has to learn the background before it looks at a picture.');
     const coarse = reduce(picture, this.#factor);
-    difference(coarse, ground.coarse, this.#differences);
-    const threshold = noiseThreshold(this.#differences);
-    for (const region of regionsOf(this.#differences, coarse.width, coarse.height, threshold)) {
+    const pose = ground.poseOf(index, coarse);
+    this.#poses[index] = pose;
+    const differences = this.#compare(coarse, ground.coarse(pose));
+    const threshold = noiseThreshold(differences);
+    for (const region of regionsOf(differences, coarse.width, coarse.height, threshold)) {
       const box = windowOf(region, this.#factor, picture);
-      const measured = measure(cut(picture, box), ground.window(box), threshold, picture);
-      if (measured) this.#frames[index].push({ ...measured, index });
+      const measured = measure(cut(picture, box), ground.window(box, pose), threshold, picture);
+      if (measured) this.#frames[index].push(candidateOf(measured, index, pose));
     }
+  }
+
+  #compare(coarse: Picture, ground: GroundCut): Uint8Array {
+    const pixels = coarse.width * coarse.height;
+    if (this.#differences.length !== pixels) this.#differences = new Uint8Array(pixels);
+    if (!ground.known) return difference(coarse, ground, this.#differences);
+    return looseDifference(coarse, ground, ground.known, this.#differences);
   }
 
   /** Links what stood out to tracks and names the things A, B and C. Frames of the marks count from 1. */
@@ -87,9 +100,22 @@ export class Finder {
     const things = thingsAmong(tracks);
     return {
       tracks: things.map((thing, k) => ({ id: NAMES[k], marks: marksOf(thing) })),
-      camera: { moved: false, offsets: [] },
+      camera: this.#cameraMove(),
       cautions: things.length === 0 ? ['Nothing moves in these frames, so there is no flight to read.'] : [],
     };
+  }
+
+  /** The camera's way against the first frame, px of the full picture. */
+  #cameraMove(): Reading['camera'] {
+    if (!this.#ground?.moves) return { moved: false, offsets: [] };
+    const first = this.#poses.find((pose) => pose !== undefined);
+    if (!first) return { moved: false, offsets: [] };
+    const offsets = this.#poses.flatMap((pose, index) => {
+      if (!pose) return [];
+      const { dx, dy, zoom } = pose;
+      return [{ frame: index + 1, dx: round(dx - first.dx), dy: round(dy - first.dy), zoom: round(zoom, 5) }];
+    });
+    return { moved: true, offsets };
   }
 }
 
@@ -104,6 +130,6 @@ function marksOf(track: FoundTrack): Mark[] {
   }));
 }
 
-function round(value: number): number {
-  return Math.round(value * 1000) / 1000;
+function round(value: number, digits = 3): number {
+  return Number(value.toFixed(digits));
 }

@@ -1,3 +1,4 @@
+import { difference, looseDifference } from './difference.ts';
 import type { Box } from './grid.ts';
 import { insideLine } from './drawnLine.ts';
 import type { View } from './outline.ts';
@@ -8,6 +9,11 @@ import type { Picture } from './types.ts';
 export interface Cut extends Picture {
   left: number;
   top: number;
+}
+
+/** A cut of the background; `known` is 0 where too few pictures show it, and null where all is known. */
+export interface GroundCut extends Cut {
+  known: Uint8Array | null;
 }
 
 /** A thing measured in the full picture, px of the picture. */
@@ -62,7 +68,7 @@ export function cut(picture: Picture, box: Box): Cut {
  */
 export function measure(
   frame: Cut,
-  background: Cut,
+  background: GroundCut,
   threshold: number,
   size: { width: number; height: number },
 ): Measured | null {
@@ -106,16 +112,11 @@ function placed(shape: Silhouette, frame: Cut): Shape {
   return { x: x + frame.left, y: y + frame.top, area, long, short, tilt };
 }
 
-function windowDifferences(frame: Cut, background: Cut): Uint8Array {
-  const out = new Uint8Array(frame.width * frame.height);
-  for (let pixel = 0, at = 0; pixel < out.length; pixel++, at += 3) {
-    out[pixel] = Math.max(
-      Math.abs(frame.data[at] - background.data[at]),
-      Math.abs(frame.data[at + 1] - background.data[at + 1]),
-      Math.abs(frame.data[at + 2] - background.data[at + 2]),
-    );
-  }
-  return out;
+function windowDifferences(frame: Cut, background: GroundCut): Uint8Array {
+  const into = new Uint8Array(frame.width * frame.height);
+  return background.known
+    ? looseDifference(frame, background, background.known, into)
+    : difference(frame, background, into);
 }
 
 /** The value that only `share` of the differing pixels exceed; 0 when none differs. */

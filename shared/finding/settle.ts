@@ -1,9 +1,9 @@
-import type { Candidate } from './candidates.ts';
+import { type Candidate, ontoPicture } from './candidates.ts';
 import type { Shape } from './measure.ts';
 import { discOutline, fitOutline, type Outline, outlineOf } from './outline.ts';
 import type { FoundTrack } from './tracks.ts';
 
-/** Where the thing is on one frame when all of its frames are known. */
+/** Where the thing is on one frame when all of its frames are known, px of the picture. */
 export interface Placed {
   candidate: Candidate;
   x: number;
@@ -32,9 +32,11 @@ export function settle(track: FoundTrack): Placed[] {
   const rim = round ? rimShare(track, odd, usual) : 1;
   return track.path.flatMap((candidate, k) => {
     const shape = track.shapes[k];
-    const radius = rim * discRadius(usual[k]);
+    const { zoom } = candidate.pose;
+    const radius = rim * zoom * discRadius(usual[k]);
     const cutOff = candidate.onEdge > 0.3 * radius;
-    const plain: Placed = { candidate, x: shape.x, y: shape.y, radius, support: Math.exp(-Math.abs(offs[k])) };
+    const here = ontoPicture(shape, candidate.pose);
+    const plain: Placed = { candidate, ...here, radius, support: Math.exp(-Math.abs(offs[k])) };
     const doubtful = odd[k] || cutOff;
     if (!doubtful && !round) return [plain];
     const outline = round ? discOutline(radius, usual[k].smear) : nearestOutline(track, odd, k);
@@ -42,7 +44,7 @@ export function settle(track: FoundTrack): Placed[] {
     // A patch too much or too little moves a centroid by no more than its share of the area times two radii.
     const pull = 2.2 * radius * Math.abs(Math.exp(offs[k]) - 1);
     const reach = cutOff ? 0.8 * radius : Math.max(2, Math.min(0.6 * radius, pull));
-    const fit = fitOutline(candidate.view, outline, shape, reach, candidate.body, round ? [0] : TURNS);
+    const fit = fitOutline(candidate.view, outline, here, reach, candidate.body, round ? [0] : TURNS);
     if (!cutOff && Math.abs(offs[k]) < 0.15 && fit.startScore > BETTER * fit.score) return [plain];
     if (fit.support < 0.45) return shape.area < 0.5 * usual[k].area ? [] : [{ ...plain, support: 0.5 * plain.support }];
     return [{ candidate, x: fit.x, y: fit.y, radius, support: fit.support }];
@@ -98,13 +100,14 @@ function usualSizes(track: FoundTrack): Usual[] {
   });
 }
 
-/** Velocity on each frame from its neighbours on both sides, px/frame. */
+/** Velocity in the picture on each frame from its neighbours on both sides, px/frame: that is what smears. */
 function velocities({ path, shapes }: FoundTrack): { x: number; y: number }[] {
+  const places = path.map((candidate, k) => ontoPicture(shapes[k], candidate.pose));
   return path.map((_, k) => {
     const before = Math.max(0, k - 1);
     const after = Math.min(path.length - 1, k + 1);
     const frames = Math.max(1, path[after].index - path[before].index);
-    return { x: (shapes[after].x - shapes[before].x) / frames, y: (shapes[after].y - shapes[before].y) / frames };
+    return { x: (places[after].x - places[before].x) / frames, y: (places[after].y - places[before].y) / frames };
   });
 }
 
@@ -158,7 +161,8 @@ function rimShare(track: FoundTrack, odd: boolean[], usual: Usual[]): number {
     for (const k of chosen) {
       const { view, body } = track.path[k];
       const outline = discOutline(share * discRadius(usual[k]), usual[k].smear);
-      score += fitOutline(view, outline, track.shapes[k], 2, body, [0]).score / body;
+      const here = ontoPicture(track.shapes[k], track.path[k].pose);
+      score += fitOutline(view, outline, here, 2, body, [0]).score / body;
     }
     if (score > best.score) best = { share, score };
   }
@@ -198,9 +202,9 @@ function nearestOutline(track: FoundTrack, odd: boolean[], k: number): Outline |
     if (nearest < 0 || Math.abs(other - k) < Math.abs(nearest - k)) nearest = other;
   }
   if (nearest < 0) return null;
-  const { filled, view } = track.path[nearest];
-  const shape = track.shapes[nearest];
-  return outlineOf({ filled, x: shape.x - view.left, y: shape.y - view.top }, view.width, view.height);
+  const { filled, view, pose } = track.path[nearest];
+  const { x, y } = ontoPicture(track.shapes[nearest], pose);
+  return outlineOf({ filled, x: x - view.left, y: y - view.top }, view.width, view.height);
 }
 
 function median(values: number[]): number {
