@@ -129,7 +129,8 @@ function judge(fit: PathFit, fault: Fault | null, depth: boolean, weight: Float6
   const marks = 2 * used + field.replicates.freedom + PRIOR_FREEDOM;
   const odd = impossible(fit, weight, field);
   const plain = fit.path.size - (fit.path.shape ? 1 : 0) - (depth ? 2 : 0);
-  const price = PARAMETER_PRICE * plain + (fault ? priceOf(fault, fit) : 0) + (depth ? PRICE.depth : 0);
+  const price =
+    PARAMETER_PRICE * plain + (fault ? priceOf(fault, fit) : 0) + (depth ? PRICE.depth + (fault ? 10 : 0) : 0);
   return {
     fault,
     depth,

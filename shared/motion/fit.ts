@@ -153,7 +153,10 @@ function inOrder(path: Path, knots: Knots, theta: Float64Array): boolean {
     if (path.shape.name === 'power' && (value < 0.5 || value > 12)) return false;
     if (path.shape.name === 'apex' && Math.abs(value) > 0.42) return false;
     if (path.shape.name === 'ease' && Math.abs(value) > 1.2) return false;
-    if ((path.shape.name === 'hang' || path.shape.name === 'hang-up') && value < -2) return false;
+    if (path.shape.name === 'hang' || path.shape.name === 'hang-up') {
+      const span = path.shape.span;
+      if (value < 0 || value > 0.8 * (knots.t[span + 1]! - knots.t[span]!)) return false;
+    }
     if (path.shape.name.startsWith('even') && Math.abs(value) > 1.4) return false;
   }
   return true;

@@ -196,14 +196,21 @@ export function follow(
       let uy = ux;
       const g = span.kind === 'flight' ? theta[span.gravity]! : 0;
       const dy = knots.y[s + 1]! - y0;
+      let lengthX = length;
+      let lengthY = length;
       if (shape && shape.span === s) {
+        if (shape.name === 'hang' || shape.name === 'hang-up') {
+          lengthY = length - theta[path.shapeAt]!;
+          if (shape.name === 'hang') lengthX = lengthY;
+        }
         const across = Math.max(Math.abs(dx), 1e-3 * Math.abs(g) * length * length);
-        warpTime(shape, theta, path.shapeAt, ux, length, length / 2 - dy / (length * g), (g * length) / across, warped);
+        const apex = lengthY / 2 - dy / (lengthY * g);
+        warpTime(shape, theta, path.shapeAt, ux, lengthY, apex, (g * length) / across, warped);
         ux = warped[0]!;
         uy = warped[1]!;
       }
-      x = x0 + (dx * ux) / length;
-      y = y0 + (dy * uy) / length + 0.5 * g * uy * (uy - length);
+      x = x0 + (dx * ux) / lengthX;
+      y = y0 + (dy * uy) / lengthY + 0.5 * g * uy * (uy - lengthY);
     }
     if (depth >= 0) {
       const moving = t < moveFrom ? moveFrom : t > moveTo ? moveTo : t;

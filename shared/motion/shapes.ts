@@ -52,7 +52,7 @@ export const SHAPE_STARTS: Record<ShapeName, readonly { base: number; steps: num
 
 /**
  * Time within the true flight at which its x and its y stand at time `u` after take-off, into `out`.
- * `length` is the flight's duration, `apex` the time of its apex (frames after take-off, may lie outside) and `bend` its
+ * `length` is the flight's duration (without its hold at the top), `apex` the time of its apex (frames after take-off, may lie outside) and `bend` its
  * gravity over its speed across (1/frame).
  */
 export function warpTime(
@@ -86,15 +86,10 @@ export function warpTime(
       break;
     }
     case 'hang':
-    case 'hang-up': {
-      const side = u < apex ? -1 : 1;
-      const reach = reachOf(shape, side, length, apex);
-      const gone = Math.abs(u - apex) - value / 2;
-      const scale = reach / Math.max(0.25 * reach, reach - value / 2);
-      wy = gone > 0 ? apex + side * gone * scale : apex;
+    case 'hang-up':
+      wy = u < apex ? u : Math.max(apex, u - value);
       if (shape.name === 'hang') wx = wy;
       break;
-    }
     case 'even-steps': {
       const side = u < apex ? -1 : 1;
       const reach = reachOf(shape, side, length, apex);

@@ -8,7 +8,9 @@ interface Option {
   sketch: Sketch;
   fault: Fault | null;
   depth: boolean;
-  shape?: number;
+  shape?: number | undefined;
+  /** Whether drawings left out near the ends are taken back in: it is they that it explains. */
+  ends?: boolean;
 }
 
 /** A structure that explains the track at less cost: other ends, a contact more or fewer; null when there is none. */
@@ -22,18 +24,40 @@ export function restructure(account: Account, field: Field, full: Float64Array):
   let best: Account | null = null;
   let second: Account | null = null;
   for (const option of optionsFor(account, field)) {
-    const { fault } = option;
+    const { fault, ends } = option;
     if (fault && 'span' in fault && option.sketch.spans[fault.span]?.kind !== 'flight') continue;
     const start = pathOf(option.sketch, fault, option.depth, field, { shape: option.shape, depth });
-    const next = fitOnce(start, fault, option.depth, weight, field);
+    const next = fitOnce(start, fault, option.depth, ends ? weight : account.weight, field);
     if (next.cost < (best?.cost ?? Infinity)) {
       second = best;
       best = next;
     } else if (next.cost < (second?.cost ?? Infinity)) second = next;
   }
+  const rolled = rolls(account, field);
+  if (rolled && rolled.cost < (best?.cost ?? Infinity)) {
+    second = best;
+    best = rolled;
+  }
   const tries = [best, second].filter((one) => one !== null && one.cost < account.cost + 60) as Account[];
   const trimmed = tries.map((one) => trim(one, field)).sort((a, b) => a.cost - b.cost)[0];
   return trimmed && trimmed.cost < account.cost - 1e-6 ? trimmed : null;
+}
+
+/** The track with its first flight taken for a roll and a fall, flat or in depth, whichever costs less. */
+function rolls(account: Account, field: Field): Account | null {
+  const { path, theta, knots } = account.fit;
+  const sketch = rollFirst(sketchFrom(path, theta, knots), 0.4, field);
+  if (!sketch || !(misfits(account, field) || bendsFirst(account))) return null;
+  const [flat, deep] = [false, true].map((depth) => {
+    return trim(fitOnce(pathOf(sketch, null, depth, field), null, depth, account.weight, field), field);
+  });
+  return flat!.cost < deep!.cost ? flat! : deep!;
+}
+
+/** A shape fault on the first flight, whose start is not seen: a roll before a fall looks like one. */
+function bendsFirst(account: Account): boolean {
+  const { fault } = account;
+  return fault?.kind === 'shape' && fault.span === 0;
 }
 
 /** Drawings at either end whose place in the structure is tried anew. */
@@ -47,27 +71,21 @@ function optionsFor(account: Account, field: Field): Option[] {
   const { fault, depth } = account;
   const shape = path.shapeAt >= 0 ? theta[path.shapeAt]! : undefined;
   const options: Option[] = [];
-  const add = (next: Sketch | null, shift: (span: number) => number = (span) => span) => {
+  const add = (next: Sketch | null, shift: (span: number) => number = (span) => span, ends = false) => {
     if (!next) return;
     const moved = fault && 'span' in fault ? { ...fault, span: shift(fault.span) } : fault;
-    options.push({ sketch: next, fault: moved, depth, shape });
+    options.push({ sketch: next, fault: moved, depth, shape, ends });
   };
+  const same = (span: number) => span;
   const misfit = misfits(account, field);
   const { left } = account;
   const n = field.drawings.length;
   if (misfit || left.some((i) => i < OUTER)) {
-    for (const count of [1, 2, 3]) add(restFirst(sketch, count, field), (span) => span + 1);
+    for (const count of [1, 2, 3]) add(restFirst(sketch, count, field), (span) => span + 1, true);
   }
   if (misfit || left.some((i) => i >= n - OUTER)) {
-    for (const count of [1, 2, 3]) add(restLast(sketch, count, field));
-    for (const count of [2, 3, 4]) add(flightLast(sketch, count, field));
-  }
-  if (misfit && spans[0]!.kind === 'flight') {
-    for (const share of [0.15, 0.3, 0.45, 0.6, 0.75]) {
-      const rolled = rollFirst(sketch, share, field);
-      if (!rolled) continue;
-      options.push({ sketch: rolled, fault: null, depth: false }, { sketch: rolled, fault: null, depth: true });
-    }
+    for (const count of [1, 2, 3]) add(restLast(sketch, count, field), same, true);
+    for (const count of [2, 3, 4]) add(flightLast(sketch, count, field), same, true);
   }
   if (last > 0) {
     if (spans[0]!.kind === 'flight') add(recast(sketch, 0, 'rest', false));
@@ -110,7 +128,7 @@ export function misfits(account: Account, field: Field): boolean {
 /** Whether other structures are worth a try: misfit, or drawings left out near an end, where rest or a contact may explain them. */
 export function isDoubtful(account: Account, field: Field): boolean {
   const n = field.drawings.length;
-  return misfits(account, field) || account.left.some((i) => i < OUTER || i >= n - OUTER);
+  return misfits(account, field) || bendsFirst(account) || account.left.some((i) => i < OUTER || i >= n - OUTER);
 }
 
 /** A contact that kicks far less than a bounce between two flights of these lengths would. */

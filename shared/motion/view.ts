@@ -16,8 +16,10 @@ export interface FlightView {
   /** Whether its take-off and landing lie within the strip. */
   opens: boolean;
   closes: boolean;
-  /** Moment of the apex of the true flight, after `start`; may lie outside. */
+  /** Moment of the apex of the true flight, after `start` (with a hold at the top: its middle); may lie outside. */
   apex: number;
+  /** Frames that the flight is held at its top, 0 without a hang. */
+  held: number;
   gravity: number;
   judged: boolean;
 }
@@ -65,6 +67,9 @@ export function flightsOf(id: string, account: Account): FlightView[] {
     const end = knots.t[k + 1]!;
     const length = end - start;
     const gravity = theta[span.gravity]!;
+    const hangs = path.shape?.span === k && (path.shape.name === 'hang' || path.shape.name === 'hang-up');
+    const held = hangs ? theta[path.shapeAt]! : 0;
+    const moving = length - held;
     out.push({
       id: `${id}${out.length + 1}`,
       span: k,
@@ -74,7 +79,8 @@ export function flightsOf(id: string, account: Account): FlightView[] {
       length,
       opens: k > 0,
       closes: k < last,
-      apex: length / 2 - (knots.y[k + 1]! - knots.y[k]!) / (length * gravity),
+      apex: moving / 2 - (knots.y[k + 1]! - knots.y[k]!) / (moving * gravity) + held / 2,
+      held,
       gravity,
       judged: true,
     });
