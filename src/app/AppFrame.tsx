@@ -1,4 +1,4 @@
-import { useCallback } from 'react';
+import { useCallback, useEffect } from 'react';
 import { Outlet, ScrollRestoration, useParams } from 'react-router';
 import { useLiveProduction } from '../features/live/useLiveProduction.ts';
 import { Header } from './Header.tsx';
@@ -11,6 +11,8 @@ import { setSessionEnded } from './sessionEnded.ts';
 /** Around every page of a production: the header, the live line, the list of keys. */
 export function AppFrame() {
   const slug = useParams().slug!;
+  // Whoever comes in has passed the gate; an end before that belongs to someone who left.
+  useEffect(() => setSessionEnded(false), []);
   useLiveProduction(
     slug,
     useCallback(() => setSessionEnded(true), []),
@@ -29,7 +31,7 @@ export function AppFrame() {
         <Outlet key={slug} />
       </main>
       <LineNote />
-      <KeyList />
+      <KeyList slug={slug} />
       <SessionEndedDialog />
       <RouteAnnouncer />
       <ScrollRestoration getKey={(location) => location.pathname} />

@@ -1,8 +1,9 @@
-import { useId, useState } from 'react';
+import { useEffect, useId, useState } from 'react';
+import { useNavigate } from 'react-router';
 import { Dialog } from '../components/Dialog.tsx';
 import { type KeyBinding, useKeyGroups, useKeys, useKeysOn } from '../lib/keys.ts';
+import { paths } from '../lib/paths.ts';
 import { onOpenKeyList } from './openKeyList.ts';
-import { useEffect } from 'react';
 
 const NAMES: Record<string, string> = {
   ArrowLeft: '←',
@@ -19,12 +20,18 @@ const shownKey = (binding: KeyBinding) =>
   `${binding.shift ? 'Shift ' : ''}${binding.key.length === 1 ? binding.key.toUpperCase() : binding.key}`;
 
 /** The list of keys of the screen as it is now; `?` opens it from anywhere. */
-export function KeyList() {
+export function KeyList({ slug }: { slug: string }) {
   const [open, setOpen] = useState(false);
   const [on, setOn] = useKeysOn();
   const groups = useKeyGroups();
   const switchId = useId();
-  useKeys('Everywhere', [{ key: '?', says: 'Show this list', run: () => setOpen(true) }]);
+  const navigate = useNavigate();
+  useKeys('Everywhere', [
+    { key: '?', says: 'Show this list', run: () => setOpen(true) },
+    { key: 'f', says: 'Feed', run: () => void navigate(paths.feed(slug)) },
+    { key: 's', says: 'Shot sheet', run: () => void navigate(paths.sheet(slug)) },
+    { key: 'p', says: 'Post a strip', run: () => void navigate(paths.post(slug)) },
+  ]);
   useEffect(() => onOpenKeyList(() => setOpen(true)), []);
 
   return (

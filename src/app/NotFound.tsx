@@ -1,15 +1,14 @@
-import { Link, useParams } from 'react-router';
+import { Link } from 'react-router';
 import { buttonClass } from '../components/Button.tsx';
-import { paths } from '../lib/paths.ts';
 import { PlainPage } from './PlainPage.tsx';
 
-export function NotFound() {
-  const { slug } = useParams();
+/** @param home where there is something */
+export function NotFound({ home }: { home: string }) {
   return (
     <PlainPage
       title="Nothing at this address"
       action={
-        <Link to={slug ? paths.feed(slug) : '/'} className={buttonClass('primary')}>
+        <Link to={home} className={buttonClass('primary')}>
           Go to the feed
         </Link>
       }

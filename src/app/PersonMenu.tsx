@@ -27,7 +27,7 @@ export interface PersonMenuProps {
 /** The one who is signed in: theme, keys, signing out; on a phone also the way around. */
 export function PersonMenu({ person, places }: PersonMenuProps) {
   const navigate = useNavigate();
-  const signOut = useSignOut(() => void navigate(paths.signIn()));
+  const signOut = useSignOut(() => navigate(paths.signIn()));
   const { data: session } = useQuery(sessionOptions());
   const [theme, setTheme] = useState<ThemeChoice>(chosenTheme);
   const narrow = useMediaQuery('(max-width: 63.99rem)');

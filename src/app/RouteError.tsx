@@ -1,19 +1,36 @@
-import { useRevalidator, useRouteError } from 'react-router';
-import { Button } from '../components/Button.tsx';
+import { isRouteErrorResponse, Link, useParams, useRevalidator, useRouteError } from 'react-router';
+import { Button, buttonClass } from '../components/Button.tsx';
 import { ApiProblem, sentenceOf } from '../lib/ApiProblem.ts';
+import { paths } from '../lib/paths.ts';
 import { NotFound } from './NotFound.tsx';
 import { PlainPage } from './PlainPage.tsx';
 
+export interface RouteErrorProps {
+  /** Around a page of a production, or around everything. */
+  inside: 'production' | 'everything';
+}
+
 /** What a screen shows when it cannot be shown: what happened, that nothing was lost, what to do. */
-export function RouteError() {
+export function RouteError({ inside }: RouteErrorProps) {
+  const { slug } = useParams();
   const error = useRouteError();
   const revalidator = useRevalidator();
 
-  if (error instanceof ApiProblem && error.status === 404) return <NotFound />;
-  if (error instanceof ApiProblem && error.status === 403) {
+  const status = error instanceof ApiProblem ? error.status : isRouteErrorResponse(error) ? error.status : 500;
+  if (status === 404 && inside === 'production') return <NotFound home={paths.feed(slug!)} />;
+  if (status === 404 && !slug) return <NotFound home="/" />;
+  if (status === 404 || status === 403) {
     return (
-      <PlainPage title="This production is not open to you">
-        Only its own people see a production. If you should be one of them, ask its owner to add you.
+      <PlainPage
+        title="No such production for you"
+        action={
+          <Link to="/" className={buttonClass('primary')}>
+            Go to your own
+          </Link>
+        }
+      >
+        Either nothing has this name, or you are not one of its people: only they see a production. If you should be one
+        of them, ask its owner to add you.
       </PlainPage>
     );
   }

@@ -1,6 +1,7 @@
 import type { QueryClient } from '@tanstack/react-query';
 import type { ReactNode } from 'react';
-import { createBrowserRouter, RouterContextProvider } from 'react-router';
+import { createBrowserRouter, RouterContextProvider, useParams } from 'react-router';
+import { paths } from '../lib/paths.ts';
 import { queryClientContext } from '../lib/routerContext.ts';
 import { AppFrame } from './AppFrame.tsx';
 import { FirstLoad } from './FirstLoad.tsx';
@@ -18,12 +19,16 @@ declare module 'react-router' {
 /** Pages inside a production have their `main` from the frame around them; these stand alone. */
 const asMain = (page: ReactNode) => <main>{page}</main>;
 
+function NothingHere() {
+  return <NotFound home={paths.feed(useParams().slug!)} />;
+}
+
 /** Every address of the product. Pages load with their data, in parallel. */
 export function createRouter(queryClient: QueryClient) {
   return createBrowserRouter(
     [
       {
-        errorElement: asMain(<RouteError />),
+        errorElement: asMain(<RouteError inside="everything" />),
         HydrateFallback: FirstLoad,
         children: [
           { path: '/', middleware: [openFirstProduction], loader: () => null, element: asMain(<NoProduction />) },
@@ -39,7 +44,7 @@ export function createRouter(queryClient: QueryClient) {
             Component: AppFrame,
             children: [
               {
-                ErrorBoundary: RouteError,
+                errorElement: <RouteError inside="production" />,
                 children: [
                   {
                     index: true,
@@ -73,12 +78,12 @@ export function createRouter(queryClient: QueryClient) {
                       Component: async () => (await import('../pages/PostPage.tsx')).PostPage,
                     },
                   },
-                  { path: '*', Component: NotFound },
+                  { path: '*', Component: NothingHere },
                 ],
               },
             ],
           },
-          { path: '*', element: asMain(<NotFound />) },
+          { path: '*', element: asMain(<NotFound home="/" />) },
         ],
       },
     ],

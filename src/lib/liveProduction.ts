@@ -29,6 +29,11 @@ export function liveProduction(options: LiveProductionOptions): { leave: () => v
   const { slug, socket, onState } = options;
   const log = createEventLog({ seen: options.seen, fetchAfter: options.fetchAfter, apply: options.onEvent });
   let left = false;
+  // Once the session ended, a line that drops is no news.
+  let ended = false;
+  const lost = () => {
+    if (!ended) onState('reconnecting');
+  };
   let retry: ReturnType<typeof setTimeout> | undefined;
 
   const catchUp = (newest: number) => {
@@ -46,7 +51,8 @@ export function liveProduction(options: LiveProductionOptions): { leave: () => v
   const join = () => {
     socket.emit('production:join', { slug, protocol: PROTOCOL_VERSION }, (answer) => {
       if (left) return;
-      if (!answer.ok) return onState(answer.problem.code === 'conflict' ? 'outdated' : 'ended');
+      ended = !answer.ok && answer.problem.code !== 'conflict';
+      if (!answer.ok) return onState(ended ? 'ended' : 'outdated');
       options.onHere(answer.here);
       catchUp(answer.newest);
     });
@@ -58,8 +64,8 @@ export function liveProduction(options: LiveProductionOptions): { leave: () => v
     connect_error: () => void;
   } = {
     connect: join,
-    disconnect: () => onState('reconnecting'),
-    connect_error: () => onState('reconnecting'),
+    disconnect: lost,
+    connect_error: lost,
     'production:event': (event) => {
       if (event.slug !== slug) return;
       log.receive(event);
@@ -67,7 +73,10 @@ export function liveProduction(options: LiveProductionOptions): { leave: () => v
     },
     'take:progress': options.onProgress,
     'production:here': (here) => here.slug === slug && options.onHere(here.people),
-    'session:ended': () => onState('ended'),
+    'session:ended': () => {
+      ended = true;
+      onState('ended');
+    },
   };
   socket.on('connect', handlers.connect);
   socket.on('disconnect', handlers.disconnect);

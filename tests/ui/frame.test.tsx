@@ -183,7 +183,7 @@ test('? lists the keys of the screen, and closing it gives the focus back', asyn
   const { user } = show(
     <>
       <Screen />
-      <KeyList />
+      <KeyList slug={SLUG} />
     </>,
   );
   screen.getByRole('button', { name: 'stay' }).focus();

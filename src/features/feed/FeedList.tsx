@@ -4,6 +4,7 @@ import type { FeedCard, FeedFilter } from '../../../shared/api/feed.ts';
 import { Button } from '../../components/Button.tsx';
 import { ErrorNote } from '../../components/ErrorNote.tsx';
 import { sentenceOf } from '../../lib/ApiProblem.ts';
+import { useKeys } from '../../lib/keys.ts';
 import { feedOptions } from '../../lib/queries/feed.ts';
 import { FeedCardView } from './FeedCardView.tsx';
 import { FeedEmpty } from './FeedEmpty.tsx';
@@ -19,6 +20,11 @@ export interface FeedListProps {
 export function FeedList({ slug, filter, stampsOf }: FeedListProps) {
   const feed = useInfiniteQuery(feedOptions(slug, filter));
   const end = useRef<HTMLDivElement>(null);
+  const list = useRef<HTMLDivElement>(null);
+  useKeys('Feed', [
+    { key: 'ArrowRight', says: 'To the next take', run: () => focusCard(list.current, 1) },
+    { key: 'ArrowLeft', says: 'To the take before', run: () => focusCard(list.current, -1) },
+  ]);
   const { hasNextPage, isFetchingNextPage, isFetchNextPageError, fetchNextPage } = feed;
 
   useEffect(() => {
@@ -46,7 +52,7 @@ export function FeedList({ slug, filter, stampsOf }: FeedListProps) {
   if (cards.length === 0) return <FeedEmpty slug={slug} filter={filter} />;
 
   return (
-    <div className="space-y-4.5">
+    <div ref={list} className="space-y-4.5">
       {cards.map((card) => (
         <FeedCardView key={card.take.id} slug={slug} card={card} stamps={stampsOf(card)} />
       ))}
@@ -62,4 +68,13 @@ export function FeedList({ slug, filter, stampsOf }: FeedListProps) {
       </div>
     </div>
   );
+}
+
+/** Moves the focus to the title of the next card, or the one before; from outside the list to the first. */
+function focusCard(list: HTMLElement | null, step: 1 | -1): void {
+  const cards = [...(list?.querySelectorAll('article') ?? [])];
+  const at = cards.findIndex((card) => card.contains(document.activeElement));
+  const next = cards[at < 0 ? 0 : Math.min(cards.length - 1, Math.max(0, at + step))];
+  next?.querySelector<HTMLElement>('h2 a')?.focus();
+  next?.scrollIntoView({ block: 'nearest' });
 }

@@ -4,8 +4,11 @@ import { call } from '../../lib/call.ts';
 import { sessionOptions } from '../../lib/queries/session.ts';
 import { socket } from '../../lib/socket.ts';
 
-/** Ends the session and forgets everything that was cached for this person. */
-export function useSignOut(onSignedOut: () => void) {
+/**
+ * Ends the session and forgets everything that was cached for this person.
+ * @param leave goes to a page that needs no session; what is on screen now would ask for its data again
+ */
+export function useSignOut(leave: () => Promise<void> | void) {
   const client = useQueryClient();
   return useMutation({
     mutationFn: () => {
@@ -13,8 +16,8 @@ export function useSignOut(onSignedOut: () => void) {
       socket.disconnect();
       return call(sessionContracts.signOut, {});
     },
-    onSuccess: () => {
-      onSignedOut();
+    onSuccess: async () => {
+      await leave();
       client.clear();
       client.setQueryData(sessionOptions().queryKey, null);
     },
