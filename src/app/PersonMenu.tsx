@@ -10,7 +10,7 @@ import { sentenceOf } from '../lib/ApiProblem.ts';
 import { paths } from '../lib/paths.ts';
 import { sessionOptions } from '../lib/queries/session.ts';
 import { type ThemeChoice, chooseTheme, chosenTheme } from '../lib/theme.ts';
-import { useMediaQuery } from '../lib/useReducedMotion.ts';
+import { useMediaQuery } from '../lib/useMediaQuery.ts';
 import { openKeyList } from './openKeyList.ts';
 
 const THEMES: { choice: ThemeChoice; label: string }[] = [

@@ -11,7 +11,7 @@ import { feedOptions } from '../lib/queries/feed.ts';
 import { sheetOptions } from '../lib/queries/shots.ts';
 import { useActor } from '../lib/queries/useActor.ts';
 import { queryClientContext } from '../lib/routerContext.ts';
-import { useMediaQuery } from '../lib/useReducedMotion.ts';
+import { useMediaQuery } from '../lib/useMediaQuery.ts';
 import { warm } from '../lib/warm.ts';
 
 const TABS: { filter: FeedFilter; label: string }[] = [

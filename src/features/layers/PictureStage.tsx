@@ -4,7 +4,8 @@ import { drawingOn, drawingsOf } from '../../lib/drawings.ts';
 import { useKeys } from '../../lib/keys.ts';
 import type { NumberedFinding } from '../../lib/numberedFindings.ts';
 import type { Playhead } from '../../lib/playhead.ts';
-import { useMediaQuery } from '../../lib/useReducedMotion.ts';
+import { cameraAt, toPicture } from '../../lib/stage.ts';
+import { useMediaQuery } from '../../lib/useMediaQuery.ts';
 import { useSize } from '../../lib/useSize.ts';
 import { FramePicture } from './FramePicture.tsx';
 import type { Box } from './labels.ts';
@@ -20,7 +21,7 @@ export interface PictureStageProps {
   takeId: string;
   firstFrame: number;
   picture: { width: number; height: number };
-  /** Null while there is none: the bare picture is shown. */
+  /** With its points on the stage. Null while there is none: the bare picture is shown. */
   reading: Reading | null;
   findings: readonly NumberedFinding[];
   layers: ReadonlySet<Layer>;
@@ -67,8 +68,10 @@ export function PictureStage(props: PictureStageProps) {
     () => ({ left: view.x, top: view.y, width: room.width / view.scale, height: room.height / view.scale }),
     [view, room],
   );
-  const thing = (frame: number) =>
-    objects.map((object) => drawingOn(object.drawings, frame)).find((drawing) => drawing !== undefined);
+  const thing = (frame: number) => {
+    const drawing = objects.map((object) => drawingOn(object.drawings, frame)).find((one) => one !== undefined);
+    return drawing && reading ? toPicture(drawing, cameraAt(reading.camera, frame)) : undefined;
+  };
   const zoom = (factor: number) => {
     const at = thing(playhead.frame());
     control.zoom(factor, at && { x: (at.x - view.x) * view.scale, y: (at.y - view.y) * view.scale });

@@ -5,7 +5,7 @@ import { type Actor, can } from '../../../shared/policy/can.ts';
 import { buttonClass } from '../../components/Button.tsx';
 import { Menu, type MenuItem } from '../../components/Menu.tsx';
 import { sheetOptions } from '../../lib/queries/shots.ts';
-import { useMediaQuery } from '../../lib/useReducedMotion.ts';
+import { useMediaQuery } from '../../lib/useMediaQuery.ts';
 import { DecisionDialog } from './DecisionDialog.tsx';
 import { MoveDialog } from './MoveDialog.tsx';
 import { useDecide, useMove } from './useReview.ts';

@@ -11,7 +11,8 @@ import {
 import type { Reading } from '../../../shared/reading/document.ts';
 import type { NumberedFinding } from '../../lib/numberedFindings.ts';
 import type { Playhead } from '../../lib/playhead.ts';
-import { useMediaQuery } from '../../lib/useReducedMotion.ts';
+import { cameraAt, toPicture } from '../../lib/stage.ts';
+import { useMediaQuery } from '../../lib/useMediaQuery.ts';
 import { useSize } from '../../lib/useSize.ts';
 import { columnMiddle, frameAt, layColumns, MIN_COLUMN, scrollToSee, THUMB_COLUMN } from './columns.ts';
 import { FindingsLane } from './FindingsLane.tsx';
@@ -30,7 +31,7 @@ export interface ScoreProps {
   missing: readonly number[];
   playhead: Playhead;
   picture: { width: number; height: number };
-  /** Null while there is none: the strip and the notes are shown alone. */
+  /** With its points on the stage. Null while there is none: the strip and the notes are shown alone. */
   reading: Reading | null;
   /** The thing whose spacing the lanes show. */
   objectId: string | null;
@@ -47,6 +48,7 @@ export interface ScoreProps {
 
 const ACROSS = 54;
 const UP = 86;
+const STILL = { moved: false, offsets: [] };
 const NOTHING = { exposure: [], frames: 0 };
 
 /** The score: the lanes under the picture, one column a frame, on one axis. */
@@ -67,12 +69,13 @@ export function Score(props: ScoreProps) {
   const up = useMemo(() => (object ? spacingOf(object, source, own, 'up') : []), [object, source, own]);
 
   const { width } = props.picture;
+  const camera = reading?.camera ?? STILL;
   const thingAt = useCallback(
     (frame: number) => {
       const mark = object?.marks.find((one) => one.frame === frame);
-      return mark ? mark.x / width : null;
+      return mark ? toPicture(mark, cameraAt(camera, frame)).x / width : null;
     },
-    [object, width],
+    [object, width, camera],
   );
 
   const frameUnder = (event: PointerEvent) => {

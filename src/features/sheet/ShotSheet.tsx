@@ -9,7 +9,7 @@ import { sentenceOf } from '../../lib/ApiProblem.ts';
 import { paths } from '../../lib/paths.ts';
 import { sheetOptions } from '../../lib/queries/shots.ts';
 import { bySequence } from '../../lib/sheetSummary.ts';
-import { useMediaQuery } from '../../lib/useReducedMotion.ts';
+import { useMediaQuery } from '../../lib/useMediaQuery.ts';
 import { SheetList } from './SheetList.tsx';
 import { SheetSentence } from './SheetSentence.tsx';
 import { SheetTable } from './SheetTable.tsx';

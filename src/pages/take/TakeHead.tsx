@@ -5,7 +5,7 @@ import { StateChip } from '../../components/StateChip.tsx';
 import { TimeAgo } from '../../components/TimeAgo.tsx';
 import { fpsWords, holdWords } from '../../lib/fpsWords.ts';
 import { paths } from '../../lib/paths.ts';
-import { useMediaQuery } from '../../lib/useReducedMotion.ts';
+import { useMediaQuery } from '../../lib/useMediaQuery.ts';
 
 interface TakeHeadProps {
   slug: string;

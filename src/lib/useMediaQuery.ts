@@ -1,13 +1,6 @@
 import { useSyncExternalStore } from 'react';
 
-const QUERY = '(prefers-reduced-motion: reduce)';
-
-/** Whether the person at the screen asked for no movement. Follows the setting while the page is open. */
-export function useReducedMotion(): boolean {
-  return useMediaQuery(QUERY);
-}
-
-/** Whether a media query holds now. */
+/** Whether a media query holds now; follows the window while the page is open. */
 export function useMediaQuery(query: string): boolean {
   return useSyncExternalStore(
     (listener) => {
