@@ -58,6 +58,15 @@ describe('npm start', { timeout: 120_000 }, () => {
     expect((await readdir(dataDir)).filter((entry) => entry.startsWith('db.making') || entry === 'in-use')).toEqual([]);
   });
 
+  it('does not wait for the demo when Ctrl-C comes while it is being filled', async () => {
+    const starting = start({ DEMO: 'on' });
+    await starting.says('Filling the empty database');
+    starting.signal('SIGINT');
+    expect(await starting.exited).toMatchObject({ code: 130, stderr: '' });
+    expect(await leftRunning(dataDir)).toEqual([]);
+    expect(await logOf(dataDir)).toMatch(/Shutdown complete\s*$/);
+  });
+
   it('refuses a port in use, before it has made anything', async () => {
     const other = createServer().listen(0, '127.0.0.1');
     await once(other, 'listening');

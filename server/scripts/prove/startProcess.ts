@@ -12,6 +12,8 @@ interface Ending {
 export interface StartProcess {
   /** Resolves with the address it prints; rejects with what it said when it ends before that. */
   readonly ready: Promise<string>;
+  /** Resolves when these words have appeared on standard output. */
+  says(words: string): Promise<void>;
   /** Resolves when it is gone. */
   readonly exited: Promise<Ending>;
   signal(signal: NodeJS.Signals): void;
@@ -63,7 +65,16 @@ export function startSpandrel({ root, settings, asInTerminal = false }: StartOpt
     if (asInTerminal && child.pid !== undefined) process.kill(-child.pid, name);
     else child.kill(name);
   };
-  return { ready, exited, signal };
+  const says = (words: string) =>
+    new Promise<void>((resolve, reject) => {
+      const look = () => {
+        if (output.stdout.includes(words)) resolve();
+      };
+      look();
+      child.stdout.on('data', look);
+      exited.then(() => reject(new Error(`It never said "${words}": ${output.stdout}${output.stderr}`)), reject);
+    });
+  return { ready, says, exited, signal };
 }
 
 /** Ends whatever is still running, and waits for it. */

@@ -25,6 +25,8 @@ export async function main({ root, stop }: Run): Promise<number> {
   // Whatever goes wrong unseen, the database is closed in order before this process ends.
   for (const event of ['uncaughtException', 'unhandledRejection'] as const) {
     process.on(event, (error) => {
+      // What was under way when it was told to stop fails for want of its database, and says nothing new.
+      if (stop.signal.aborted) return;
       report(error);
       stop.abort();
     });
@@ -53,15 +55,13 @@ async function serve(root: string, stop: AbortController, cleanup: Cleanup, repo
     ensureClientBuilt(root, signal),
   ]);
   signal.throwIfAborted();
-  const server = await startServer({ env, database }).catch((error) => {
+  const server = await unlessStopped(startServer({ env, database }), signal).catch((error) => {
     // Another program may have taken the port since it was checked.
     throw listenFault(error, env.HOST, env.PORT);
   });
   cleanup.add(() => closeWithin(server.close(), 10_000));
-  if (!signal.aborted) {
-    greet(server);
-    await new Promise((resolve) => signal.addEventListener('abort', resolve, { once: true }));
-  }
+  greet(server);
+  await new Promise((resolve) => signal.addEventListener('abort', resolve, { once: true }));
   console.log('Stopping.');
 }
 
@@ -86,6 +86,14 @@ async function openDatabase(
     stop.abort();
   });
   return running.connection;
+}
+
+/** Filling the demo takes a while; a Ctrl-C does not wait for it. The next start clears away what was broken off. */
+function unlessStopped<T>(work: Promise<T>, signal: AbortSignal): Promise<T> {
+  const stopped = new Promise<never>((_, reject) =>
+    signal.addEventListener('abort', () => reject(signal.reason), { once: true }),
+  );
+  return Promise.race([work, stopped]);
 }
 
 /** Like Promise.all, but lets every part come to its end, so that none starts something after the others gave up. */
