@@ -3,13 +3,14 @@ import type { NumberedFinding } from '../../lib/numberedFindings.ts';
 import { type Badge, placeBadges } from './badges.ts';
 import { FindingsLayer } from './FindingsLayer.tsx';
 import type { Box } from './labels.ts';
-import { LaddersLayer, LitTicks } from './LaddersLayer.tsx';
+import { LadderLayer, LitTick } from './LadderLayer.tsx';
 import type { DrawnObject } from './layerProps.ts';
 import { LitMark, MarksLayer } from './MarksLayer.tsx';
 import { MendLayer } from './MendLayer.tsx';
 import { LitNumber, NumbersLayer, placeNumbers } from './NumbersLayer.tsx';
 import type { PictureStageProps } from './PictureStage.tsx';
 import { QuarterDropLayer } from './QuarterDropLayer.tsx';
+import { StageGroup } from './StageGroup.tsx';
 import { TrueArcLayer } from './TrueArcLayer.tsx';
 import type { Size, View } from './view.ts';
 import { WashLayer } from './WashLayer.tsx';
@@ -25,9 +26,19 @@ interface OverlayProps extends PictureStageProps {
 
 const NO_BADGES: Badge[] = [];
 const NO_MEND: NumberedFinding['mend'] = [];
+const STILL = { moved: false, offsets: [] };
+const LADDERS = ['across', 'up'] as const;
 const RAIL_INSET = 10;
 const RAIL_AWAY = 20;
 const TICK_ROOM = 14;
+
+function stageBounds(objects: readonly DrawnObject[], room: number): Box {
+  const xs = objects.flatMap((object) => object.drawings.map((drawing) => drawing.x));
+  const ys = objects.flatMap((object) => object.drawings.map((drawing) => drawing.y));
+  const left = Math.min(...xs) - 2 * room;
+  const top = Math.min(...ys) - room;
+  return { left, top, width: Math.max(...xs) + 2 * room - left, height: Math.max(...ys) + room - top };
+}
 
 /** All layers in SVG and picture px: whatever the zoom, lines and words keep their size on the screen and stay sharp. */
 export function Overlay(props: OverlayProps) {
@@ -42,13 +53,16 @@ export function Overlay(props: OverlayProps) {
   }, [picture, seen, unit, beside]);
   // Words stay on the picture or, zoomed in, on what is seen of it, and clear of a ladder that lies on it.
   const ladderOnPicture = layers.has('ladders') && !rails.clear;
+  const moved = props.reading?.camera.moved ?? false;
   const bounds = useMemo(() => {
+    // Under a camera that moves the stage is larger than any one picture.
+    if (moved) return stageBounds(objects, 40 * unit);
     const left = Math.max(0, seen.left);
     const top = Math.max(0, seen.top);
     const right = Math.min(picture.width, seen.left + seen.width, ladderOnPicture ? rails.x - 12 * unit : Infinity);
     const bottom = Math.min(picture.height, seen.top + seen.height, ladderOnPicture ? rails.y - 8 * unit : Infinity);
     return { left, top, width: right - left, height: bottom - top };
-  }, [picture, seen, ladderOnPicture, rails, unit]);
+  }, [picture, seen, ladderOnPicture, rails, unit, moved, objects]);
   const badges = useMemo(() => placeBadges(objects, findings, unit, bounds), [objects, findings, unit, bounds]);
   const hasFindings = layers.has('findings');
   const numbers = useMemo(
@@ -63,25 +77,43 @@ export function Overlay(props: OverlayProps) {
     viewBox: `${seen.left} ${seen.top} ${seen.width} ${seen.height}`,
     'aria-hidden': true,
   };
+  const camera = props.reading?.camera ?? STILL;
+  const stage = { camera, playhead };
   // What is lit lies on a sheet of its own, so that a step does not paint the rest again.
   return (
     <>
       <svg {...sheet} className="absolute inset-0 will-change-transform">
-        {hasFindings && <WashLayer {...shared} chosen={chosenFinding} />}
-        {layers.has('quarter') && <QuarterDropLayer {...shared} />}
-        {layers.has('arc') && <TrueArcLayer {...shared} />}
-        {layers.has('ladders') && <LaddersLayer {...shared} rails={rails} withTrue={layers.has('arc')} />}
-        {layers.has('marks') && <MarksLayer {...shared} />}
-        {hasFindings && (
-          <FindingsLayer {...shared} badges={badges} chosen={chosenFinding} onChoose={props.onChooseFinding} />
-        )}
-        {layers.has('numbers') && <NumbersLayer {...shared} numbers={numbers} />}
+        <StageGroup {...stage}>
+          {hasFindings && <WashLayer {...shared} chosen={chosenFinding} />}
+          {layers.has('quarter') && <QuarterDropLayer {...shared} />}
+          {layers.has('arc') && <TrueArcLayer {...shared} />}
+        </StageGroup>
+        {layers.has('ladders') &&
+          LADDERS.map((along) => (
+            <StageGroup key={along} {...stage} along={along}>
+              <LadderLayer {...shared} along={along} rails={rails} withTrue={layers.has('arc')} />
+            </StageGroup>
+          ))}
+        <StageGroup {...stage}>
+          {layers.has('marks') && <MarksLayer {...shared} />}
+          {hasFindings && (
+            <FindingsLayer {...shared} badges={badges} chosen={chosenFinding} onChoose={props.onChooseFinding} />
+          )}
+          {layers.has('numbers') && <NumbersLayer {...shared} numbers={numbers} />}
+        </StageGroup>
       </svg>
       <svg {...sheet} className="pointer-events-none absolute inset-0 will-change-transform">
-        {layers.has('ladders') && <LitTicks {...shared} rails={rails} />}
-        {mend && <MendLayer {...shared} finding={mend} />}
-        {layers.has('marks') && <LitMark {...shared} />}
-        {layers.has('numbers') && <LitNumber {...shared} numbers={numbers} mend={mended?.mend ?? NO_MEND} />}
+        {layers.has('ladders') &&
+          LADDERS.map((along) => (
+            <StageGroup key={along} {...stage} along={along}>
+              <LitTick {...shared} along={along} rails={rails} />
+            </StageGroup>
+          ))}
+        <StageGroup {...stage}>
+          {mend && <MendLayer {...shared} finding={mend} />}
+          {layers.has('marks') && <LitMark {...shared} />}
+          {layers.has('numbers') && <LitNumber {...shared} numbers={numbers} mend={mended?.mend ?? NO_MEND} />}
+        </StageGroup>
       </svg>
     </>
   );

@@ -27,15 +27,13 @@ export function StampRow({ slug, takeId, noteId, board, me, what, className }: S
         {kindsInOrder(shown).map((kind) => {
           const people = shown.stamps.find((stamp) => stamp.kind === kind)?.people ?? [];
           const mine = hasStamped(shown, kind, me.id);
-          const names = people.map((person) => person.name.split(' ')[0]).join(', ');
-          const inFull = people.map((person) => person.name).join(', ');
+          const names = people.map((person) => person.name).join(', ');
           return (
             <button
               key={kind}
               type="button"
               aria-pressed={mine}
-              aria-label={`${STAMP_WORDS[kind]}${names ? `: ${names}` : ''}`}
-              title={[STAMP_WORDS[kind], inFull, mine ? 'click to take yours off' : ''].filter(Boolean).join(' · ')}
+              title={[STAMP_WORDS[kind], names, mine ? 'click to take yours off' : ''].filter(Boolean).join(' · ')}
               onClick={() => set(kind, !mine)}
               className={clsx(
                 'inline-flex min-h-7 items-center gap-1 rounded-control px-1.5 text-xs hover:bg-well hover:text-ink touch:min-h-11 touch:min-w-11 touch:justify-center',
@@ -44,7 +42,10 @@ export function StampRow({ slug, takeId, noteId, board, me, what, className }: S
               )}
             >
               <StampGlyph kind={kind} className={people.length > 0 ? 'size-4.5' : 'size-4 [stroke-width:1.4]'} />
-              {names && <span>{names}</span>}
+              <span className="sr-only">{[STAMP_WORDS[kind], names].filter(Boolean).join(': ')}</span>
+              {people.length > 0 && (
+                <span aria-hidden="true">{people.map((person) => person.name.split(' ')[0]).join(', ')}</span>
+              )}
             </button>
           );
         })}

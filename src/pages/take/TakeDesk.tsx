@@ -19,6 +19,7 @@ import { paths } from '../../lib/paths.ts';
 import { createPlayhead } from '../../lib/playhead.ts';
 import { applyTake, readingOptions } from '../../lib/queries/take.ts';
 import { useActor } from '../../lib/queries/useActor.ts';
+import { stagedReading } from '../../lib/stage.ts';
 import { HangingNotes } from './HangingNotes.tsx';
 import { DESK, GRID, STAGE } from './layout.ts';
 import { ObjectSwitch } from './ObjectSwitch.tsx';
@@ -47,6 +48,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
   const { layers, onSwitch } = useTakeAddress(playhead, firstFrame);
   const readingQuery = useQuery({ ...readingOptions(take.id), enabled: take.reading.status === 'read' });
   const reading = (take.reading.status === 'read' && readingQuery.data) || null;
+  const staged = useMemo(() => reading && stagedReading(reading), [reading]);
   const desk = useRef<HTMLDivElement>(null);
   // Where the margin lies below the picture, what it points at would be out of sight.
   const showPicture = () => {
@@ -131,7 +133,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
               takeId={take.id}
               firstFrame={firstFrame}
               picture={picture}
-              reading={reading}
+              reading={staged}
               findings={findings.findings}
               layers={layers}
               playhead={playhead}
@@ -147,7 +149,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
             picture={picture}
             missing={take.missingFrames}
             playhead={playhead}
-            reading={reading}
+            reading={staged}
             objectId={objectId}
             findings={findings.findings}
             chosenFinding={findings.chosen}

@@ -14,10 +14,10 @@ export interface Rails {
   clear: boolean;
 }
 
-interface LaddersProps extends LayerProps {
+interface LadderProps extends LayerProps {
   rails: Rails;
-  /** Blue ticks where the true arc puts each drawing. */
-  withTrue: boolean;
+  /** Which ladder: the one under the picture, or the one beside it. */
+  along: 'across' | 'up';
 }
 
 /** Lengths of the ticks, px of the screen. On the picture they are short: they lie over the drawing. */
@@ -66,29 +66,31 @@ function Ticks({ d, width, clear, blue = false }: { d: string; width: number; cl
 }
 
 /**
- * Tick marks under and beside the picture that show spacing: ink for what was drawn, blue for where it should be. Beside
- * it the rise stands left of the rail and the fall right.
+ * A ladder: tick marks under or beside the picture that show spacing, ink for what was drawn, blue for where it should be.
+ * Beside the picture the rise stands left of the rail and the fall right.
  */
-export const LaddersLayer = memo(function LaddersLayer({ rails, withTrue, unit, objects }: LaddersProps) {
+export const LadderLayer = memo(function LadderLayer(props: LadderProps & { withTrue: boolean }) {
+  const { rails, along, withTrue, unit, objects } = props;
   const ticks = ticksOf(objects);
   if (ticks.length === 0) return null;
-  const xs = ticks.map(({ drawing }) => drawing.x);
-  const ys = ticks.map(({ drawing }) => drawing.y);
   const size = rails.clear ? ON_SURROUND : ON_PICTURE;
+  const places = ticks.map(({ drawing }) => (along === 'across' ? drawing.x : drawing.y));
   const side = (tick: Tick) => (tick.falls ? unit : -unit);
-  const drawn = ticks.map(
-    (tick) =>
-      `M${tick.drawing.x} ${rails.y}v${-size.tick * unit}M${rails.x} ${tick.drawing.y}h${size.tick * side(tick)}`,
+  const rail =
+    along === 'across'
+      ? `M${Math.min(...places)} ${rails.y}H${Math.max(...places)}`
+      : `M${rails.x} ${Math.min(...places)}V${Math.max(...places)}`;
+  const drawn = ticks.map((tick) =>
+    along === 'across'
+      ? `M${tick.drawing.x} ${rails.y}v${-size.tick * unit}`
+      : `M${rails.x} ${tick.drawing.y}h${size.tick * side(tick)}`,
   );
   const should = ticks.flatMap((tick) => {
-    const point = tick.should;
-    if (!point) return [];
-    return [
-      `M${point.x} ${rails.y + size.gap * unit}v${size.should * unit}`,
-      `M${rails.x + (size.tick + size.gap) * side(tick)} ${point.y}h${size.should * side(tick)}`,
-    ];
+    if (!tick.should) return [];
+    return along === 'across'
+      ? `M${tick.should.x} ${rails.y + size.gap * unit}v${size.should * unit}`
+      : `M${rails.x + (size.tick + size.gap) * side(tick)} ${tick.should.y}h${size.should * side(tick)}`;
   });
-  const rail = `M${Math.min(...xs)} ${rails.y}H${Math.max(...xs)}M${rails.x} ${Math.min(...ys)}V${Math.max(...ys)}`;
   return (
     <g data-layer="ladders" pointerEvents="none">
       <Ticks d={rail + drawn.join('')} width={1.2} clear={rails.clear} />
@@ -97,8 +99,8 @@ export const LaddersLayer = memo(function LaddersLayer({ rails, withTrue, unit, 
   );
 });
 
-/** The ticks of the lit drawing, stronger than the rest. */
-export function LitTicks({ objects, rails, unit, playhead }: LayerProps & { rails: Rails }) {
+/** The tick of the lit drawing, stronger than the rest. */
+export function LitTick({ objects, rails, along, unit, playhead }: LadderProps) {
   const frame = useLitFrame(playhead);
   const object = objects.find((one) => drawingOn(one.drawings, frame));
   const drawing = object && drawingOn(object.drawings, frame);
@@ -106,7 +108,8 @@ export function LitTicks({ objects, rails, unit, playhead }: LayerProps & { rail
   const flight = object.flights.find((one) => isIn(one, drawing.frame));
   const falls = flight !== undefined && drawing.frame > (flight.apex?.frame ?? 0);
   const reach = (rails.clear ? ON_SURROUND : ON_PICTURE).lit * unit;
-  const d = `M${drawing.x} ${rails.y}v${-reach}M${rails.x} ${drawing.y}h${falls ? reach : -reach}`;
+  const d =
+    along === 'across' ? `M${drawing.x} ${rails.y}v${-reach}` : `M${rails.x} ${drawing.y}h${falls ? reach : -reach}`;
   return (
     <g pointerEvents="none">
       <Ticks d={d} width={3} clear={rails.clear} />
