@@ -14,20 +14,20 @@ export function kneadingTable(): string {
   return [
     wash('wall', 0, 540, ['#d9b684', '#caa06c', '#b98a5a']),
     flecks(11, 260, '#fff3d8', 0.22),
-    // The window with the first light in it, below the way the dough goes.
-    rect(392, 176, 196, 150, '#7d5a3a', 'rx="6"'),
+    // The window with the first light in it, beside the way the dough goes.
+    rect(722, 40, 176, 116, '#7d5a3a', 'rx="6"'),
     gradient('dawn', ['#c9cfb4', '#f1ddb0', '#f6cf98']),
-    rect(402, 186, 176, 130, 'url(#dawn)'),
-    cloud(470, 226, 38, '#fbeed2', 0.9),
-    shape('M402 290 Q450 270 500 286 T578 280 V316 H402 Z', '#93a07c'),
-    rect(486, 186, 8, 130, '#7d5a3a'),
-    rect(402, 248, 176, 7, '#7d5a3a'),
-    rect(382, 322, 216, 12, '#6d4a2e', 'rx="3"'),
-    // The oven.
-    shape('M668 430 V268 Q668 160 780 160 Q892 160 892 268 V430 Z', '#8b6a4d'),
-    shape('M712 430 V290 Q712 218 780 218 Q848 218 848 290 V430 Z', '#4f3524'),
-    shape('M716 430 V404 Q726 372 740 398 Q752 366 764 402 V430 Z', '#e79a3a'),
-    shape('M722 430 V412 Q730 394 738 410 Q748 392 756 414 V430 Z', '#f8d27a'),
+    rect(731, 49, 158, 98, 'url(#dawn)'),
+    cloud(790, 78, 32, '#fbeed2', 0.9),
+    shape('M731 126 Q772 108 812 122 T889 116 V147 H731 Z', '#93a07c'),
+    rect(806, 49, 8, 98, '#7d5a3a'),
+    rect(731, 94, 158, 7, '#7d5a3a'),
+    rect(712, 152, 196, 11, '#6d4a2e', 'rx="3"'),
+    // The oven under it.
+    shape('M376 430 V292 Q376 186 486 186 Q596 186 596 292 V430 Z', '#8b6a4d'),
+    shape('M420 430 V306 Q420 238 486 238 Q552 238 552 306 V430 Z', '#4f3524'),
+    shape('M430 430 V350 Q446 312 466 348 Q482 294 504 346 Q524 316 542 354 V430 Z', '#e79a3a'),
+    shape('M448 430 V384 Q466 352 482 380 Q500 350 522 388 V430 Z', '#f8d27a'),
     // Shelf, table, floor.
     rect(40, 128, 262, 11, '#6d4a2e'),
     loafRow(52, 128, 6),
