@@ -1,6 +1,6 @@
 import clsx from 'clsx';
 import type { Sketch } from '../../shared/api/takes.ts';
-import { laneOf, sketchSteps } from '../lib/sketchSpacing.ts';
+import { laneOf, type SketchStep, sketchSteps } from '../lib/sketchSpacing.ts';
 
 const WIDTH = 234;
 const HEIGHT = 84;
@@ -19,9 +19,10 @@ export function SketchLane({ sketch, className }: { sketch: Sketch; className?: 
   const bottom = Math.min(0, ...values);
   const scale = (HEIGHT - 2 * PAD) / Math.max(1e-6, top - bottom);
   const zero = PAD + top * scale;
-  const column = WIDTH / (last.frame - first.frame + 1);
-  const middle = (frame: number) => (frame - first.frame + 0.5) * column;
-  const barWidth = Math.max(1, column * 0.7);
+  const column = WIDTH / (last.frame - first.frame + last.shownFor);
+  // A bar stands over the frames its drawing is shown on.
+  const middle = (step: SketchStep) => (step.frame - first.frame + step.shownFor / 2) * column;
+  const barWidth = (step: SketchStep) => Math.max(1, step.shownFor * column * 0.7);
   const words = lane === 'up' ? 'up and down, px a frame' : 'across, px a frame';
 
   return (
@@ -31,18 +32,18 @@ export function SketchLane({ sketch, className }: { sketch: Sketch; className?: 
         {steps.map((step) => (
           <rect
             key={step.frame}
-            x={middle(step.frame) - barWidth / 2}
+            x={middle(step) - barWidth(step) / 2}
             y={step.drawn > 0 ? zero - step.drawn * scale : zero}
-            width={barWidth}
+            width={barWidth(step)}
             height={Math.max(0.6, Math.abs(step.drawn) * scale)}
-            rx={Math.min(1.5, barWidth / 4)}
+            rx={Math.min(1.5, barWidth(step) / 4)}
             className={step.off ? 'fill-redline' : 'fill-bar'}
           />
         ))}
         {runs(steps).map((run) => (
           <path
             key={run[0]?.frame}
-            d={`M${run.map((step) => `${middle(step.frame)} ${zero - (step.true ?? 0) * scale}`).join('L')}`}
+            d={`M${run.map((step) => `${middle(step)} ${zero - (step.true ?? 0) * scale}`).join('L')}`}
             fill="none"
             className="stroke-blueline"
             strokeWidth="1.8"

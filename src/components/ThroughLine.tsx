@@ -29,11 +29,11 @@ export function ThroughLine({ steps, total, className }: ThroughLineProps) {
       <path d={`M0 ${y(total)}H${WIDTH}`} className="stroke-graphite" strokeDasharray="2 4" />
       <path d={`M0 ${HEIGHT - PAD}H${WIDTH}`} className="stroke-rule" />
       <path d={`M${PAD} ${y(0)}${path}`} className="pencil text-ink" strokeWidth="2" />
-      <text x={WIDTH} y={y(total) + 11} textAnchor="end" className="fill-graphite font-mono text-[9px]">
+      <text x={WIDTH} y={y(total) + 12} textAnchor="end" className="fill-graphite font-mono text-[11px]">
         {total}
       </text>
       {last.through < total && (
-        <text x={x(last.at) + 8} y={y(last.through) + 3} className="fill-ink font-mono text-[9px] font-semibold">
+        <text x={x(last.at) + 8} y={y(last.through) + 4} className="fill-ink font-mono text-[11px] font-semibold">
           {last.through}
         </text>
       )}

@@ -7,6 +7,8 @@ export type SketchLane = 'up' | 'across';
 /** The step that leads to one drawing, px a frame; up is positive when the thing rises. */
 export interface SketchStep {
   frame: number;
+  /** How many frames the drawing it leads to is shown for: 1 on ones, 2 on twos. */
+  shownFor: number;
   drawn: number;
   /** Where the true arc puts it; null outside a flight. */
   true: number | null;
@@ -59,6 +61,7 @@ export function sketchSteps(sketch: Sketch, lane: SketchLane): SketchStep[] {
     const to = arc && arcAt(arc.points, drawing.frame);
     return {
       frame: drawing.frame,
+      shownFor: Math.min(usual, (drawings[index + 2]?.frame ?? Number.POSITIVE_INFINITY) - drawing.frame),
       drawn: along(before, drawing),
       true: from && to ? along(from, to) : null,
       off: sketch.findings.some(

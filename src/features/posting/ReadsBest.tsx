@@ -1,5 +1,5 @@
 const ADVICE = [
-  'One thing in the air. Two are read one by one, the busier first.',
+  'One thing in the air. Where two fly, each is read by itself.',
   'Frames of one size, in the order of their numbers.',
   'A few frames before the take-off and after the landing, so that both contacts are found.',
   'The flight whole: what leaves the picture is read as far as it is seen.',

@@ -29,6 +29,7 @@ describe('the small lane of a card', () => {
     const steps = sketchSteps(buildSketch({ marks: onTwos, arcs: [] }), 'up');
     expect(steps.map((step) => step.drawn)).toEqual([56, 40, 24, 8, -8, -24, -40, -56]);
     expect(steps.every((step) => step.true === null)).toBe(true);
+    expect(steps.map((step) => step.shownFor)).toEqual(Array(8).fill(2));
   });
 
   test('does not spread the first step over the rest before it, nor a step over frames it was not seen on', () => {
