@@ -86,6 +86,9 @@ export class Finder {
     return looseDifference(coarse, ground, ground.known, this.#differences);
   }
 
+  debugFrames() {
+    return this.#frames;
+  }
   /** Links what stood out to tracks and names the things A, B and C. Frames of the marks count from 1. */
   finish(): Found {
     let rest = this.#frames;

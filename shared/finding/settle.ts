@@ -15,6 +15,7 @@ export interface Placed {
 
 /** Spread of the usual size beyond which a frame's shape is not the thing alone, log of the area. */
 const LEAST_ODDITY = 0.06;
+const LEAST_ODDITY_TURNING = 0.14;
 /** A shape of the usual size keeps its centroid unless its outline fits clearly better elsewhere. */
 const BETTER = 0.94;
 
@@ -24,11 +25,15 @@ const BETTER = 0.94;
  * show less than half of it get no place.
  */
 export function settle(track: FoundTrack): Placed[] {
-  const usual = usualSizes(track);
-  const offs = track.shapes.map((shape, k) => Math.log(shape.area / usual[k].area));
-  const spread = 1.5 * median(offs.map(Math.abs));
-  const odd = offs.map((off) => Math.abs(off) > Math.max(LEAST_ODDITY, 3 * spread));
-  const round = isRound(track, odd);
+  let usual = usualSizes(track);
+  let offs = offsOf(track, usual);
+  const round = isRound(track, oddOnes(offs));
+  if (!round) {
+    // What turns in space changes its size by itself, but not from one frame to the next.
+    usual = track.local.map((area) => ({ area, smear: { x: 0, y: 0 } }));
+    offs = offsOf(track, usual);
+  }
+  const odd = oddOnes(offs);
   const rim = round ? rimShare(track, odd, usual) : 1;
   return track.path.flatMap((candidate, k) => {
     const shape = track.shapes[k];
@@ -37,7 +42,7 @@ export function settle(track: FoundTrack): Placed[] {
     const cutOff = candidate.onEdge > 0.3 * radius;
     const here = ontoPicture(shape, candidate.pose);
     const plain: Placed = { candidate, ...here, radius, support: Math.exp(-Math.abs(offs[k])) };
-    const doubtful = odd[k] || cutOff;
+    const doubtful = cutOff || (odd[k] && (round || Math.abs(offs[k]) > LEAST_ODDITY_TURNING));
     if (!doubtful && !round) return [plain];
     const outline = round ? discOutline(radius, usual[k].smear) : nearestOutline(track, odd, k);
     if (!outline) return [plain];
@@ -49,6 +54,15 @@ export function settle(track: FoundTrack): Placed[] {
     if (fit.support < 0.45) return shape.area < 0.5 * usual[k].area ? [] : [{ ...plain, support: 0.5 * plain.support }];
     return [{ candidate, x: fit.x, y: fit.y, radius, support: fit.support }];
   });
+}
+
+function offsOf(track: FoundTrack, usual: Usual[]): number[] {
+  return track.shapes.map((shape, k) => Math.log(shape.area / usual[k].area));
+}
+
+function oddOnes(offs: number[]): boolean[] {
+  const spread = 1.5 * median(offs.map(Math.abs));
+  return offs.map((off) => Math.abs(off) > Math.max(LEAST_ODDITY, 3 * spread));
 }
 
 const TURNS = Array.from({ length: 25 }, (_, k) => ((k - 12) * Math.PI) / 60);

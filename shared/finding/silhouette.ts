@@ -24,7 +24,9 @@ export interface Silhouette {
  * @param closing px of gap to close on each side
  */
 export function silhouetteOf(mask: Uint8Array, width: number, height: number, closing: number): Silhouette | null {
-  const filled = fillHoles(closeGaps(mask, width, height, closing), width, height);
+  const closed = closeGaps(mask, width, height, closing);
+  const filled = fillHoles(closed, width, height);
+  openLoops(filled, closed, width, height);
   const { labels, regions } = labelRegions(filled, width, height);
   if (regions.length === 0) return null;
   const largest = regions.reduce((best, region) => (region.area > best.area ? region : best));
@@ -60,13 +62,62 @@ export function silhouetteOf(mask: Uint8Array, width: number, height: number, cl
   };
 }
 
+/** Half the width up to which a part is a wire, as a share of the thing's size. */
+const WIRE = 0.07;
+/** Share of a hole's wall that has to be wire. */
+const WIRE_WALL = 0.35;
+
+/**
+ * Takes loops of wire off a solid thing: the handle of a bucket encloses background that is none of its area. A thing
+ * that is drawn in outline only has nothing solid and stays filled.
+ */
+function openLoops(filled: Uint8Array, closed: Uint8Array, width: number, height: number): void {
+  const holes = filled.map((value, at) => (value === 1 && closed[at] === 0 ? 1 : 0));
+  const count = (values: Uint8Array): number => values.reduce((sum, value) => sum + value, 0);
+  const area = count(filled);
+  if (count(holes) < 0.04 * area) return;
+  const half = Math.max(2, Math.round(WIRE * Math.sqrt(area)));
+  const solid = opened(closed, width, height, half);
+  if (count(solid) < 0.4 * area) return;
+  const { labels, regions } = labelRegions(holes, width, height);
+  for (const hole of regions) {
+    if (hole.area < 0.03 * area) continue;
+    const own = labels.map((label) => (label === hole.label ? 1 : 0));
+    const around = grow(Uint8Array.from(own), width, height, 2 * half);
+    let wall = 0;
+    let wire = 0;
+    for (let at = 0; at < around.length; at++) {
+      if (around[at] === 0 || closed[at] === 0) continue;
+      wall++;
+      if (solid[at] === 0) wire++;
+    }
+    if (wire < WIRE_WALL * wall) continue;
+    for (let at = 0; at < around.length; at++) if (around[at] === 1 && solid[at] === 0) filled[at] = 0;
+  }
+}
+
+function grow(mask: Uint8Array, width: number, height: number, by: number): Uint8Array {
+  return spread(spread(mask, width, height, by, 1), width, height, by, width);
+}
+
+/** Morphological opening with a square: what is thinner than twice `by` goes. */
+function opened(mask: Uint8Array, width: number, height: number, by: number): Uint8Array {
+  const inverse = mask.map((value) => 1 - value);
+  return grow(
+    grow(inverse, width, height, by).map((value) => 1 - value),
+    width,
+    height,
+    by,
+  );
+}
+
 /** Morphological closing with a square, so that an outline with small gaps still encloses its inside. */
 export function closeGaps(mask: Uint8Array, width: number, height: number, by: number): Uint8Array {
   if (by === 0) return mask.map((value) => (value === 0 ? 0 : 1));
-  const grown = spread(spread(mask, width, height, by, 1), width, height, by, width);
+  const grown = grow(mask, width, height, by);
   // What the window's edge hides may belong to the shape, so outside counts as inside when shrinking.
   const inverse = grown.map((value) => (value === 0 ? 1 : 0));
-  const shrunk = spread(spread(inverse, width, height, by, 1), width, height, by, width);
+  const shrunk = grow(inverse, width, height, by);
   return shrunk.map((value, at) => (value === 0 || mask[at] !== 0 ? 1 : 0));
 }
 

@@ -7,6 +7,8 @@ export interface FoundTrack {
   path: Path;
   /** The shape taken on each frame, in the order of `path`. */
   shapes: Shape[];
+  /** Area that the thing has on the nearest frames on which nothing darkens the ground beside it, px². */
+  local: number[];
   /** Largest distance between two of its places, px. */
   extent: number;
   /** Usual radius of a disc of the same area, px. */
@@ -22,7 +24,8 @@ export function trackOf(path: Path): FoundTrack {
   const moving = path.filter((candidate, k) => k > 0 && distance(candidate, path[k - 1]) > 1);
   const typical = moving.length >= 5 ? moving : path;
   const area = median(typical.map((candidate) => candidate.whole.area));
-  const shapes = path.map((candidate) => likelier(candidate, area));
+  const local = localAreas(path, area);
+  const shapes = path.map((candidate, k) => likelier(candidate, local[k]));
   const xs = shapes.map((shape) => shape.x);
   const ys = shapes.map((shape) => shape.y);
   const extent = Math.hypot(Math.max(...xs) - Math.min(...xs), Math.max(...ys) - Math.min(...ys));
@@ -30,7 +33,22 @@ export function trackOf(path: Path): FoundTrack {
   const shadowShare = median(typical.map((candidate) => candidate.shadowShare));
   const radius = Math.sqrt(area / Math.PI);
   const weight = moving.length * Math.min(1, contrast / 60) * Math.min(1, extent / (4 * radius)) * Math.sqrt(radius);
-  return { path, shapes, extent, radius, contrast, shadowShare, weight };
+  return { path, shapes, local, extent, radius, contrast, shadowShare, weight };
+}
+
+/** Share of darkened ground up to which a frame shows the thing without its shadow. */
+const CLEAR = 0.2;
+const NEAREST = 5;
+
+function localAreas(path: Path, otherwise: number): number[] {
+  const clear = path.filter((candidate) => candidate.shadowShare < CLEAR && candidate.onEdge === 0);
+  return path.map((candidate) => {
+    if (clear.length < NEAREST) return otherwise;
+    const near = clear
+      .toSorted((a, b) => Math.abs(a.index - candidate.index) - Math.abs(b.index - candidate.index))
+      .slice(0, NEAREST);
+    return median(near.map(({ whole }) => whole.area));
+  });
 }
 
 function likelier(candidate: Candidate, area: number): Shape {
