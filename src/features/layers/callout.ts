@@ -2,9 +2,11 @@ import type { Finding, Flight } from '../../../shared/reading/document.ts';
 import { shownNumber, shownPercent } from '../../lib/honestDigits.ts';
 import { trueApex } from './lines.ts';
 
+/** "1 frame", "2.8 frames": a decimal only where it says something. */
 const frameWord = (count: number) => {
-  const shown = shownNumber(Math.abs(count), Number.isInteger(count) ? 0 : 1);
-  return `${shown} ${shown === '1' || shown === '1.0' ? 'frame' : 'frames'}`;
+  const size = Math.abs(count);
+  const shown = shownNumber(size, Math.abs(size - Math.round(size)) < 0.05 ? 0 : 1);
+  return `${shown} ${shown === '1' ? 'frame' : 'frames'}`;
 };
 
 /** Frames by which the apex as drawn comes after (positive) or before the apex of the true arc; null without either. */

@@ -1,6 +1,6 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useMemo, useRef, useState } from 'react';
-import { useNavigate } from 'react-router';
+import { useNavigate, useSearchParams } from 'react-router';
 import type { ShotWithTakes } from '../../../shared/api/shots.ts';
 import { type Take, takeContracts } from '../../../shared/api/takes.ts';
 import { can } from '../../../shared/policy/can.ts';
@@ -42,9 +42,9 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
   const client = useQueryClient();
   const navigate = useNavigate();
   const { firstFrame } = take;
-  const [playhead] = useState(() =>
-    createPlayhead(take.frames, frameOfAddress(new URLSearchParams(window.location.search), firstFrame) ?? 1),
-  );
+  const [search] = useSearchParams();
+  const asked = frameOfAddress(search, firstFrame);
+  const [playhead] = useState(() => createPlayhead(take.frames, asked ?? 1));
   const { layers, onSwitch } = useTakeAddress(playhead, firstFrame);
   const readingQuery = useQuery({ ...readingOptions(take.id), enabled: take.reading.status === 'read' });
   const reading = (take.reading.status === 'read' && readingQuery.data) || null;
@@ -56,7 +56,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
     if (top < 0) desk.current?.scrollIntoView({ behavior: 'smooth', block: 'start' });
   };
   const findings = useFindings(reading, playhead, showPicture);
-  const talk = useThreads(take, actor.person, playhead);
+  const talk = useThreads(take, actor.person, playhead, asked !== null);
   const readAgain = useMutation({
     mutationFn: () => call(takeContracts.readAgain, { params: { takeId: take.id } }),
     onSuccess: (answer) => applyTake(client, slug, answer),

@@ -27,10 +27,15 @@ export function useTakeAddress(playhead: Playhead, firstFrame: number) {
   // The router answers a moment later; until then this is what the address will say.
   const said = useRef({ frame: search.get('frame'), layers: search.get('layers') });
 
+  const latestSearch = useRef(search);
+  useEffect(() => {
+    latestSearch.current = search;
+  });
+
   const write = useCallback(
     (change: Partial<typeof said.current>) => {
       said.current = { ...said.current, ...change };
-      const next = new URLSearchParams(window.location.search);
+      const next = new URLSearchParams(latestSearch.current);
       for (const [name, value] of Object.entries(said.current)) {
         if (value === null) next.delete(name);
         else next.set(name, value);

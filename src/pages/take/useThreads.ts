@@ -19,8 +19,11 @@ type Open = { thread: string } | { new: number; writing: boolean } | 'latest' | 
 
 const NONE: Thread[] = [];
 
-/** The threads of a take, which of them hangs open, and the note that is being written. */
-export function useThreads(take: Take, me: Person, playhead: Playhead) {
+/**
+ * The threads of a take, which of them hangs open, and the note that is being written. `frameAsked`: the address names a
+ * frame.
+ */
+export function useThreads(take: Take, me: Person, playhead: Playhead, frameAsked: boolean) {
   const query = useQuery(threadsOptions(take.id));
   const threads = query.data?.threads ?? NONE;
   const pending = notYetThere(usePendingNotes(take.id), threads, me.id);
@@ -33,9 +36,8 @@ export function useThreads(take: Take, me: Person, playhead: Playhead) {
   useEffect(() => {
     if (!query.isSuccess || landed.current) return;
     landed.current = true;
-    const hasFrame = new URLSearchParams(window.location.search).has('frame');
-    if (landing !== undefined && !hasFrame && playhead.frame() === 1) playhead.choose(landing);
-  }, [query.isSuccess, landing, playhead]);
+    if (landing !== undefined && !frameAsked && playhead.frame() === 1) playhead.choose(landing);
+  }, [query.isSuccess, landing, frameAsked, playhead]);
 
   const hanging = hangingOf(open, threads, pending, playhead);
   const openId = hanging?.kind === 'thread' ? hanging.thread.id : null;
