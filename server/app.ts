@@ -9,6 +9,7 @@ import { errorSink } from './http/errorSink.ts';
 import { describeApi } from './http/openapi.ts';
 import { originCheck } from './http/originCheck.ts';
 import { signInLimits } from './http/rateLimits.ts';
+import { requestLog } from './http/requestLog.ts';
 import { requireUser } from './http/requireUser.ts';
 import { securityHeaders } from './http/securityHeaders.ts';
 import type { Sessions } from './http/sessions.ts';
@@ -35,7 +36,7 @@ export function createApp(deps: Deps, { sessions, passport, publicOrigin, distDi
   // A public origin means a proxy, and it runs on this machine; its word about who asks is then taken.
   app.set('trust proxy', publicOrigin ? 'loopback' : false);
   app.disable('x-powered-by');
-  app.use(securityHeaders(publicOrigin));
+  app.use(requestLog(deps.log), securityHeaders(publicOrigin));
   app.use('/api', api(deps, { sessions, passport, publicOrigin }));
   app.use(client(distDir));
   app.use(errorSink(deps.log));

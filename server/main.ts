@@ -1,12 +1,12 @@
 import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { availableParallelism } from 'node:os';
-import { pino } from 'pino';
 import { createAnalysisPool } from './analysis/pool.ts';
 import { createApp } from './app.ts';
 import { createDataSource } from './data-source.ts';
 import type { Deps } from './deps.ts';
 import type { DatabaseConnection, Env } from './env.ts';
+import { createLog } from './log.ts';
 import { createPassport } from './http/passport.ts';
 import { createSessions, type Sessions } from './http/sessions.ts';
 import { createBroadcast, type LiveServer } from './realtime/broadcast.ts';
@@ -47,7 +47,7 @@ export async function startServer({ env, database }: StartOptions): Promise<Runn
     if (failures.length > 0) throw new AggregateError(failures, 'The server did not close in order.');
   };
   try {
-    const log = pino({ level: env.LOG_LEVEL });
+    const log = createLog(env.LOG_LEVEL);
     const dataSource = await createDataSource(database).initialize();
     opened.push(() => dataSource.destroy());
     await dataSource.runMigrations();

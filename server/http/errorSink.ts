@@ -39,7 +39,7 @@ function fromMulter(error: MulterError): AppError {
   if (error.code === 'LIMIT_FILE_SIZE') {
     return new AppError('file_too_large', `A picture may have ${MAX_PICTURE_BYTES / 1024 / 1024} MB.`);
   }
-  if (error.code === 'LIMIT_FILE_COUNT' || error.code === 'LIMIT_UNEXPECTED_FILE') {
+  if (error.code === 'LIMIT_FILE_COUNT' || error.code === 'LIMIT_PART_COUNT') {
     return new AppError('invalid_request', `Send up to ${MAX_PICTURES_PER_BATCH} pictures at a time.`);
   }
   return new AppError('invalid_request', 'The pictures did not arrive as they should; send them again.');

@@ -79,5 +79,5 @@ function nameOf(originalName: string): string {
     .at(-1)!
     .replaceAll(/\p{Cc}/gu, '')
     .trim();
-  return [...last].slice(0, 120).join('') || 'picture without a name';
+  return [...last].slice(0, 255).join('') || 'picture without a name';
 }

@@ -15,8 +15,12 @@ beforeAll(async () => {
 });
 afterAll(() => server.remove());
 
-const statusOf = async (id: string) =>
-  (await server.deps.dataSource.manager.findOneByOrFail(Take, { id })).readingStatus;
+async function readingOf(id: string) {
+  const { readingStatus: status, readingMessage: said } = await server.deps.dataSource.manager.findOneByOrFail(Take, {
+    id,
+  });
+  return { status, said };
+}
 
 test('a server that is stopped in the middle of a reading reads the take after its next start', async () => {
   const built = await buildTake(server.deps, { frames: 60 });
@@ -31,8 +35,8 @@ test('a server that is stopped in the middle of a reading reads the take after i
   expect(tab.heard).toEqual([]);
   const again = await goLive(server, client);
   await again.join(built.production.slug);
-  if ((await statusOf(built.take.id)) !== 'read') await again.next('take:read');
-  expect(await statusOf(built.take.id)).toBe('read');
+  if ((await readingOf(built.take.id)).status !== 'read') await again.next('take:read');
+  expect(await readingOf(built.take.id)).toEqual({ status: 'read', said: null });
 
   // The session outlives the restart; only the port is new.
   const log = await openClient(server)
