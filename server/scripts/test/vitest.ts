@@ -86,9 +86,10 @@ export function count(report: Report | undefined, projects: string[], code: numb
   const broken = files.filter(
     ({ status, assertionResults }) => status === 'failed' && !assertionResults.some((test) => test.status === 'failed'),
   );
-  const idle = projects.filter(
-    (name) => !files.some((file) => file.name.includes(`/tests/${name}/`) && file.assertionResults.length > 0),
+  const ran = files.filter(({ assertionResults }) =>
+    assertionResults.some(({ status }) => /passed|failed/.test(status)),
   );
+  const idle = projects.filter((name) => !ran.some((file) => file.name.includes(`/tests/${name}/`)));
   for (const file of broken) console.log(` × ${file.name} could not be run`);
   for (const name of idle) console.log(` × no test ran in tests/${name}`);
   const failed = report.numFailedTests + broken.length + idle.length;

@@ -36,6 +36,8 @@ describe('the count at the end of npm test', () => {
 
   it('counts a project in which nothing ran', () => {
     expect(count(report(passing('unit')), ['unit', 'e2e'], 0)).toEqual({ passed: 1, failed: 1 });
+    const skipping = { ...passing('e2e'), assertionResults: [{ status: 'skipped' }] };
+    expect(count(report(passing('unit'), skipping), ['unit', 'e2e'], 0)).toEqual({ passed: 1, failed: 1 });
   });
 
   it('counts a vitest that failed for a reason of its own', () => {
