@@ -1,5 +1,6 @@
 import type { Drawing } from './drawings.ts';
 import type { PathFit, Samples } from './fit.ts';
+import type { Honoured } from './hand.ts';
 import { fitPath } from './fit.ts';
 import type { Path } from './path.ts';
 import type { ShapeName } from './shapes.ts';
@@ -18,6 +19,8 @@ export interface Account {
   freedom: number;
   /** Minus twice the log likelihood, with the price of what is assumed: what accounts are compared by; less is better. */
   cost: number;
+  /** Sum of squares of the marks about the path and about each other, px². */
+  squares: number;
   /** How many of its contacts are no contacts. */
   impossible: number;
   /** Covariance of the parameters over noise², worked out for the account that is chosen. */
@@ -51,6 +54,8 @@ export interface Field {
   replicates: { sum: number; freedom: number };
   /** Frames from one drawing to the next, as most are. */
   step: number;
+  /** What someone set, in local time. */
+  hand: Honoured;
   /** Noise per axis as neighbouring drawings show it, px. */
   noise: number;
 }
@@ -120,12 +125,13 @@ function judge(fit: PathFit, fault: Fault | null, depth: boolean, weight: Float6
   let used = 0;
   const left: number[] = [];
   for (let i = 0; i < weight.length; i += 1) {
-    if (weight[i]! > 0) used += 1;
-    else left.push(i);
+    if (weight[i]! >= 0.5) used += 1;
+    else if (weight[i]! === 0) left.push(i);
   }
   const extra = fault?.kind === 'held' ? 1 : 0;
   const free = Math.max(1, 2 * used + field.replicates.freedom - fit.path.size - extra);
-  const squares = fit.rss + field.replicates.sum + PRIOR_FREEDOM * PRIOR_NOISE ** 2;
+  const total = fit.rss + field.replicates.sum;
+  const squares = total + PRIOR_FREEDOM * PRIOR_NOISE ** 2;
   const marks = 2 * used + field.replicates.freedom + PRIOR_FREEDOM;
   const odd = impossible(fit, weight, field);
   const plain = fit.path.size - (fit.path.shape ? 1 : 0) - (depth ? 2 : 0);
@@ -139,6 +145,7 @@ function judge(fit: PathFit, fault: Fault | null, depth: boolean, weight: Float6
     left,
     noise2: squares / (free + PRIOR_FREEDOM),
     freedom: free,
+    squares: total,
     cost:
       marks * Math.log(squares / marks) +
       (price * marks) / (free + PRIOR_FREEDOM) +
@@ -166,7 +173,13 @@ function impossible(fit: PathFit, weight: Float64Array, field: Field): number {
   const { path, knots, theta } = fit;
   const last = path.spans.length - 1;
   let count = 0;
+  for (const barred of field.hand.barred) {
+    for (let k = 1; k <= last; k += 1) {
+      if (path.timeAt[k]! >= 0 && Math.abs(knots.t[k]! - barred) <= 1.5 * field.step) count += 2;
+    }
+  }
   for (let k = 1; k <= last; k += 1) {
+    if (path.timeAt[k]! < 0) continue;
     if (path.spans[k - 1]!.kind !== 'flight' || path.spans[k]!.kind !== 'flight') continue;
     const g = theta[0]!;
     const left = knots.t[k]! - knots.t[k - 1]!;

@@ -2,6 +2,7 @@ import type { Account, Field } from './account.ts';
 import { fitOnce } from './account.ts';
 import type { Contest } from './compete.ts';
 import { compete } from './compete.ts';
+import { honour } from './honour.ts';
 import type { Sketch } from './sketch.ts';
 import { oneFlight, pathOf, restFirst, restLast, sketchFrom, sketchOf } from './sketch.ts';
 import type { Stretch } from './spans.ts';
@@ -23,7 +24,7 @@ export function holdContest(
   let best: Contest | null = null;
   if (stretches.some((stretch) => stretch.kind === 'flight')) {
     for (const sketch of firstSketches(sketchOf(field, stretches), stretches, field)) {
-      const next = compete(sketch, weight, field);
+      const next = compete(honour(sketch, field), weight, field);
       if (!best || next.chosen.cost < best.chosen.cost) best = next;
     }
     if (best && lost.some((i) => best!.chosen.left.includes(i))) {
@@ -34,7 +35,7 @@ export function holdContest(
   }
   if (!best || isPoor(best.chosen, field)) {
     for (const sketch of plainSketches(field, full)) {
-      const next = compete(sketch, full, field);
+      const next = compete(honour(sketch, field), full, field);
       if (!best || next.chosen.cost < best.chosen.cost) best = next;
     }
   }

@@ -144,8 +144,10 @@ export function replicateNoise(drawings: readonly Drawing[]): { sum: number; fre
   const squares: { sum: number; freedom: number }[] = [];
   for (const drawing of drawings) {
     if (drawing.weight < 2) continue;
+    const x = drawing.marks.reduce((total, mark) => total + mark.x, 0) / drawing.marks.length;
+    const y = drawing.marks.reduce((total, mark) => total + mark.y, 0) / drawing.marks.length;
     let sum = 0;
-    for (const mark of drawing.marks) sum += (mark.x - drawing.x) ** 2 + (mark.y - drawing.y) ** 2;
+    for (const mark of drawing.marks) sum += (mark.x - x) ** 2 + (mark.y - y) ** 2;
     squares.push({ sum, freedom: 2 * (drawing.weight - 1) });
   }
   squares.sort((a, b) => a.sum / a.freedom - b.sum / b.freedom);

@@ -49,7 +49,7 @@ function possibleFaults(clean: Account, field: Field): Fault[] {
   const { spans } = fit.path;
   const flights = spans.filter((span) => span.kind === 'flight').length;
   spans.forEach((span, index) => {
-    if (span.kind !== 'flight') return;
+    if (span.kind !== 'flight' || isUnfree(field, fit.knots.t[index]!, fit.knots.t[index + 1]!)) return;
     const length = fit.knots.t[index + 1]! - fit.knots.t[index]!;
     const g = fit.theta[span.gravity]!;
     const apex = length / 2 - (fit.knots.y[index + 1]! - fit.knots.y[index]!) / (length * g);
@@ -74,6 +74,12 @@ function possibleFaults(clean: Account, field: Field): Fault[] {
     }
   }
   return faults;
+}
+
+/** Whether someone said of a span that it is no free flight. */
+export function isUnfree(field: Field, start: number, end: number): boolean {
+  const middle = (start + end) / 2;
+  return field.hand.notFree.some((span) => span.from <= middle && middle <= span.to);
 }
 
 function isFlightAt(account: Account, t: number): boolean {

@@ -1,20 +1,29 @@
 import type { Flight } from '../reading/document.ts';
+import { metresPerSecond2 } from './units.ts';
+import { errorOf } from './errors.ts';
 import { measuresOf } from './measures.ts';
 import { truePlaces } from './mend.ts';
+import type { Knots } from './path.ts';
+import { follow } from './path.ts';
 import type { FlightView, TrackView } from './view.ts';
 import { frameOf } from './view.ts';
 
 /** A flight as the document tells it: limits, apex as drawn, gravity without its shape fault, measures and the true arc. */
 export function describeFlight(view: TrackView, flight: FlightView, centre: { x: number; y: number }): Flight {
   const { account } = view;
-  const { fit, noise2, covariance } = account;
-  const p = fit.path.size;
-  const se = (k: number) => (covariance ? Math.sqrt(Math.max(0, noise2 * covariance[k * p + k]!)) : 0);
+  const { fit } = account;
   const g = fit.path.spans[flight.span]!.gravity;
-  const gravity = { value: flight.gravity, se: se(g) };
-  const length = flight.length;
-  const across = (fit.knots.x[flight.span + 1]! - fit.knots.x[flight.span]!) / length;
-  const noise = Math.sqrt(noise2);
+  const finite = (se: number, other: number) => (Number.isFinite(se) ? se : other);
+  const gravity = {
+    value: flight.gravity,
+    se: finite(
+      errorOf(account, (theta) => theta[g]!),
+      flight.gravity,
+    ),
+  };
+  const speed = (_: Float64Array, knots: Knots) =>
+    (knots.x[flight.span + 1]! - knots.x[flight.span]!) / (knots.t[flight.span + 1]! - knots.t[flight.span]!);
+  const across = speed(fit.theta, fit.knots);
   const metric = view.scale
     ? {
         value: metresPerSecond2(gravity.value, view),
@@ -27,7 +36,7 @@ export function describeFlight(view: TrackView, flight: FlightView, centre: { x:
     landing: flight.closes ? frameOf(view, flight.end) : null,
     judged: flight.judged,
     apex: apexOf(view, flight, centre),
-    across: { value: across, se: (noise * Math.SQRT2) / (length * Math.sqrt(Math.max(1, length / 4))) },
+    across: { value: across, se: finite(errorOf(account, speed), Math.abs(across)) },
     gravity: { ...gravity, metric },
     residual: residualOf(view, flight),
     model: account.depth ? 'depth' : 'flat',
@@ -36,29 +45,39 @@ export function describeFlight(view: TrackView, flight: FlightView, centre: { x:
   };
 }
 
-/** Gravity of the picture in m/s² (fps as an exact fraction). */
-export function metresPerSecond2(gravity: number, view: TrackView): number {
-  const fps = view.fps.num / view.fps.den;
-  return view.scale ? (gravity * fps * fps) / view.scale.pxPerMetre : 0;
-}
-
 function apexOf(view: TrackView, flight: FlightView, centre: { x: number; y: number }): Flight['apex'] {
-  const { fault, fit } = view.account;
-  let at = flight.apex;
-  if (fault?.kind === 'shape' && fault.span === flight.span && fault.name === 'apex')
-    at += fit.theta[fit.path.shapeAt]! * flight.length;
-  if (at < 0 || at > flight.length) return null;
-  const time = Float64Array.from([flight.start + at]);
-  const place = truePlaces(view, time, true);
-  const noise = Math.sqrt(view.account.noise2);
-  const count = Math.max(3, flight.length / view.hold);
+  const { account } = view;
+  const { path, theta, knots } = account.fit;
+  const at = drawnApex(view, flight, theta, knots);
+  if (at < flight.start || at > flight.end) return null;
+  const place = truePlaces(view, Float64Array.from([at]), true);
+  const height = (moved: Float64Array, places: Knots) => {
+    const out = [new Float64Array(1), new Float64Array(1)] as const;
+    follow(path, moved, places, Float64Array.from([at]), out[0], out[1]);
+    return out[1][0]!;
+  };
+  const seFrame = errorOf(account, (moved, places) => drawnApex(view, flight, moved, places));
+  const seY = errorOf(account, height);
   return {
-    frame: frameOf(view, flight.start + at),
+    frame: frameOf(view, at),
     x: place.xs[0]! + centre.x,
     y: place.ys[0]! + centre.y,
-    seFrame: (noise * Math.sqrt(12 / count)) / (flight.length * flight.gravity),
-    seY: 1.5 * noise * Math.sqrt(1 / count),
+    seFrame: Number.isFinite(seFrame) ? seFrame : flight.length,
+    seY: Number.isFinite(seY) ? seY : Math.sqrt(account.noise2),
   };
+}
+
+/** Moment of the apex as it is drawn, local time. */
+function drawnApex(view: TrackView, flight: FlightView, theta: Float64Array, knots: Knots): number {
+  const { path } = view.account.fit;
+  const start = knots.t[flight.span]!;
+  const length = knots.t[flight.span + 1]! - start;
+  const shape = path.shape?.span === flight.span ? path.shape.name : null;
+  const held = shape?.startsWith('hang') ? theta[path.shapeAt]! : 0;
+  const g = theta[path.spans[flight.span]!.gravity]!;
+  const moving = length - held;
+  const apex = moving / 2 - (knots.y[flight.span + 1]! - knots.y[flight.span]!) / (moving * g) + held / 2;
+  return start + apex + (shape === 'apex' ? theta[path.shapeAt]! * length : 0);
 }
 
 function residualOf(view: TrackView, flight: FlightView): number {

@@ -6,6 +6,27 @@ export interface HoldPattern {
   phase: number;
   /** With a mix: the frames on which a new drawing appears. */
   starts: number[];
+  caution?: string;
+}
+
+/** The pattern as told, with its phase found; or found altogether when nothing is told. */
+export function holdOf(marks: readonly Mark[], told: Hold | undefined): HoldPattern {
+  if (told === undefined) return findHold(marks);
+  if (told === 'mixed') return { hold: told, phase: 1, starts: exposureOf(marks), caution: MIXED };
+  return { hold: told, phase: told === 1 ? 1 : findPhase(marks, told), starts: [] };
+}
+
+const MIXED = 'Ones and twos are mixed: every new drawing is read at the frame on which it appears.';
+
+/** Frames on which a new drawing appears. */
+export function exposuresOf(pattern: HoldPattern | undefined, frames: number): number[] {
+  if (!pattern) return [];
+  if (pattern.hold === 'mixed') return pattern.starts;
+  const out: number[] = [];
+  for (let frame = 1; frame <= frames; frame += 1) {
+    if (frame === 1 || (frame - pattern.phase) % pattern.hold === 0) out.push(frame);
+  }
+  return out;
 }
 
 /**

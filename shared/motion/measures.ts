@@ -1,9 +1,13 @@
 import type { Measure } from '../reading/document.ts';
 import type { FindingKind, MeasureName } from '../reading/kinds.ts';
-import type { Account } from './account.ts';
-import { pathOf, sketchFrom } from './sketch.ts';
+import type { Account, Fault } from './account.ts';
+import { boundsOf, reboundOf } from './bounces.ts';
+import { errorOf } from './errors.ts';
 import { fitStep } from './fit.ts';
+import { metresPerSecond2 } from './units.ts';
+import { offArc, repeatsOf, stepScatter } from './scatter.ts';
 import type { ShapeName } from './shapes.ts';
+import { pathOf, sketchFrom } from './sketch.ts';
 import { Z95, Z99_ONE, studentQuantile } from './statistics.ts';
 import type { FlightView, TrackView } from './view.ts';
 
@@ -13,21 +17,24 @@ export interface Estimated {
   se: number;
 }
 
-/** A measure with its 95 % interval and its verdict against a tolerance around what is expected (interval test, methods 5). */
-export function measureOf(
-  name: MeasureName,
-  estimate: Estimated,
-  freedom: number,
-  against: { expected: number; tolerance: number; kind: FindingKind; off?: boolean } | null,
-): Measure {
+interface Against {
+  expected: number;
+  tolerance: number;
+  kind: FindingKind;
+}
+
+/**
+ * A measure with its 95 % interval and one of three verdicts: off when it lies past the tolerance by its error (1 % risk), true
+ * when its interval lies within, else cannot-tell (interval-null and equivalence tests, methods 5). Without anything to hold it
+ * against it is what it is, and true.
+ */
+export function measureOf(name: MeasureName, estimate: Estimated, freedom: number, against: Against | null): Measure {
   const half = studentQuantile(Z95, freedom) * estimate.se;
   const strict = studentQuantile(Z99_ONE, freedom) * estimate.se;
-  let verdict: Measure['verdict'] = 'cannot-tell';
-  if (against) {
-    const distance = Math.abs(estimate.value - against.expected);
-    if (distance - strict > against.tolerance) verdict = 'off';
-    else if (distance + half < against.tolerance) verdict = 'true';
-  } else verdict = 'true';
+  const distance = against ? Math.abs(estimate.value - against.expected) : 0;
+  let verdict: Measure['verdict'] = 'true';
+  if (against && distance - strict > against.tolerance) verdict = 'off';
+  else if (against && distance + half >= against.tolerance) verdict = 'cannot-tell';
   return {
     name,
     value: estimate.value,
@@ -40,90 +47,125 @@ export function measureOf(
   };
 }
 
-/** One shape number of a flight: the fitted one when the chosen account carries it, else one step away from that account. */
-function shapeNumber(view: TrackView, flight: FlightView, name: ShapeName): Estimated | null {
-  const { account, field } = view;
-  const { fault, fit } = account;
-  if (fault?.kind === 'shape' && fault.span === flight.span && fault.name === name && account.covariance) {
-    const at = fit.path.shapeAt;
-    return {
-      value: fit.theta[at]!,
-      se: Math.sqrt(Math.max(0, account.noise2 * account.covariance[at * fit.path.size + at]!)),
-    };
-  }
-  const base: Account = fault?.kind === 'shape' && fault.span === flight.span ? view.contest.clean : account;
-  const { path, theta, knots } = base.fit;
-  const depth: [number, number] = base.depth ? [theta[path.depthAt]!, theta[path.depthAt + 1]!] : [0, 0];
-  const start = pathOf(sketchFrom(path, theta, knots), { kind: 'shape', name, span: flight.span }, base.depth, field, {
-    depth,
-  });
-  const step = fitStep(start.path, start.theta, { ...field.samples, weight: base.weight }, start.path.shapeAt);
-  return step ? { value: step.value, se: step.unit * Math.sqrt(base.noise2) } : null;
-}
-
-/** The measures of one flight, by name. Those that its marks cannot decide are left out. */
+/** The measures of one flight, by name. Those that its marks cannot decide at all are left out. */
 export function measuresOf(view: TrackView, flight: FlightView): Measure[] {
   const { account, tolerances } = view;
   const { freedom } = account;
   const out: Measure[] = [];
-  const inside = flight.apex > 1 && flight.apex < flight.length - 1;
-  if (inside) {
-    const apex = shapeNumber(view, flight, 'apex');
-    if (apex) {
-      const share = 0.5 + apex.value;
-      out.push(
-        measureOf('apex-time', { value: share, se: apex.se }, freedom, {
-          expected: 0.5,
-          tolerance: tolerances.apexTime.from,
-          kind: 'apex-off-centre',
-        }),
-      );
-    }
-    const power = shapeNumber(view, flight, 'power');
-    if (power) {
-      const against = {
-        expected: 2,
-        tolerance: tolerances.exponent.from,
-        kind: power.value < 2 ? ('too-straight' as const) : ('hang' as const),
-      };
-      out.push(
-        measureOf('exponent-rise', power, freedom, against),
-        measureOf('exponent-fall', power, freedom, against),
-      );
-      const share = 0.5 ** power.value;
-      const se = share * Math.LN2 * power.se;
-      for (const name of ['quarter-drop-before', 'quarter-drop-after'] as const) {
-        out.push(
-          measureOf(name, { value: share, se }, freedom, {
-            expected: 0.25,
-            tolerance: 0.25 * Math.LN2 * tolerances.exponent.from,
-            kind: against.kind,
-          }),
-        );
-      }
-    }
-  }
+  const add = (name: MeasureName, estimate: Estimated | null, against: Against | null) => {
+    if (!estimate || ![estimate.value, estimate.se].every(Number.isFinite)) return;
+    out.push(measureOf(name, estimate, freedom, against));
+  };
+  if (flight.apex > 1 && flight.apex < flight.length - 1) shapesOfArc(view, flight, add);
   const ease = shapeNumber(view, flight, 'ease');
-  if (ease) {
-    out.push(
-      measureOf('across-drift', { value: 2 * ease.value, se: 2 * ease.se }, freedom, {
-        expected: 0,
-        tolerance: tolerances.acrossDrift.from,
-        kind: 'across-uneven',
-      }),
+  add('across-drift', ease && { value: 2 * ease.value, se: 2 * ease.se }, {
+    expected: 0,
+    tolerance: tolerances.acrossDrift.from,
+    kind: 'across-uneven',
+  });
+  add('across-spread', stepScatter(view, flight), {
+    expected: 0,
+    tolerance: tolerances.acrossSpread.from,
+    kind: 'across-uneven',
+  });
+  add('path-steps', shapeNumber(view, flight, 'even-path'), {
+    expected: 0,
+    tolerance: tolerances.pathSteps.from,
+    kind: 'spacing-off-path',
+  });
+  gravityOf(view, flight, add);
+  const rebound = reboundOf(view, flight);
+  if (rebound) {
+    const bounds = boundsOf(tolerances.bounceGain);
+    const gain = measureOf('rebound-height', rebound.height, freedom, { ...bounds, kind: 'bounce-gains' });
+    out.push(rebound.height.value > 1 ? gain : { ...gain, verdict: 'true', kind: null });
+    add('rebound-period', rebound.period, null);
+  }
+  add('off-arc', offArc(view, flight), { expected: 0, tolerance: tolerances.pop.from, kind: 'pop' });
+  add('repeats', { value: repeatsOf(view, flight), se: 0 }, { expected: 0, tolerance: 0.5, kind: 'held-frame' });
+  return out;
+}
+
+type Add = (name: MeasureName, estimate: Estimated | null, against: Against | null) => void;
+
+function shapesOfArc(view: TrackView, flight: FlightView, add: Add): void {
+  const { tolerances } = view;
+  const apex = shapeNumber(view, flight, 'apex');
+  add('apex-time', apex && { value: 0.5 + apex.value, se: apex.se }, {
+    expected: 0.5,
+    tolerance: tolerances.apexTime.from,
+    kind: 'apex-off-centre',
+  });
+  for (const side of ['rise', 'fall'] as const) {
+    const power = shapeNumber(view, flight, `power-${side}`);
+    if (!power) continue;
+    const kind = power.value < 2 ? 'too-straight' : 'hang';
+    add(`exponent-${side}`, power, { expected: 2, tolerance: tolerances.exponent.from, kind });
+    const share = 0.5 ** power.value;
+    add(
+      side === 'rise' ? 'quarter-drop-before' : 'quarter-drop-after',
+      { value: share, se: share * Math.LN2 * power.se },
+      { expected: 0.25, tolerance: 0.25 * Math.LN2 * tolerances.exponent.from, kind },
     );
   }
-  const c = account.covariance;
+}
+
+function gravityOf(view: TrackView, flight: FlightView, add: Add): void {
+  const { account, tolerances } = view;
   const g = account.fit.path.spans[flight.span]!.gravity;
-  if (c) {
-    out.push(
-      measureOf(
-        'gravity',
-        { value: flight.gravity, se: Math.sqrt(Math.max(0, account.noise2 * c[g * account.fit.path.size + g]!)) },
-        freedom,
-        null,
-      ),
+  const gravity = { value: flight.gravity, se: errorOf(account, (theta) => theta[g]!) };
+  add('gravity', gravity, null);
+  if (view.scale) {
+    const ratio = metresPerSecond2(1, view) / view.expectedGravity;
+    add(
+      'gravity-scale',
+      { value: gravity.value * ratio, se: gravity.se * ratio },
+      { expected: 1, tolerance: tolerances.gravity.from, kind: 'gravity-off-scale' },
     );
   }
-  return out.filter((measure) => [measure.value, measure.low, measure.high].every(Number.isFinite));
+  if (view.flights.length < 2) return;
+  add('gravity-ratio', gravityRatio(view, flight), {
+    expected: 1,
+    tolerance: tolerances.gravity.from,
+    kind: 'gravity-changes',
+  });
+}
+
+/** Gravity of one flight over that of the others. */
+function gravityRatio(view: TrackView, flight: FlightView): Estimated | null {
+  const { account } = view;
+  const { fault } = account;
+  if (fault?.kind === 'gravity') {
+    if (fault.span !== flight.span) return null;
+    const ratio = (theta: Float64Array) => theta[1]! / theta[0]!;
+    return { value: ratio(account.fit.theta), se: errorOf(account, ratio) };
+  }
+  const step = stepFrom(account, view, { kind: 'gravity', span: flight.span }, 1);
+  const others = account.fit.theta[0]!;
+  return step && { value: step.value / others, se: step.se / others };
+}
+
+/** One shape number of a flight: the fitted one when the chosen account carries it, else one step away from that account. */
+function shapeNumber(view: TrackView, flight: FlightView, name: ShapeName): Estimated | null {
+  const { account, contest } = view;
+  const { fault, fit } = account;
+  const here = fault?.kind === 'shape' && fault.span === flight.span;
+  if (here && (fault.name === name || (fault.name === 'power' && name.startsWith('power')))) {
+    return { value: fit.theta[fit.path.shapeAt]!, se: errorOf(account, (theta) => theta[fit.path.shapeAt]!) };
+  }
+  const base = here ? contest.clean : account;
+  return stepFrom(base, view, { kind: 'shape', name, span: flight.span });
+}
+
+function stepFrom(base: Account, view: TrackView, fault: Fault, at?: number): Estimated | null {
+  const { path, theta, knots } = base.fit;
+  const sketch = sketchFrom(path, theta, knots);
+  if ('span' in fault && sketch.spans[fault.span]?.kind !== 'flight') return null;
+  const depth: [number, number] = base.depth ? [theta[path.depthAt]!, theta[path.depthAt + 1]!] : [0, 0];
+  const start = pathOf(sketch, fault, base.depth, view.field, { depth });
+  const samples = { ...view.field.samples, weight: base.weight };
+  const step = fitStep(start.path, start.theta, samples, at ?? start.path.shapeAt);
+  return (
+    step && { value: step.value, se: step.unit * Math.sqrt(base === view.account ? view.account.noise2 : base.noise2) }
+  );
 }

@@ -42,7 +42,11 @@ export interface Path {
 }
 
 /** Lays out the parameters of a path whose spans are known. `fixed` are the times of the two outer knots. */
-export function layOut(spans: Span[], fixed: { start: number; end: number }, options: Partial<Path> = {}): Path {
+export function layOut(
+  spans: Span[],
+  fixed: { start: number; end: number; pins?: readonly (number | null)[] },
+  options: Partial<Path> = {},
+): Path {
   const knots = spans.length + 1;
   const gravities = 1 + spans.reduce((most, span) => Math.max(most, span.gravity), 0);
   const path: Path = {
@@ -67,7 +71,9 @@ export function layOut(spans: Span[], fixed: { start: number; end: number }, opt
   for (let k = 0; k < knots; k += 1) {
     const before = spans[k - 1];
     const after = spans[k];
-    if (before && after) path.timeAt[k] = path.size++;
+    const pin = fixed.pins?.[k] ?? null;
+    if (before && after && pin === null) path.timeAt[k] = path.size++;
+    if (pin !== null) path.fixedTime[k] = pin;
     const followsRest = before?.kind === 'rest';
     if (!followsRest) path.xAt[k] = path.size++;
     const level = before?.kind === 'roll' && !(options.depthAt !== undefined && options.depthAt >= 0);

@@ -11,8 +11,18 @@ export interface Shape {
   openStart: boolean;
   openEnd: boolean;
 }
-export type ShapeName = 'apex' | 'power' | 'hang' | 'hang-up' | 'ease' | 'even-path' | 'even-steps';
+export type ShapeName =
+  | 'apex'
+  | 'power'
+  | 'power-rise'
+  | 'power-fall'
+  | 'hang'
+  | 'hang-up'
+  | 'ease'
+  | 'even-path'
+  | 'even-steps';
 
+/** The shapes that compete; the one-sided powers are only measured. */
 export const SHAPE_NAMES: readonly ShapeName[] = [
   'ease',
   'even-path',
@@ -26,6 +36,8 @@ export const SHAPE_NAMES: readonly ShapeName[] = [
 export const SHAPE_NOTHING: Record<ShapeName, number> = {
   apex: 0,
   power: 2,
+  'power-rise': 2,
+  'power-fall': 2,
   hang: 0,
   'hang-up': 0,
   ease: 0,
@@ -37,6 +49,8 @@ export const SHAPE_NOTHING: Record<ShapeName, number> = {
 export const SHAPE_STARTS: Record<ShapeName, readonly { base: number; steps: number }[]> = {
   apex: [{ base: 0, steps: 0 }],
   power: [{ base: 2, steps: 0 }],
+  'power-rise': [{ base: 2, steps: 0 }],
+  'power-fall': [{ base: 2, steps: 0 }],
   hang: [
     { base: 0, steps: 1 },
     { base: 0, steps: 3.5 },
@@ -78,8 +92,11 @@ export function warpTime(
       else wy = apex + ((u - shifted) * (length - apex)) / (length - shifted);
       break;
     }
-    case 'power': {
+    case 'power':
+    case 'power-rise':
+    case 'power-fall': {
       const side = u < apex ? -1 : 1;
+      if (shape.name === (side < 0 ? 'power-fall' : 'power-rise')) break;
       const reach = reachOf(shape, side, length, apex);
       const share = Math.abs(u - apex) / reach;
       wy = apex + side * reach * share ** (value / 2);

@@ -1,6 +1,7 @@
 import type { Knots, Path, Span } from './path.ts';
 import { layOut } from './path.ts';
 import type { Fault, Field } from './account.ts';
+import { isPinned } from './hand.ts';
 import type { Shape } from './shapes.ts';
 import { SHAPE_NOTHING } from './shapes.ts';
 import type { Stretch } from './spans.ts';
@@ -83,7 +84,13 @@ export function pathOf(
   const delay = inserted > 0 ? drawings[inserted]!.t - drawings[inserted - 1]!.t : 0;
   const path = layOut(
     spans,
-    { start: knots.t[0]!, end: samples.t[samples.t.length - 1]! - delay },
+    {
+      start: knots.t[0]!,
+      end: samples.t[samples.t.length - 1]! - delay,
+      pins: field.hand.pins.length
+        ? Array.from(knots.t, (time, k) => (k > 0 && k <= last && isPinned(field.hand, time) ? time : null))
+        : [],
+    },
     {
       shape,
       depthAt: depth ? 0 : -1,

@@ -1,5 +1,6 @@
 import type { Account, Fault, Field } from './account.ts';
 import { fitOnce, trim } from './account.ts';
+import { keepsHand } from './honour.ts';
 import { SHAPE_NAMES, SHAPE_STARTS } from './shapes.ts';
 import type { Sketch } from './sketch.ts';
 import { flightLast, pathOf, recast, restFirst, restLast, rollFirst, sketchFrom, withoutKnot } from './sketch.ts';
@@ -47,7 +48,7 @@ export function restructure(account: Account, field: Field, full: Float64Array):
 function rolls(account: Account, field: Field): Account | null {
   const { path, theta, knots } = account.fit;
   const sketch = rollFirst(sketchFrom(path, theta, knots), 0.4, field);
-  if (!sketch || !(misfits(account, field) || bendsFirst(account))) return null;
+  if (!sketch || !keepsHand(sketch, field) || !(misfits(account, field) || bendsFirst(account))) return null;
   const [flat, deep] = [false, true].map((depth) => {
     return trim(fitOnce(pathOf(sketch, null, depth, field), null, depth, account.weight, field), field);
   });
@@ -113,7 +114,7 @@ function optionsFor(account: Account, field: Field): Option[] {
       }
     }
   }
-  return options;
+  return options.filter((option) => keepsHand(option.sketch, field));
 }
 
 /** Whether an account leaves more unexplained than noise does. */

@@ -3,6 +3,7 @@ import { shownFrame } from '../reading/document.ts';
 import type { Tolerances } from '../reading/tolerances.ts';
 import type { Account, Field } from './account.ts';
 import type { Contest } from './compete.ts';
+import { isUnfree } from './faults.ts';
 
 /** One flight as the findings and measures see it. Times here are local (frames after the first drawing). */
 export interface FlightView {
@@ -39,6 +40,10 @@ export interface TrackView {
   hold: number;
   fps: FrameRate;
   scale: { pxPerMetre: number } | null;
+  /** What the production's gravity is, m/s². */
+  expectedGravity: number;
+  /** A light thing: air slows it, so that its gravity is not judged. */
+  light: boolean;
 }
 
 /** Document frame of a local time. */
@@ -57,7 +62,7 @@ export function framesOf(view: TrackView, flight: FlightView): { from: number; t
 }
 
 /** The flights of an account, named after the object: A1, A2, … */
-export function flightsOf(id: string, account: Account): FlightView[] {
+export function flightsOf(id: string, account: Account, field: Field): FlightView[] {
   const { path, knots, theta } = account.fit;
   const out: FlightView[] = [];
   const last = path.spans.length - 1;
@@ -82,7 +87,7 @@ export function flightsOf(id: string, account: Account): FlightView[] {
       apex: moving / 2 - (knots.y[k + 1]! - knots.y[k]!) / (moving * gravity) + held / 2,
       held,
       gravity,
-      judged: true,
+      judged: !isUnfree(field, start, end),
     });
   });
   return out;

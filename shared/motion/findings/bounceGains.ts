@@ -1,53 +1,39 @@
-import { percent } from '../words.ts';
+import { boundsOf, reboundOf } from '../bounces.ts';
 import { shownAt } from '../view.ts';
+import { percent } from '../words.ts';
 import type { FindingRule } from './rule.ts';
 import { severityOf } from './rule.ts';
 
-/** A rebound rises higher than the bounce before allows. */
+/** A rebound rises higher than the fall before it allows; twice running is strong however little it gains. */
 export const bounceGains: FindingRule = {
   kind: 'bounce-gains',
   find(view) {
-    const { account, flights } = view;
-    if (account.depth) return [];
-    return flights.flatMap((flight, index) => {
-      const before = flights[index - 1];
-      if (!before || before.span !== flight.span - 1 || flight.apex <= 0 || flight.apex >= flight.length) return [];
-      const fallen = before.gravity * (before.length - Math.max(0, before.apex)) ** 2;
-      const risen = flight.gravity * flight.apex ** 2;
-      const ratio = risen / fallen;
-      if (!(ratio > 1)) return [];
-      const error = ratioError(view.account, before, flight);
-      const { from, visible, strong } = view.tolerances.bounceGain;
-      const severity = severityOf(ratio - 1, error, account.freedom, {
-        from: from - 1,
-        visible: visible - 1,
-        strong: strong - 1,
-      });
-      if (!severity) return [];
+    const { bounceGain } = view.tolerances;
+    const band = {
+      from: boundsOf(bounceGain).tolerance,
+      visible: bounceGain.visible - 1,
+      strong: bounceGain.strong - 1,
+    };
+    let running = 0;
+    return view.flights.flatMap((flight) => {
+      const height = reboundOf(view, flight)?.height;
+      const severity =
+        height && height.value > 1 ? severityOf(height.value - 1, height.se, view.account.freedom, band) : null;
+      running = severity ? running + 1 : 0;
+      if (!height || !severity) return [];
       return [
         {
           kind: 'bounce-gains' as const,
           flight,
           from: flight.start,
           to: flight.end,
-          severity,
+          severity: running > 1 ? 'strong' : severity,
           title: 'Bounces higher than it fell',
           detail:
-            `The rebound at frame ${shownAt(view, flight.start)} rises ${percent(ratio - 1)} higher than the fall before it. ` +
-            `Lower the apex to below the one before, and give the flight fewer frames to match.`,
+            `The rebound at frame ${shownAt(view, flight.start)} rises ${percent(height.value - 1)} higher than the fall before it, as if something pushed. ` +
+            `Lower the apex to no more than the one before, and let the flight end sooner to match.`,
         },
       ];
     });
   },
 };
-
-function ratioError(
-  account: { noise2: number },
-  before: { length: number; gravity: number },
-  after: { length: number; gravity: number },
-): number {
-  const noise = Math.sqrt(account.noise2);
-  const one = noise / Math.max(1, (before.gravity * before.length ** 2) / 8);
-  const two = noise / Math.max(1, (after.gravity * after.length ** 2) / 8);
-  return 1.2 * Math.hypot(one, two);
-}

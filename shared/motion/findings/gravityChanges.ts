@@ -1,3 +1,4 @@
+import { errorOf } from '../errors.ts';
 import { digits, percent } from '../words.ts';
 import type { FindingRule } from './rule.ts';
 import { severityOf } from './rule.ts';
@@ -8,20 +9,13 @@ export const gravityChanges: FindingRule = {
   find(view) {
     const { account } = view;
     const { fault, fit } = account;
-    if (fault?.kind !== 'gravity') return [];
+    if (fault?.kind !== 'gravity' || view.light) return [];
     const flight = view.flights.find((one) => one.span === fault.span);
     if (!flight) return [];
     const own = fit.theta[1]!;
     const others = fit.theta[0]!;
     const ratio = own / others;
-    const p = fit.path.size;
-    const c = account.covariance;
-    const error = c
-      ? ratio *
-        Math.sqrt(
-          Math.max(0, account.noise2 * (c[p + 1]! / own ** 2 + c[0]! / others ** 2 - (2 * c[1]!) / (own * others))),
-        )
-      : Infinity;
+    const error = errorOf(account, (theta) => theta[1]! / theta[0]!);
     const size = Math.max(ratio, 1 / ratio) - 1;
     const severity = severityOf(size, error / Math.min(1, ratio * ratio), account.freedom, view.tolerances.gravity);
     if (!severity) return [];

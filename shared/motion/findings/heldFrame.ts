@@ -1,6 +1,6 @@
+import { isRepeat } from '../scatter.ts';
 import { shownAt } from '../view.ts';
 import type { Draft, FindingRule } from './rule.ts';
-import { isRepeat } from './rule.ts';
 
 /** A drawing is repeated where the pattern around it moves on. */
 export const heldFrame: FindingRule = {

@@ -1,8 +1,9 @@
 import { digits, percent } from '../words.ts';
 import { shownAt } from '../view.ts';
+import { isRepeat, localStep } from '../scatter.ts';
 import type { TrackView } from '../view.ts';
 import type { Draft, FindingRule } from './rule.ts';
-import { isRepeat, severityOf } from './rule.ts';
+import { severityOf } from './rule.ts';
 
 /** One drawing sits off the arc the others agree on. */
 export const pop: FindingRule = {
@@ -20,9 +21,7 @@ export const pop: FindingRule = {
       const dx = xs[i]! - samples.x[i]!;
       const dy = ys[i]! - samples.y[i]!;
       const off = Math.hypot(dx, dy);
-      const before = Math.max(0, i - 1);
-      const after = Math.min(xs.length - 1, i + 1);
-      const step = Math.hypot(xs[after]! - xs[before]!, ys[after]! - ys[before]!) / Math.max(1, after - before);
+      const step = localStep(view, i);
       const noise = Math.sqrt(account.noise2);
       const least = Math.max(1, 4 * noise, tolerances.pop.from * step);
       if (off < least) continue;

@@ -1,6 +1,7 @@
 import type { FindingKind, Severity } from '../../reading/kinds.ts';
 import type { Band } from '../../reading/tolerances.ts';
 import type { Account } from '../account.ts';
+import { errorOf } from '../errors.ts';
 import { Z95_ONE, studentQuantile } from '../statistics.ts';
 import type { FlightView, TrackView } from '../view.ts';
 
@@ -41,21 +42,5 @@ export function shapeOn(
   const { fault, fit } = account;
   if (fault?.kind !== 'shape' || fault.span !== flight.span || !names.includes(fault.name)) return null;
   const at = fit.path.shapeAt;
-  const error = account.covariance
-    ? Math.sqrt(Math.max(0, account.covariance[at * fit.path.size + at]!) * account.noise2)
-    : Infinity;
-  return { value: fit.theta[at]!, error };
-}
-
-/** Whether a drawing that lies off the arc is the drawing before it once more, within noise and well short of a step. */
-export function isRepeat(view: TrackView, drawing: number): boolean {
-  const { samples } = view.field;
-  const { xs, ys } = view.account.fit;
-  if (drawing === 0) return false;
-  const moved = Math.hypot(
-    samples.x[drawing]! - samples.x[drawing - 1]!,
-    samples.y[drawing]! - samples.y[drawing - 1]!,
-  );
-  const due = Math.hypot(xs[drawing]! - xs[drawing - 1]!, ys[drawing]! - ys[drawing - 1]!);
-  return moved < Math.max(0.5, Math.min(4.5 * Math.sqrt(view.account.noise2), 0.3 * due)) && due > 2 * moved;
+  return { value: fit.theta[at]!, error: errorOf(account, (theta) => theta[at]!) };
 }

@@ -2,6 +2,7 @@ import { acrossUneven } from './acrossUneven.ts';
 import { apexOffCentre } from './apexOffCentre.ts';
 import { bounceGains } from './bounceGains.ts';
 import { gravityChanges } from './gravityChanges.ts';
+import { gravityOffScale } from './gravityOffScale.ts';
 import { hang } from './hang.ts';
 import { heldFrame } from './heldFrame.ts';
 import { pop } from './pop.ts';
@@ -17,6 +18,7 @@ export const FINDING_RULES: readonly FindingRule[] = [
   acrossUneven,
   spacingOffPath,
   gravityChanges,
+  gravityOffScale,
   pop,
   heldFrame,
   bounceGains,

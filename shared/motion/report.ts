@@ -1,0 +1,47 @@
+import type { Finding, ReadObject } from '../reading/document.ts';
+import { FINDING_RULES } from './findings/table.ts';
+import { isPinned } from './hand.ts';
+import { chartOf, mendOf } from './mend.ts';
+import type { TrackView } from './view.ts';
+import { frameOf, framesOf } from './view.ts';
+
+/** The findings of a track, in the order of the table, with their mends and timing charts. */
+export function findingsOf(view: TrackView): Finding[] {
+  return FINDING_RULES.flatMap((rule) => rule.find(view))
+    .filter((draft) => draft.flight.judged)
+    .map((draft) => {
+      const whole = framesOf(view, draft.flight);
+      const from = Math.max(whole.from, Math.floor(frameOf(view, draft.from)));
+      const to = Math.min(whole.to, Math.ceil(frameOf(view, draft.to)));
+      return {
+        id: `${draft.flight.id}-${draft.kind}-${from}`,
+        kind: draft.kind,
+        object: view.id,
+        flight: draft.flight.id,
+        fromFrame: from,
+        toFrame: Math.max(from, to),
+        severity: draft.severity,
+        title: draft.title,
+        detail: draft.detail,
+        mend: mendOf(view, draft),
+        chart: draft.move ? [] : chartOf(view, draft.flight),
+      };
+    });
+}
+
+/** Where two spans meet: bounces, take-offs, landings, edges. A thing that is let go touches nothing, so that is no contact. */
+export function contactsOf(view: TrackView, centre: { x: number; y: number }): ReadObject['contacts'] {
+  const { path, knots } = view.account.fit;
+  const out: ReadObject['contacts'] = [];
+  for (let k = 1; k < path.spans.length; k += 1) {
+    const released = path.spans[k - 1]!.kind === 'rest' && path.spans[k]!.tangent;
+    if (released) continue;
+    out.push({
+      frame: frameOf(view, knots.t[k]!),
+      x: knots.x[k]! + centre.x,
+      y: knots.y[k]! + centre.y,
+      origin: isPinned(view.field.hand, knots.t[k]!) ? 'hand' : 'read',
+    });
+  }
+  return out;
+}
