@@ -33,6 +33,7 @@ globalThis.ResizeObserver ??= class {
 Object.defineProperty(HTMLElement.prototype, 'clientWidth', { configurable: true, get: () => 1046 });
 Object.defineProperty(HTMLElement.prototype, 'clientHeight', { configurable: true, get: () => 352 });
 Element.prototype.scrollTo ??= () => {};
+Element.prototype.scrollIntoView ??= () => {};
 
 beforeEach(() => screenOf(1440));
 

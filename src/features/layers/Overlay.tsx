@@ -42,8 +42,21 @@ function stageBounds(objects: readonly DrawnObject[], room: number): Box {
 
 /** All layers in SVG and picture px: whatever the zoom, lines and words keep their size on the screen and stay sharp. */
 export function Overlay(props: OverlayProps) {
-  const { objects, findings, firstFrame, playhead, picture, layers, view, seen, room, mend, chosenFinding, beside } =
-    props;
+  const {
+    objects,
+    findings,
+    firstFrame,
+    playhead,
+    picture,
+    layers,
+    view,
+    seen,
+    room,
+    mend,
+    chosenFinding,
+    objectId,
+    beside,
+  } = props;
   const unit = 1 / view.scale;
   const rails = useMemo(() => {
     const away = beside ? RAIL_AWAY : -RAIL_INSET;
@@ -70,6 +83,7 @@ export function Overlay(props: OverlayProps) {
     [objects, firstFrame, unit, bounds, hasFindings, badges],
   );
   const mended = findings.find((finding) => finding.id === mend);
+  const measured = useMemo(() => objects.filter((object) => object.id === objectId), [objects, objectId]);
   const shared = { objects, findings, firstFrame, playhead, unit, bounds };
   const sheet = {
     width: room.width,
@@ -91,7 +105,7 @@ export function Overlay(props: OverlayProps) {
         {layers.has('ladders') &&
           LADDERS.map((along) => (
             <StageGroup key={along} {...stage} along={along}>
-              <LadderLayer {...shared} along={along} rails={rails} withTrue={layers.has('arc')} />
+              <LadderLayer {...shared} objects={measured} along={along} rails={rails} withTrue={layers.has('arc')} />
             </StageGroup>
           ))}
         <StageGroup {...stage}>
@@ -106,7 +120,7 @@ export function Overlay(props: OverlayProps) {
         {layers.has('ladders') &&
           LADDERS.map((along) => (
             <StageGroup key={along} {...stage} along={along}>
-              <LitTick {...shared} along={along} rails={rails} />
+              <LitTick {...shared} objects={measured} along={along} rails={rails} />
             </StageGroup>
           ))}
         <StageGroup {...stage}>

@@ -24,6 +24,8 @@ export interface PictureStageProps {
   /** With its points on the stage. Null while there is none: the bare picture is shown. */
   reading: Reading | null;
   findings: readonly NumberedFinding[];
+  /** The thing whose spacing the ladders show. */
+  objectId: string | null;
   layers: ReadonlySet<Layer>;
   playhead: Playhead;
   chosenFinding: string | null;

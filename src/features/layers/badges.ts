@@ -21,13 +21,19 @@ export function apexLevel(flight: Flight, unit: number): number | null {
   return should && flight.apex ? Math.min(should.y, flight.apex.y) - 24 * unit : null;
 }
 
-function wishOf(finding: NumberedFinding, object: DrawnObject, unit: number) {
+/** Where a badge of a width wants to stand: at the outer side of an apex gap, else at the drawing that is off most. */
+function wishOf(finding: NumberedFinding, object: DrawnObject, width: number, unit: number, bounds: Box) {
   const flight = object.flights.find((one) => one.id === finding.flight);
   const should = flight && trueApex(flight.trueArc);
   const level = flight ? apexLevel(flight, unit) : null;
   if (finding.kind === 'apex-off-centre' && flight?.apex && should && level !== null) {
-    const prefer = flight.apex.x < should.x ? ('left' as const) : ('right' as const);
-    return { x: flight.apex.x, y: level, away: 8 * unit, prefer };
+    const away = 8 * unit;
+    const left = Math.min(flight.apex.x, should.x);
+    const right = Math.max(flight.apex.x, should.x);
+    const goesRight = flight.apex.x > should.x;
+    const fits = goesRight ? right + away + width <= bounds.left + bounds.width : left - away - width >= bounds.left;
+    const prefer = goesRight === fits ? ('right' as const) : ('left' as const);
+    return { x: prefer === 'right' ? right : left, y: level, away, prefer };
   }
   const under = drawingsUnder(finding, object.drawings);
   const longest = finding.mend.toSorted((a, b) => Math.hypot(b.dx, b.dy) - Math.hypot(a.dx, a.dy))[0];
@@ -52,13 +58,14 @@ export function placeBadges(
 ): Badge[] {
   const wanted = findings.flatMap((finding) => {
     const object = objects.find((one) => one.id === finding.object);
-    const wish = object && wishOf(finding, object, unit);
-    if (!object || !wish) return [];
+    if (!object) return [];
     const words = calloutOf(
       finding,
       object.flights.find((one) => one.id === finding.flight),
     );
     const width = (BADGE + (words ? words.length * CALLOUT_CHARACTER + 8 : 0)) * unit;
+    const wish = wishOf(finding, object, width, unit, bounds);
+    if (!wish) return [];
     return [{ finding, words, request: { key: finding.id, ...wish, width, height: BADGE * unit, must: true } }];
   });
   const places = placeLabels(

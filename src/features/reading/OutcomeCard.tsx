@@ -8,14 +8,22 @@ export function outcomeOf(reading: Pick<Reading, 'objects'>): Outcome {
   return outcomes.includes('read') ? 'read' : (outcomes[0] ?? 'no-motion');
 }
 
+interface OutcomeCardProps {
+  outcome: Exclude<Outcome, 'read'>;
+  /** What the reading itself says about it; it knows more than the general sentence. */
+  cautions: readonly string[];
+}
+
 /** Why a reading judges nothing, and the next step. */
-export function OutcomeCard({ outcome }: { outcome: Exclude<Outcome, 'read'> }) {
+export function OutcomeCard({ outcome, cautions }: OutcomeCardProps) {
   const { title, says, next } = OUTCOME_SENTENCES[outcome];
   return (
-    <Card className="px-4 py-3">
+    <Card className="space-y-1 px-4 py-3 text-sm">
       <h2 className="text-md">{title}</h2>
-      <p className="mt-1 text-sm">{says}</p>
-      <p className="mt-1 text-sm text-graphite">{next}</p>
+      {(cautions.length > 0 ? cautions : [says]).map((sentence) => (
+        <p key={sentence}>{sentence}</p>
+      ))}
+      <p className="text-graphite">{next}</p>
     </Card>
   );
 }

@@ -1,10 +1,16 @@
 import { type Finding, type Flight, shownFrame } from '../../../shared/reading/document.ts';
 import { decimalsFor, shownNumber } from '../../lib/honestDigits.ts';
 
-/** "frames 1003 – 1023", in the production's numbers; an end outside the strip is left open. */
-export function flightSpan(flight: Pick<Flight, 'takeOff' | 'landing'>, firstFrame: number): string {
-  const shown = (frame: number | null) => (frame === null ? '…' : String(shownFrame(Math.round(frame), firstFrame)));
-  return `frames ${shown(flight.takeOff)} – ${shown(flight.landing)}`;
+/**
+ * "frames 1003 – 1023", in the production's numbers. An end that lies outside the strip is marked by dots at the last drawing
+ * that is there.
+ */
+export function flightSpan(flight: Pick<Flight, 'takeOff' | 'landing' | 'trueArc'>, firstFrame: number): string {
+  const shown = (frame: number | undefined) =>
+    frame === undefined ? '' : String(shownFrame(Math.round(frame), firstFrame));
+  const from = flight.takeOff === null ? `…${shown(flight.trueArc[0]?.frame)}` : shown(flight.takeOff);
+  const to = flight.landing === null ? `${shown(flight.trueArc.at(-1)?.frame)}…` : shown(flight.landing);
+  return `frames ${from} – ${to}`;
 }
 
 /** A side of a flight shorter than this many frames is none. */

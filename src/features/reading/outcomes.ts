@@ -20,6 +20,6 @@ export const OUTCOME_SENTENCES: Record<Exclude<Outcome, 'read'>, { title: string
   'not-judged': {
     title: 'Measured, not judged',
     says: 'Its marks and its spacing are shown, and nothing is called a fault.',
-    next: 'What is missing for a judgement stands under the cautions.',
+    next: 'Look at the spacing in the score, and at the path on the picture.',
   },
 };

@@ -35,7 +35,7 @@ export function FindingsLane({ findings, columns, range, firstFrame, chosen, onC
       {findings.map((finding, index) => {
         if (finding.toFrame < range.from || finding.fromFrame > range.to) return null;
         const left = (finding.fromFrame - 1) * columns.width;
-        const width = (finding.toFrame - finding.fromFrame + 1) * columns.width;
+        const width = Math.max(1, finding.toFrame - finding.fromFrame + 1) * columns.width;
         const from = shownFrame(finding.fromFrame, firstFrame);
         const to = shownFrame(finding.toFrame, firstFrame);
         return (

@@ -36,7 +36,7 @@ const Thumbs = memo(function Thumbs({
 }: Omit<StripLaneProps, 'range' | 'playhead' | 'missing'> & FrameRange) {
   const digits = String(shownFrame(columns.frames, firstFrame)).length;
   const every = Math.ceil((digits * DIGIT) / columns.width);
-  const width = columns.width - 4;
+  const width = Math.min(columns.width - 4, THUMB * aspect);
   return Array.from({ length: to - from + 1 }, (_, index) => from + index).map((frame) => (
     <div
       key={frame}

@@ -21,7 +21,9 @@ export function NoteBox({ draft, label, placeholder, send, focused = false, onSe
   const box = useRef<HTMLTextAreaElement>(null);
   const id = useId();
   useEffect(() => {
-    if (focused) box.current?.focus({ preventScroll: false });
+    if (!focused) return;
+    box.current?.focus({ preventScroll: true });
+    box.current?.form?.scrollIntoView({ block: 'nearest' });
   }, [focused]);
 
   const submit = (event?: FormEvent) => {
@@ -39,7 +41,7 @@ export function NoteBox({ draft, label, placeholder, send, focused = false, onSe
   const left = MOST - draft.text.length;
   const active = focused || draft.text.length > 0;
   return (
-    <form onSubmit={submit} className="flex flex-wrap items-end gap-2 py-1.5">
+    <form onSubmit={submit} className="flex scroll-mb-6 flex-wrap items-end gap-2 py-1.5">
       <label htmlFor={id} className="sr-only">
         {label}
       </label>

@@ -9,6 +9,7 @@ import { ErrorNote } from '../../components/ErrorNote.tsx';
 import { PegBar } from '../../features/layers/PegBar.tsx';
 import { PictureStage } from '../../features/layers/PictureStage.tsx';
 import { FrameNumber, PlayControl } from '../../features/playhead/PlayControl.tsx';
+import { outcomeOf } from '../../features/reading/OutcomeCard.tsx';
 import { ReviewActions, whyNot } from '../../features/review/ReviewActions.tsx';
 import { TakeMenu } from '../../features/review/TakeMenu.tsx';
 import { Score } from '../../features/score/Score.tsx';
@@ -135,6 +136,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
               picture={picture}
               reading={staged}
               findings={findings.findings}
+              objectId={objectId}
               layers={layers}
               playhead={playhead}
               chosenFinding={findings.chosen}
@@ -154,7 +156,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
             findings={findings.findings}
             chosenFinding={findings.chosen}
             onChooseFinding={findings.choose}
-            none="Nothing is off"
+            none={reading && outcomeOf(reading) === 'read' ? 'Nothing is off' : 'Nothing was judged'}
             pins={talk.pins}
             openPin={talk.openPin}
             onOpenPin={talk.togglePin}
@@ -182,7 +184,10 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
           )}
         </div>
       </div>
-      <div className="fixed inset-x-0 bottom-0 z-30 flex gap-2 border-t border-rule bg-sheet px-3.5 py-2.5 md:hidden">
+      <div
+        hidden={talk.isWriting}
+        className="fixed inset-x-0 bottom-0 z-30 flex gap-2 border-t border-rule bg-sheet px-3.5 py-2.5 md:hidden [&[hidden]]:hidden"
+      >
         {mayWrite && (
           <Button className="flex-1 px-2" aria-label="Write a note" onClick={startNote}>
             Note

@@ -29,7 +29,7 @@ export function TakeHead({ slug, take, title, latest, whyNot, menu, children }: 
       <title>{`${take.shotNumber} ${title ?? ''}, take ${take.number} · Spandrel`}</title>
       <Link
         to={paths.sheet(slug)}
-        className="inline-flex items-center font-mono text-sm text-graphite no-underline hover:underline touch:min-h-11"
+        className="inline-flex items-center font-mono text-sm text-graphite no-underline hover:underline touch:-my-2 touch:min-h-11"
       >
         {take.shotNumber}
       </Link>
@@ -44,7 +44,7 @@ export function TakeHead({ slug, take, title, latest, whyNot, menu, children }: 
       {latest > take.number && (
         <Link
           to={paths.take(slug, take.shotNumber, latest)}
-          className="inline-flex items-center font-semibold touch:min-h-11"
+          className="inline-flex items-center font-semibold touch:-my-2 touch:min-h-11"
         >
           Take {latest} is newer
         </Link>

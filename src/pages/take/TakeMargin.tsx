@@ -58,7 +58,7 @@ export function TakeMargin({ slug, take, shot, actor, reading, error, onRetry, f
           {sentenceOf(error)}
         </ErrorNote>
       )}
-      {outcome && outcome !== 'read' && <OutcomeCard outcome={outcome} />}
+      {reading && outcome && outcome !== 'read' && <OutcomeCard outcome={outcome} cautions={reading.cautions} />}
       {reading && hasFlights && <FlightList reading={reading} findings={findings.findings} />}
       {reading && (
         <FindingsCard
@@ -70,7 +70,7 @@ export function TakeMargin({ slug, take, shot, actor, reading, error, onRetry, f
           onShowMend={findings.showMend}
         />
       )}
-      {reading && <Cautions cautions={reading.cautions} />}
+      {reading && outcome === 'read' && <Cautions cautions={reading.cautions} />}
       {shot && <TakesCard slug={slug} takes={shot.takes} currentId={take.id} />}
     </aside>
   );

@@ -62,6 +62,7 @@ export function useThreads(take: Take, me: Person, playhead: Playhead, frameAske
     pins,
     writing,
     hanging,
+    isWriting: hanging?.kind === 'new' && hanging.writing,
     openPin: openId ?? (hanging?.kind === 'new' ? `new-${hanging.frame}` : null),
     togglePin: (key: string) => {
       const fresh = newPins.find((note) => `new-${note.frame}` === key);

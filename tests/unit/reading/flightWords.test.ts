@@ -23,7 +23,7 @@ describe('the sentence of a flight', () => {
 
   it('keeps silent about an end that lies outside the strip', () => {
     expect(flightSentence(buildFlight(frames, { takeOff: null }), [])).toBe('Reads true.');
-    expect(flightSpan(buildFlight(frames, { takeOff: null }), 1001)).toBe('frames … – 1023');
+    expect(flightSpan(buildFlight(frames, { takeOff: null }), 1001)).toBe('frames …1003 – 1023');
   });
 
   it('says that nothing was judged where someone said that it does not fly free', () => {
