@@ -27,7 +27,7 @@ const BETTER = 0.94;
 export function settle(track: FoundTrack): Placed[] {
   let usual = usualSizes(track);
   let offs = offsOf(track, usual);
-  const round = isRound(track, oddOnes(offs));
+  const round = isRound(track, oddOnes(offs), usual);
   if (!round) {
     // What turns in space changes its size by itself, but not from one frame to the next.
     usual = track.local.map((area) => ({ area, smear: { x: 0, y: 0 } }));
@@ -152,10 +152,18 @@ function medianLine(times: number[], values: number[]): { slope: number; at: num
   return { slope, time, at: median(values.map((value, k) => value - slope * (times[k] - time))) };
 }
 
-/** True for a disc, also one that is smeared along its way: short across, and everywhere as a disc moved along would be. */
-function isRound(track: FoundTrack, odd: boolean[]): boolean {
-  const errors = track.shapes.filter((_, k) => !odd[k] && track.path[k].onEdge === 0).map(offDisc);
-  return errors.length >= 3 && median(errors) < 0.012;
+/** How much longer than wide a disc looks that is smeared too little to tell, log of the ratio. */
+const LONGEST_STILL = 0.08;
+
+/**
+ * True for a disc, also one that is smeared along its way: short across, and everywhere as a disc moved along would be.
+ * What does not smear and is longer than wide is an oval, and a disc laid over it would slide from end to end.
+ */
+function isRound(track: FoundTrack, odd: boolean[], usual: Usual[]): boolean {
+  const clear = track.shapes.filter((_, k) => !odd[k] && track.path[k].onEdge === 0);
+  if (clear.length < 3 || median(clear.map(offDisc)) >= 0.012) return false;
+  const smeared = usual.some(({ smear }) => smear.x !== 0 || smear.y !== 0);
+  return smeared || median(clear.map(({ long, short }) => Math.log(long / short))) < LONGEST_STILL;
 }
 
 /** Frames on which the radius of a disc is sought. */
