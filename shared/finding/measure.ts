@@ -79,7 +79,8 @@ export function measure(
   const limit = Math.max(threshold, EDGE_SHARE * peak);
   const mask = differences.map((value) => (value >= limit ? 1 : 0));
   const closing = Math.max(1, Math.min(4, Math.round(Math.min(width, height) / 24)));
-  const whole = silhouetteOf(mask, width, height, closing);
+  const tint = (pixels: number[]): number => meanDifference(frame, background, pixels);
+  const whole = silhouetteOf(mask, width, height, closing, tint);
   if (!whole) return null;
   const shadow = shadowMask(frame, background, mask);
   let shadowed = 0;
@@ -91,7 +92,7 @@ export function measure(
     if (shadow[at] === 1) shadowed++;
     else litMask[at] = 1;
   }
-  const lit = silhouetteOf(litMask, width, height, closing);
+  const lit = silhouetteOf(litMask, width, height, closing, tint);
   return {
     whole: placed(whole, frame),
     lit: lit && placed(lit, frame),
@@ -154,6 +155,16 @@ function shadowMask(frame: Cut, background: Cut, mask: Uint8Array): Uint8Array {
     if (offColour <= 4 + 0.05 * (ground / 3)) out[pixel] = 1;
   }
   return out;
+}
+
+function meanDifference(frame: Cut, background: Cut, pixels: number[]): number {
+  const sums = [0, 0, 0];
+  for (const at of pixels) {
+    for (let channel = 0; channel < 3; channel++) {
+      sums[channel] += frame.data[at * 3 + channel] - background.data[at * 3 + channel];
+    }
+  }
+  return Math.max(...sums.map(Math.abs)) / Math.max(1, pixels.length);
 }
 
 function medianInside(differences: Uint8Array, shape: Silhouette): number {
