@@ -12,18 +12,15 @@ export interface SketchStep {
   drawn: number;
   /** Where the true arc puts it; null outside a flight. */
   true: number | null;
-  /** A finding of this lane speaks of it. */
+  /** A finding of this lane speaks of it, and it leaves the true line. */
   off: boolean;
 }
 
 const ACROSS: ReadonlySet<FindingKind> = new Set(['across-uneven', 'spacing-off-path']);
-/** Findings that speak of a moment or of whole flights, not of single steps: their bars stay grey. */
-const WHOLE: ReadonlySet<FindingKind> = new Set([
-  'apex-off-centre',
-  'gravity-changes',
-  'gravity-off-scale',
-  'bounce-gains',
-]);
+/** These leave the line in both directions. */
+const BOTH: ReadonlySet<FindingKind> = new Set(['spacing-off-path', 'pop', 'held-frame']);
+/** A bar leaves its line when the gap is more than this share of the usual step along the arc, as in the score. */
+const LEAVES_BY = 0.1;
 
 /** Which of the two lanes carries the evidence of a sketch: that of its first finding. */
 export function laneOf(sketch: Sketch): SketchLane {
@@ -59,18 +56,23 @@ export function sketchSteps(sketch: Sketch, lane: SketchLane): SketchStep[] {
     const arc = arcs.find(({ points }) => covers(points, left) && covers(points, drawing.frame));
     const from = arc && arcAt(arc.points, left);
     const to = arc && arcAt(arc.points, drawing.frame);
+    const drawn = along(before, drawing);
+    const should = from && to ? along(from, to) : null;
+    const leaves = should === null || Math.abs(drawn - should) > LEAVES_BY * (arc ? usualStep(arc.points) : 0);
     return {
       frame: drawing.frame,
       shownFor: Math.min(usual, (drawings[index + 2]?.frame ?? Number.POSITIVE_INFINITY) - drawing.frame),
-      drawn: along(before, drawing),
-      true: from && to ? along(from, to) : null,
-      off: sketch.findings.some(
-        ({ kind, fromFrame, toFrame }) =>
-          !WHOLE.has(kind) &&
-          (lane === 'across') === ACROSS.has(kind) &&
-          left >= fromFrame &&
-          drawing.frame <= Math.max(toFrame, fromFrame + 1),
-      ),
+      drawn,
+      true: should,
+      off:
+        leaves &&
+        sketch.findings.some(
+          ({ kind, flight, fromFrame, toFrame }) =>
+            (flight === null || arcs.some((one) => one.flight === flight)) &&
+            (BOTH.has(kind) || (lane === 'across') === ACROSS.has(kind)) &&
+            left >= fromFrame &&
+            drawing.frame <= Math.max(toFrame, fromFrame + 1),
+        ),
     };
   });
 }
@@ -87,6 +89,18 @@ function drawingsOf(marks: Sketch['marks']): (Sketch['marks'][number] & { until:
     else drawings.push({ ...mark, until: mark.frame });
   }
   return drawings;
+}
+
+/** Length of the arc for each frame, px. */
+function usualStep(points: Sketch['arcs'][number]['points']): number {
+  const first = points[0];
+  const last = points.at(-1);
+  if (!first || !last || first.frame === last.frame) return 0;
+  const length = points.slice(1).reduce((sum, here, index) => {
+    const before = points[index]!;
+    return sum + Math.hypot(here.x - before.x, here.y - before.y);
+  }, 0);
+  return length / (last.frame - first.frame);
 }
 
 function covers(points: Sketch['arcs'][number]['points'], frame: number): boolean {

@@ -41,14 +41,27 @@ describe('the small lane of a card', () => {
     expect(hidden[1]?.true).toBeCloseTo(64, 6);
   });
 
-  test('marks the bars a finding speaks of, and no others', () => {
-    const steps = sketchSteps(buildSketch({ findings: [buildFinding({ fromFrame: 2, toFrame: 5 })] }), 'up');
-    expect(steps.filter((step) => step.off).map((step) => step.frame)).toEqual([3, 4, 5]);
+  test('marks the bars a finding speaks of where they leave the line, and no others', () => {
+    const { marks } = buildSketch();
+    // Frames 4 and 5 climb by the same amount; from 6 on every drawing is where it should be.
+    const drawn = marks.map((mark) => (mark.frame === 4 ? { ...mark, y: mark.y + 16 } : mark));
+    const sketch = buildSketch({ marks: drawn, findings: [buildFinding({ fromFrame: 2, toFrame: 8 })] });
+    expect(
+      sketchSteps(sketch, 'up')
+        .filter((step) => step.off)
+        .map((step) => step.frame),
+    ).toEqual([4, 5]);
+    const elsewhere = buildSketch({ marks: drawn, findings: [buildFinding({ fromFrame: 7, toFrame: 10 })] });
+    expect(sketchSteps(elsewhere, 'up').some((step) => step.off)).toBe(false);
   });
 
-  test('leaves the bars of a finding about the whole flight as they are', () => {
-    const finding = buildFinding({ kind: 'apex-off-centre', fromFrame: 2, toFrame: 10 });
-    expect(sketchSteps(buildSketch({ findings: [finding] }), 'up').some((step) => step.off)).toBe(false);
+  test('leaves bars grey that another lane speaks of', () => {
+    const { marks } = buildSketch();
+    const drawn = marks.map((mark) => (mark.frame === 4 ? { ...mark, y: mark.y + 16 } : mark));
+    const across = buildSketch({ marks: drawn, findings: [buildFinding({ kind: 'across-uneven', toFrame: 8 })] });
+    expect(sketchSteps(across, 'up').some((step) => step.off)).toBe(false);
+    const pop = buildSketch({ marks: drawn, findings: [buildFinding({ kind: 'pop', toFrame: 8 })] });
+    expect(sketchSteps(pop, 'up').some((step) => step.off)).toBe(true);
   });
 
   test('is the lane of the first finding', () => {
