@@ -33,11 +33,11 @@ export type Fault =
   | { kind: 'held'; drawing: number };
 
 /** Noise per axis taken for granted while the marks say nothing else, px, and how many marks' worth of belief it has. */
-const PRIOR_NOISE = 0.2;
-const PRIOR_FREEDOM = 2;
+const PRIOR_NOISE = 0.25;
+export const PRIOR_FREEDOM = 6;
 
 /** What each thing that an account assumes must gain, in squared units of noise. */
-const PRICE = { shape: 16, gravity: 9, held: 20, depth: 16 };
+const PRICE = { shape: 16, drag: 8, gravity: 9, held: 20, depth: 16 };
 const PARAMETER_PRICE = 5;
 
 /** Cost of a drawing that nothing explains: spread evenly over (60 px)², one in thirty. */
@@ -54,6 +54,10 @@ export interface Field {
   replicates: { sum: number; freedom: number };
   /** Frames from one drawing to the next, as most are. */
   step: number;
+  /** Whether air may slow a fall: the thing is light, or a scale says how fast it is. */
+  airy: boolean;
+  /** Whether a scale was given: it holds at one distance from the camera, so that there is no motion in depth. */
+  scaled: boolean;
   /** What someone set, in local time. */
   hand: Honoured;
   /** Noise per axis as neighbouring drawings show it, px. */
@@ -158,6 +162,7 @@ function judge(fit: PathFit, fault: Fault | null, depth: boolean, weight: Float6
 
 /** Price of a fault. Along a straight line up and down, even steps say no more than too straight a rise and fall. */
 function priceOf(fault: Fault, fit: PathFit): number {
+  if (fault.kind === 'shape' && fault.name === 'drag') return PRICE.drag;
   if (fault.kind !== 'shape' || !fault.name.startsWith('even')) return PRICE[fault.kind];
   const { knots, theta } = fit;
   const across = Math.abs(knots.x[fault.span + 1]! - knots.x[fault.span]!);

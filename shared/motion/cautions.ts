@@ -12,6 +12,7 @@ export function cautionsOf(view: TrackView): string[] {
     out.push(`${id} moves towards or away from the camera; that is taken out and not called a fault.`);
   }
   if (view.light) out.push(`${id} is a light thing that air slows: its gravity is not judged, its shape is.`);
+  if (isSlowedAcross(view)) out.push(`${id} slows across, as air slows a light thing; that is not called a fault.`);
   const stray = account.left.filter((i) => !isRepeat(view, i));
   if (stray.length > Math.max(3, field.drawings.length / 6)) {
     out.push(`${stray.length} drawings of ${id} follow no one arc; look at its marks before trusting this reading.`);
@@ -31,4 +32,10 @@ export function cautionsOf(view: TrackView): string[] {
     out.push(`${id} is still in the air at frame ${shownAt(view, last.end)}; its landing is not in the strip.`);
   }
   return out;
+}
+
+/** Whether a thing that air may slow loses speed across; a thing of the stage would be called uneven. */
+function isSlowedAcross(view: TrackView): boolean {
+  const { fault, fit } = view.account;
+  return view.field.airy && fault?.kind === 'shape' && fault.name === 'ease' && fit.theta[fit.path.shapeAt]! < 0;
 }

@@ -1,4 +1,5 @@
 import type { Account, Fault, Field } from './account.ts';
+import { PRIOR_FREEDOM } from './account.ts';
 import { fitStep } from './fit.ts';
 import type { ShapeName } from './shapes.ts';
 import { pathOf, sketchFrom } from './sketch.ts';
@@ -22,7 +23,7 @@ export function promising(clean: Account, field: Field): Promise[] {
   const base = sketchFrom(path, theta, knots);
   const samples = { ...field.samples, weight: clean.weight };
   const marks = 2 * (field.drawings.length - clean.left.length) + field.replicates.freedom;
-  const squares = clean.noise2 * (clean.freedom + 2);
+  const squares = clean.noise2 * (clean.freedom + PRIOR_FREEDOM);
   const deep: [number, number] | undefined = clean.depth ? [theta[path.depthAt]!, theta[path.depthAt + 1]!] : undefined;
   const out: Promise[] = [];
   const consider = (fault: Fault | null, depth: boolean) => {
@@ -36,7 +37,7 @@ export function promising(clean: Account, field: Field): Promise[] {
     const gain = marks * Math.log(squares / Math.max(squares - step.gain, 0.02 * squares));
     if (gain > LEAST_PROMISE) out.push({ fault, depth, gain });
   };
-  if (!clean.depth) consider(null, true);
+  if (!clean.depth && !field.scaled) consider(null, true);
   for (const fault of possibleFaults(clean, field)) consider(fault, clean.depth);
   out.sort((a, b) => b.gain - a.gain);
   const best = out.find((one) => Number.isFinite(one.gain))?.gain ?? 0;
@@ -56,6 +57,7 @@ function possibleFaults(clean: Account, field: Field): Fault[] {
     const names: ShapeName[] = ['ease', 'even-path'];
     if (!span.tangent && apex > 0.5 && apex < length - 0.5)
       names.push('apex', 'power', 'hang', 'hang-up', 'even-steps');
+    if (field.airy && apex < 0.3 * length) names.splice(0, names.length, 'ease', 'drag');
     for (const name of names) faults.push({ kind: 'shape', name, span: index });
     const firstOfTwo = flights === 2 && !spans.slice(0, index).some((before) => before.kind === 'flight');
     if (flights > 1 && !firstOfTwo) faults.push({ kind: 'gravity', span: index });

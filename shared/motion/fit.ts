@@ -151,6 +151,7 @@ function inOrder(path: Path, knots: Knots, theta: Float64Array): boolean {
     const value = theta[path.shapeAt]!;
     if (!Number.isFinite(value)) return false;
     if (path.shape.name.startsWith('power') && (value < 0.5 || value > 12)) return false;
+    if (path.shape.name === 'drag' && (value < 0 || value > 4)) return false;
     if (path.shape.name === 'apex' && Math.abs(value) > 0.42) return false;
     if (path.shape.name === 'ease' && Math.abs(value) > 1.2) return false;
     if (path.shape.name === 'hang' || path.shape.name === 'hang-up') {

@@ -61,7 +61,7 @@ const UNFREE_WEIGHT = 1e-4;
 
 const NOISE = { least: 0.25, most: 3 };
 
-export function prepare(local: Local, hand: HandWork | undefined): Prepared {
+export function prepare(local: Local, hand: HandWork | undefined, air = { airy: false, scaled: false }): Prepared {
   const set = honoured(hand, local.origin);
   const unfree = (t: number) => set.notFree.some((span) => span.from < t && t < span.to);
   const drawings = local.drawings.map((one) => (unfree(one.t) ? { ...one, weight: one.weight * UNFREE_WEIGHT } : one));
@@ -83,6 +83,7 @@ export function prepare(local: Local, hand: HandWork | undefined): Prepared {
       noise: rough,
       step: quantile(steps, 0.5),
       hand: set,
+      ...air,
       samples: {
         t: number((one) => one.t),
         x: number((one) => one.x),

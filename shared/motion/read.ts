@@ -1,6 +1,7 @@
 import type { Finding, Reading, ReadObject } from '../reading/document.ts';
 import { READING_FORMAT } from '../reading/document.ts';
 import { DEFAULT_TOLERANCES } from '../reading/tolerances.ts';
+import type { Account } from './account.ts';
 import { balanceOf } from './body.ts';
 import { cautionsOf } from './cautions.ts';
 import { holdContest } from './choose.ts';
@@ -97,7 +98,10 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
     );
   }
   const local = toLocal(drawings, input.width, input.height);
-  const { field, stretches, lost, odd, moves } = prepare(local, track.hand);
+  const { field, stretches, lost, odd, moves } = prepare(local, track.hand, {
+    airy: track.light === true || !!input.scale,
+    scaled: !!input.scale,
+  });
   if (!moves) return nothing('no-motion', `${track.id} does not move.`);
 
   // Every account of what happened, true or faulty, competes on the same drawings.
@@ -121,7 +125,7 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
     fps: input.fps,
     scale: input.scale ?? null,
     expectedGravity: input.gravity ?? STANDARD_GRAVITY,
-    light: track.light ?? false,
+    light: track.light === true || isSlowed(account),
   };
   const flights = view.flights.map((flight) => describeFlight(view, flight, local.centre));
   const cautions = unplaced
@@ -138,6 +142,11 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
     cautions: [...cautions, ...(pattern.caution ? [pattern.caution] : [])],
     pattern,
   };
+}
+
+/** Whether air slows the thing: then its gravity says nothing. */
+function isSlowed(account: Account): boolean {
+  return account.fault?.kind === 'shape' && account.fault.name === 'drag';
 }
 
 /** The chosen account with its noise as it is reported: without the prior of the search, with the error of a balance point. */

@@ -46,7 +46,7 @@ export function offArc(view: TrackView, flight: FlightView): { value: number; se
   let se = 0;
   for (const i of view.account.left) {
     const t = samples.t[i]!;
-    if (t < flight.start || t > flight.end) continue;
+    if (t < flight.start || t > flight.end || !standsAlone(view, i)) continue;
     const step = Math.max(1, localStep(view, i));
     const off = Math.hypot(samples.x[i]! - xs[i]!, samples.y[i]! - ys[i]!) / step;
     if (off > value) {
@@ -57,12 +57,12 @@ export function offArc(view: TrackView, flight: FlightView): { value: number; se
   return { value, se };
 }
 
-/** Length of the path's step at a drawing, px. */
+/** Length of the path's longer step at a drawing, px: at a contact the way turns back, and the shorter says nothing. */
 export function localStep(view: TrackView, drawing: number): number {
   const { xs, ys } = view.account.fit;
-  const before = Math.max(0, drawing - 1);
-  const after = Math.min(xs.length - 1, drawing + 1);
-  return Math.hypot(xs[after]! - xs[before]!, ys[after]! - ys[before]!) / Math.max(1, after - before);
+  const to = (other: number) =>
+    other < 0 || other >= xs.length ? 0 : Math.hypot(xs[other]! - xs[drawing]!, ys[other]! - ys[drawing]!);
+  return Math.max(to(drawing - 1), to(drawing + 1));
 }
 
 /** Whether a drawing that lies off the arc is the drawing before it once more, within noise and well short of a step. */
@@ -85,4 +85,30 @@ export function repeatsOf(view: TrackView, flight: FlightView): number {
   const inside = (i: number) => t[i]! >= flight.start && t[i]! <= flight.end;
   const late = fault?.kind === 'held' && inside(fault.drawing) ? 1 : 0;
   return late + left.filter((i) => inside(i) && isRepeat(view, i)).length;
+}
+
+/** One drawing pops; where its neighbours are off as well, or many are, the arc itself is not understood. */
+export function standsAlone(view: TrackView, drawing: number): boolean {
+  const { left } = view.account;
+  if (mayBeContact(view, drawing) || touches(view, drawing)) return false;
+  if (left.includes(drawing - 1) || left.includes(drawing + 1)) return false;
+  return left.length <= Math.max(3, view.field.drawings.length / 6);
+}
+
+/** The last (or first) drawing alone beyond a possible contact: it lies higher than the arc, as after a bounce or a landing. */
+function mayBeContact(view: TrackView, drawing: number): boolean {
+  const { samples } = view.field;
+  const { ys } = view.account.fit;
+  const outer = drawing === 0 || drawing === ys.length - 1;
+  return outer && samples.y[drawing]! < ys[drawing]!;
+}
+
+/** A drawing right at a contact: the thing is pressed flat there, so that its middle is not where a flight would have it. */
+function touches(view: TrackView, drawing: number): boolean {
+  const { samples, step } = view.field;
+  const { knots, path, xs, ys } = view.account.fit;
+  const t = samples.t[drawing]!;
+  const near = Array.from(knots.t).some((time, k) => k > 0 && k < path.spans.length && Math.abs(time - t) < 1.7 * step);
+  const off = Math.hypot(samples.x[drawing]! - xs[drawing]!, samples.y[drawing]! - ys[drawing]!);
+  return near && off < 0.5 * localStep(view, drawing);
 }

@@ -12,6 +12,7 @@ export interface Shape {
   openEnd: boolean;
 }
 export type ShapeName =
+  | 'drag'
   | 'apex'
   | 'power'
   | 'power-rise'
@@ -34,6 +35,7 @@ export const SHAPE_NAMES: readonly ShapeName[] = [
 ];
 
 export const SHAPE_NOTHING: Record<ShapeName, number> = {
+  drag: 0,
   apex: 0,
   power: 2,
   'power-rise': 2,
@@ -47,6 +49,7 @@ export const SHAPE_NOTHING: Record<ShapeName, number> = {
 
 /** Where the search for a shape's number starts (some more than once): a number, and a share of the time between drawings. */
 export const SHAPE_STARTS: Record<ShapeName, readonly { base: number; steps: number }[]> = {
+  drag: [{ base: 0, steps: 0 }],
   apex: [{ base: 0, steps: 0 }],
   power: [{ base: 2, steps: 0 }],
   'power-rise': [{ base: 2, steps: 0 }],
@@ -83,6 +86,9 @@ export function warpTime(
   let wx = u;
   let wy = u;
   switch (shape.name) {
+    case 'drag':
+      wy = apex + slowed(u - apex, value);
+      break;
     case 'ease':
       wx = u + (value * u * (u - length)) / length;
       break;
@@ -128,6 +134,18 @@ export function warpTime(
   }
   out[0] = wx;
   out[1] = wy;
+}
+
+/**
+ * Time after the apex at which a thing without air would have fallen as far as one that air slows has after `s`: a fall with
+ * drag goes (v²/g) ln cosh(g s / v), v being its terminal speed (OpenStax University Physics 1, 6.4); `value` is (g/v)².
+ */
+function slowed(s: number, value: number): number {
+  if (s <= 0 || value < 1e-9) return s * (1 - (value * s * s) / 12);
+  const rate = Math.sqrt(value);
+  const x = rate * s;
+  const logCosh = x + Math.log1p(Math.exp(-2 * x)) - Math.LN2;
+  return Math.sqrt(2 * logCosh) / rate;
 }
 
 /** Length of the parabola y = q²/2 from its apex to slope `q`, doubled (closed form of the arc length). */

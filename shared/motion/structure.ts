@@ -49,7 +49,7 @@ function rolls(account: Account, field: Field): Account | null {
   const { path, theta, knots } = account.fit;
   const sketch = rollFirst(sketchFrom(path, theta, knots), 0.4, field);
   if (!sketch || !keepsHand(sketch, field) || !(misfits(account, field) || bendsFirst(account))) return null;
-  const [flat, deep] = [false, true].map((depth) => {
+  const [flat, deep] = [false, !field.scaled].map((depth) => {
     return trim(fitOnce(pathOf(sketch, null, depth, field), null, depth, account.weight, field), field);
   });
   return flat!.cost < deep!.cost ? flat! : deep!;
@@ -102,7 +102,7 @@ function optionsFor(account: Account, field: Field): Option[] {
     const joined = withoutKnot(sketch, k);
     add(joined, (span) => (span >= k ? span - 1 : span));
     if (before === 'flight' && after === 'flight' && hardlyKicks(account, k)) {
-      for (const name of SHAPE_NAMES) {
+      for (const name of field.airy ? [...SHAPE_NAMES, 'drag' as const] : SHAPE_NAMES) {
         for (const start of SHAPE_STARTS[name]) {
           options.push({
             sketch: joined,

@@ -1,4 +1,5 @@
 import { digits, percent } from '../words.ts';
+import type { FlightView, TrackView } from '../view.ts';
 import type { FindingRule } from './rule.ts';
 import { severityOf, shapeOn } from './rule.ts';
 
@@ -11,7 +12,8 @@ export const acrossUneven: FindingRule = {
       if (!shape) return [];
       const drift = 2 * shape.value;
       const severity = severityOf(drift, 2 * shape.error, view.account.freedom, view.tolerances.acrossDrift);
-      if (!severity) return [];
+      if (!severity || explainedByTilt(view, flight, shape.value)) return [];
+      if (view.field.airy && drift < 0) return [];
       const { knots } = view.account.fit;
       const across = Math.abs(knots.x[flight.span + 1]! - knots.x[flight.span]!) / flight.length;
       return [
@@ -30,3 +32,13 @@ export const acrossUneven: FindingRule = {
     });
   },
 };
+
+/** Sideways pull as a share of gravity that a camera tilted by half a degree shows as well. */
+const TILT = 0.01;
+
+/** Whether the drift is so small against the fall that a camera hardly out of level draws the same. */
+function explainedByTilt(view: TrackView, flight: FlightView, ease: number): boolean {
+  const { knots } = view.account.fit;
+  const across = Math.abs(knots.x[flight.span + 1]! - knots.x[flight.span]!);
+  return (2 * Math.abs(ease) * across) / flight.length ** 2 < TILT * Math.abs(flight.gravity);
+}

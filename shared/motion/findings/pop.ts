@@ -1,7 +1,6 @@
 import { digits, percent } from '../words.ts';
 import { shownAt } from '../view.ts';
-import { isRepeat, localStep } from '../scatter.ts';
-import type { TrackView } from '../view.ts';
+import { isRepeat, localStep, standsAlone } from '../scatter.ts';
 import type { Draft, FindingRule } from './rule.ts';
 import { severityOf } from './rule.ts';
 
@@ -14,7 +13,7 @@ export const pop: FindingRule = {
     const { samples } = field;
     const out: Draft[] = [];
     for (const i of account.left) {
-      if (isRepeat(view, i) || mayBeContact(view, i) || !standsAlone(view, i)) continue;
+      if (isRepeat(view, i) || !standsAlone(view, i)) continue;
       const t = samples.t[i]!;
       const flight = view.flights.find((one) => one.start <= t && t <= one.end);
       if (!flight) continue;
@@ -42,21 +41,6 @@ export const pop: FindingRule = {
     return out;
   },
 };
-
-/** One drawing pops; where its neighbours are off as well, or many are, the arc itself is not understood. */
-function standsAlone(view: TrackView, drawing: number): boolean {
-  const { left } = view.account;
-  if (left.includes(drawing - 1) || left.includes(drawing + 1)) return false;
-  return left.length <= Math.max(3, view.field.drawings.length / 6);
-}
-
-/** The last (or first) drawing alone beyond a possible contact: it lies higher than the arc, as after a bounce or a landing. */
-function mayBeContact(view: TrackView, drawing: number): boolean {
-  const { samples } = view.field;
-  const { ys } = view.account.fit;
-  const outer = drawing === 0 || drawing === ys.length - 1;
-  return outer && samples.y[drawing]! < ys[drawing]!;
-}
 
 function direction(dx: number, dy: number): string {
   const parts: string[] = [];
