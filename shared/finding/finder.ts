@@ -4,6 +4,8 @@ import { type Candidate, candidateOf, regionsOf, windowOf } from './candidates.t
 import { coarseFactor, reduce } from './coarse.ts';
 import { difference, looseDifference, noiseThreshold } from './difference.ts';
 import { type Ground, learnGround } from './ground.ts';
+import { extend } from './extend.ts';
+import { joinParts } from './joinParts.ts';
 import { bestPath } from './link.ts';
 import { cut, type GroundCut, measure } from './measure.ts';
 import { settle } from './settle.ts';
@@ -86,9 +88,6 @@ export class Finder {
     return looseDifference(coarse, ground, ground.known, this.#differences);
   }
 
-  debugFrames() {
-    return this.#frames;
-  }
   /** Links what stood out to tracks and names the things A, B and C. Frames of the marks count from 1. */
   finish(): Found {
     let rest = this.#frames;
@@ -100,7 +99,14 @@ export class Finder {
       rest = rest.map((candidates) => candidates.filter((candidate) => !taken.has(candidate)));
       tracks.push(trackOf(path));
     }
-    const things = thingsAmong(tracks);
+    const named = thingsAmong(joinParts(tracks));
+    const things = named.map((thing) => {
+      const others = new Set(named.filter((other) => other !== thing).flatMap((other) => other.path));
+      return extend(
+        thing,
+        this.#frames.map((candidates) => candidates.filter((candidate) => !others.has(candidate))),
+      );
+    });
     return {
       tracks: things.map((thing, k) => ({ id: NAMES[k], marks: marksOf(thing) })),
       camera: this.#cameraMove(),
