@@ -58,7 +58,7 @@ export function sketchSteps(sketch: Sketch, lane: SketchLane): SketchStep[] {
     const to = arc && arcAt(arc.points, drawing.frame);
     const drawn = along(before, drawing);
     const should = from && to ? along(from, to) : null;
-    const leaves = should === null || Math.abs(drawn - should) > LEAVES_BY * (arc ? usualStep(arc.points) : 0);
+    const leaves = should !== null && Math.abs(drawn - should) > LEAVES_BY * (arc ? usualStep(arc.points) : 0);
     return {
       frame: drawing.frame,
       shownFor: Math.min(usual, (drawings[index + 2]?.frame ?? Number.POSITIVE_INFINITY) - drawing.frame),
@@ -103,8 +103,11 @@ function usualStep(points: Sketch['arcs'][number]['points']): number {
   return length / (last.frame - first.frame);
 }
 
+/** Contacts lie between frames. A step that is mostly before a take-off or after a landing is no step of the flight. */
+const SLACK = 0.2;
+
 function covers(points: Sketch['arcs'][number]['points'], frame: number): boolean {
   const first = points[0];
   const last = points.at(-1);
-  return first !== undefined && last !== undefined && frame >= first.frame - 0.5 && frame <= last.frame + 0.5;
+  return first !== undefined && last !== undefined && frame >= first.frame - SLACK && frame <= last.frame + SLACK;
 }

@@ -64,6 +64,17 @@ describe('the small lane of a card', () => {
     expect(sketchSteps(pop, 'up').some((step) => step.off)).toBe(true);
   });
 
+  test('judges no step that a contact cuts', () => {
+    const { arcs } = buildSketch();
+    const points = arcs[0]!.points.slice(0, -1);
+    const landing = { frame: 9.5, x: 475, y: 84 + 3.5 ** 2 * 16 };
+    const sketch = buildSketch({
+      arcs: [{ ...arcs[0]!, points: [...points, landing] }],
+      findings: [buildFinding({ toFrame: 10 })],
+    });
+    expect(sketchSteps(sketch, 'up').at(-1)).toMatchObject({ frame: 10, true: null, off: false });
+  });
+
   test('is the lane of the first finding', () => {
     expect(laneOf(buildSketch())).toBe('up');
     expect(laneOf(buildSketch({ findings: [buildFinding({ kind: 'across-uneven' })] }))).toBe('across');
