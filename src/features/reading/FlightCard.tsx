@@ -2,6 +2,7 @@ import type { Flight, ReadObject, Reading } from '../../../shared/reading/docume
 import { Card } from '../../components/Card.tsx';
 import type { NumberedFinding } from '../../lib/numberedFindings.ts';
 import { flightSentence, flightSpan } from './flightWords.ts';
+import { FoldMark } from './FoldMark.tsx';
 import { GaugeLine } from './GaugeLine.tsx';
 import { HowRead } from './HowRead.tsx';
 import { gaugeRows } from './measureWords.ts';
@@ -26,13 +27,7 @@ export function FlightCard({ flight, object, reading, findings, open }: FlightCa
           <h2 className="flex items-baseline gap-2 text-md">
             Flight {flight.id} <span className="font-mono text-xs font-normal text-graphite">{span}</span>
           </h2>
-          <svg
-            viewBox="0 0 12 12"
-            className="pencil absolute top-1.5 right-0 size-3 text-graphite transition-transform duration-150 in-open:rotate-180"
-            aria-hidden="true"
-          >
-            <path d="M2 4l4 4 4-4" />
-          </svg>
+          <FoldMark />
           <p className="mt-0.5 text-sm text-ink">{flightSentence(flight, findings)}</p>
         </summary>
         <dl className="mt-2">

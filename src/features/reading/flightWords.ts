@@ -1,5 +1,6 @@
 import { type Finding, type Flight, shownFrame } from '../../../shared/reading/document.ts';
 import { decimalsFor, shownNumber } from '../../lib/honestDigits.ts';
+import { measureWords } from './measureWords.ts';
 
 /**
  * "frames 1003 – 1023", in the production's numbers. An end that lies outside the strip is marked by dots at the last drawing
@@ -29,11 +30,19 @@ function riseAndFall(flight: Flight): string | null {
 
 const lower = (title: string) => title.charAt(0).toLowerCase() + title.slice(1);
 
+/** A gauge may lie outside its tolerance without a finding of its own; the sentence then does not say that all is true. */
+function trueOrNearly(flight: Flight): string {
+  const [first, ...rest] = flight.measures.filter((measure) => measure.verdict === 'off');
+  if (!first) return 'Reads true.';
+  const which = rest.length > 0 ? `${rest.length + 1} measures lie` : `${measureWords(first.name)} lies`;
+  return `Nothing to mend, though ${lower(which)} outside the tolerance.`;
+}
+
 /** What a flight's card says before its gauges: whether it reads true, and how it goes up and down. */
 export function flightSentence(flight: Flight, findings: readonly Pick<Finding, 'title'>[]): string {
   if (!flight.judged) return 'Measured, not judged: someone said it does not fly free.';
   const parts = riseAndFall(flight);
-  if (findings.length === 0) return ['Reads true.', parts].filter(Boolean).join(' ');
+  if (findings.length === 0) return [trueOrNearly(flight), parts].filter(Boolean).join(' ');
   const [first, ...rest] = findings.map((finding) => finding.title);
   const off = rest.length === 0 ? `${first}.` : `${[first, ...rest.map(lower)].join(', ')}.`;
   return [off, parts].filter(Boolean).join(' ');

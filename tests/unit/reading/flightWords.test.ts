@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { flightSentence, flightSpan } from '../../../src/features/reading/flightWords.ts';
-import { buildFlight } from '../../support/readings.ts';
+import { buildFlight, buildMeasure } from '../../support/readings.ts';
 
 const frames = [3, 13, 23];
 
@@ -28,5 +28,12 @@ describe('the sentence of a flight', () => {
 
   it('says that nothing was judged where someone said that it does not fly free', () => {
     expect(flightSentence(buildFlight(frames, { judged: false }), [])).toMatch(/not judged/);
+  });
+
+  it('does not call a flight true while one of its gauges is off', () => {
+    const flight = buildFlight(frames, { measures: [buildMeasure({ name: 'path-steps', kind: null })] });
+    expect(flightSentence(flight, [])).toMatch(
+      /^Nothing to mend, though steps on the arc lies outside the tolerance\./,
+    );
   });
 });
