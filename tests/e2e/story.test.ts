@@ -45,7 +45,9 @@ it('posts a strip and sees how far the reading is, in frames', async () => {
   await chooseFrames(page, await stage.draw('010-0060/1'));
   await see(page.getByRole('heading', { name: '28 frames' }));
   expect(await page.getByLabel('First frame').inputValue()).toBe('1001');
-  const progress = see(page.getByRole('progressbar'));
+  const progress = see(
+    page.getByRole('progressbar', { name: /Opening the frames|Finding the thing|Reading the flight/ }),
+  );
   await postShot(page, { number: SHOT, title: 'Egg across the kitchen', changed: 'Held the top for the look.' });
   await progress;
   await see(page.getByRole('heading', { name: 'Egg across the kitchen' }));
@@ -101,7 +103,9 @@ it('the mentor pins a note to a frame and stamps it; the animator sees both', as
   await see(note);
   await note.getByRole('button', { name: 'Good weight' }).click();
 
-  await animator.page.getByRole('button', { name: /^Note on frame 1018/ }).click();
+  const pin = animator.page.getByRole('button', { name: /^Note on frame 1018/ });
+  await see(pin);
+  if ((await pin.getAttribute('aria-expanded')) === 'false') await pin.click();
   const seen = animator.page.getByRole('article', { name: 'Note by Rufus Pell' });
   await see(seen.getByText('The top belongs on'));
   await see(seen.getByRole('button', { name: 'Good weight: Rufus Pell' }));
