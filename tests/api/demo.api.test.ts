@@ -48,7 +48,7 @@ describe('the demo production in an empty database', () => {
     await expect(seedDemo(deps)).rejects.toThrow();
     expect(await dataSource.manager.count(Production)).toBe(1);
     await seedDemo(deps);
-  });
+  }, 180_000);
 
   it('starts again after a run that was broken off, and leaves one production', async () => {
     expect(await dataSource.manager.count(Production)).toBe(1);
