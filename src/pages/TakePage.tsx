@@ -25,8 +25,8 @@ export function TakePage() {
   const take = useQuery(takeOptions(slug, shotNumber, takeNumber));
   const shot = useQuery(shotOptions(slug, shotNumber));
 
-  // Nobody is looking at anything yet: the route's own error screen has the better words.
-  if (take.error instanceof ApiProblem && take.error.status === 404) throw take.error;
+  // A refusal is an answer, and the route's own error screen has the words for it.
+  if (take.error instanceof ApiProblem && take.error.status >= 400 && take.error.status < 500) throw take.error;
   if (take.error && !take.data) {
     return (
       <div className="mx-auto max-w-2xl px-3.5 py-10">

@@ -23,7 +23,7 @@ export const FindingsLayer = memo(function FindingsLayer(props: FindingsLayerPro
       {badges.map(({ finding, words, ...place }) => {
         const baseline = place.top + place.height / 2 + 4.6 * unit;
         return (
-          <g key={place.key} className="cursor-pointer" onClick={() => onChoose(finding.id)}>
+          <g key={place.key} data-choose className="cursor-pointer" onClick={() => onChoose(finding.id)}>
             <title>{finding.title}</title>
             <rect
               x={place.left}

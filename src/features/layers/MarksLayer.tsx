@@ -22,6 +22,7 @@ export const MarksLayer = memo(function MarksLayer({ objects, unit, playhead }: 
               r={DOT * unit}
               strokeWidth={1.3}
               vectorEffect="non-scaling-stroke"
+              data-choose
               className="cursor-pointer fill-pencil-ink stroke-pencil-paper"
               onClick={() => playhead.choose(drawing.frame)}
               onPointerEnter={(event) => event.pointerType === 'mouse' && playhead.point(drawing.frame)}

@@ -113,7 +113,8 @@ export function Overlay(props: OverlayProps) {
           {hasFindings && (
             <FindingsLayer {...shared} badges={badges} chosen={chosenFinding} onChoose={props.onChooseFinding} />
           )}
-          {layers.has('numbers') && <NumbersLayer {...shared} numbers={numbers} />}
+          {/* The mend's own words want the room beside its arrow. */}
+          {layers.has('numbers') && !mend && <NumbersLayer {...shared} numbers={numbers} />}
         </StageGroup>
       </svg>
       <svg {...sheet} className="pointer-events-none absolute inset-0 will-change-transform">

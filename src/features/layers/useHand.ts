@@ -6,12 +6,17 @@ interface Finger {
   y: number;
 }
 
+/** A press that moves less than this, px of the screen, is a press and not a drag. */
+const STILL = 4;
+
 /**
- * The hand on the picture: drag moves it once it is zoomed, two fingers pinch, the wheel zooms while Ctrl is down. Without
- * Ctrl the wheel scrolls the page, as everywhere else.
+ * The hand on the picture. Once it is zoomed a drag moves it, and so does a press, which brings its place to the middle:
+ * nobody has to drag (WCAG 2.2, 2.5.7). Two fingers pinch, the wheel zooms while Ctrl is down; without Ctrl it scrolls the
+ * page, as everywhere else.
  */
 export function useHand(ref: RefObject<HTMLElement | null>, control: ViewControl) {
   const fingers = useRef(new Map<number, Finger>());
+  const pressed = useRef<Finger | null>(null);
   const latest = useRef(control);
   useEffect(() => {
     latest.current = control;
@@ -49,15 +54,25 @@ export function useHand(ref: RefObject<HTMLElement | null>, control: ViewControl
     }
   };
   const letGo = (event: PointerEvent) => fingers.current.delete(event.pointerId);
+  const handlePointerUp = (event: PointerEvent) => {
+    const from = pressed.current;
+    const alone = fingers.current.size === 1;
+    pressed.current = null;
+    if (!letGo(event) || !from || !alone || control.fitted) return;
+    if (Math.hypot(event.clientX - from.x, event.clientY - from.y) > STILL) return;
+    const box = ref.current!.getBoundingClientRect();
+    control.pan(box.left + box.width / 2 - event.clientX, box.top + box.height / 2 - event.clientY);
+  };
 
   return {
     onPointerDown: (event: PointerEvent) => {
-      if (event.button !== 0 || (event.target as Element).closest('button')) return;
+      if (event.button !== 0 || (event.target as Element).closest('button, [data-choose]')) return;
+      pressed.current = fingers.current.size === 0 ? { x: event.clientX, y: event.clientY } : null;
       fingers.current.set(event.pointerId, { x: event.clientX, y: event.clientY });
       if (!control.fitted || fingers.current.size > 1) event.currentTarget.setPointerCapture(event.pointerId);
     },
     onPointerMove: handlePointerMove,
-    onPointerUp: letGo,
+    onPointerUp: handlePointerUp,
     onPointerCancel: letGo,
     onPointerLeave: letGo,
   };

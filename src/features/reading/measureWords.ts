@@ -7,12 +7,12 @@ type Unit = 'share' | 'signed share' | 'exponent' | 'gravity' | 'ratio' | 'count
 /** What an animator calls each measure, and its unit. */
 const MEASURES: Record<MeasureName, { words: string; unit: Unit }> = {
   'apex-time': { words: 'Apex in time', unit: 'share' },
-  'quarter-drop-before': { words: 'Quarter drop, rise', unit: 'share' },
-  'quarter-drop-after': { words: 'Quarter drop, fall', unit: 'share' },
+  'quarter-drop-before': { words: 'Quarter in rise', unit: 'share' },
+  'quarter-drop-after': { words: 'Quarter in fall', unit: 'share' },
   'exponent-rise': { words: 'Curve of rise', unit: 'exponent' },
   'exponent-fall': { words: 'Curve of fall', unit: 'exponent' },
-  'across-drift': { words: 'Across, drift', unit: 'signed share' },
-  'across-spread': { words: 'Across, scatter', unit: 'share' },
+  'across-drift': { words: 'Drift across', unit: 'signed share' },
+  'across-spread': { words: 'Scatter across', unit: 'share' },
   'path-steps': { words: 'Steps on the arc', unit: 'share' },
   gravity: { words: 'Gravity', unit: 'gravity' },
   'gravity-ratio': { words: 'Gravity to others', unit: 'ratio' },

@@ -55,9 +55,7 @@ export function MoveDialog({ open, takeNumber, from, shots, busy, error, onClose
       }
     >
       <form id={formId} onSubmit={(event) => void submit(event)} className="space-y-3">
-        <p className="text-graphite">
-          It becomes the next take there, with its reading, its notes and its stamps. Old links lead to its new place.
-        </p>
+        <p className="text-graphite">It becomes the next take there, with its reading, its notes and its stamps.</p>
         <TextField
           {...register('shotNumber')}
           label="Shot number"

@@ -194,6 +194,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
           </Button>
         )}
         <ReviewActions slug={slug} take={take} actor={actor} thumb />
+        {whyNot(actor, take) && <span className="flex-2 self-center text-xs text-graphite">{whyNot(actor, take)}</span>}
       </div>
     </div>
   );
