@@ -1,26 +1,84 @@
 import type { Finding } from '../reading/document.ts';
+import { reboundOf } from './bounces.ts';
 import type { Draft } from './findings/rule.ts';
+import type { Knots, Span } from './path.ts';
 import { follow, layOut, makeKnotsFor, placeKnots } from './path.ts';
 import type { FlightView, TrackView } from './view.ts';
 import { frameOf } from './view.ts';
 
+interface Places {
+  xs: Float64Array;
+  ys: Float64Array;
+}
+
 /** The path without its fault: same contacts, one gravity, true spacing. Places at `times`, px, local. */
-export function mendedPath(view: TrackView, times: Float64Array): { xs: Float64Array; ys: Float64Array } {
+export function mendedPath(view: TrackView, times: Float64Array): Places {
+  const { fit } = view.account;
+  const only = view.flights.length === 1 ? view.flights[0] : undefined;
+  const gravity = only && only.held > 0 ? gravityToHeight(view, only) : fit.theta[0]!;
+  return along(view, fit.path.spans, fit.knots, gravity, times);
+}
+
+/** Gravity with which a flight of full length reaches the height that was drawn, when what was drawn hangs at its top. */
+function gravityToHeight(view: TrackView, flight: FlightView): number {
+  const { y } = view.account.fit.knots;
+  const moving = flight.length - flight.held;
+  const rise = flight.apex - flight.held / 2;
+  const top = y[flight.span]! - 0.5 * flight.gravity * rise * rise;
+  const up = Math.sqrt(Math.max(0, y[flight.span]! - top));
+  const down = Math.sqrt(Math.max(0, y[flight.span + 1]! - top));
+  if (!(up + down > 0)) return flight.gravity * (moving / flight.length) ** 2;
+  return (2 * (up + down) ** 2) / flight.length ** 2;
+}
+
+/**
+ * The path with a rebound brought down to the height of the fall before it: the flight keeps its gravity and its speed across,
+ * so it ends sooner, and what follows comes sooner with it.
+ */
+function loweredPath(view: TrackView, flight: FlightView, times: Float64Array): Places {
+  const { fit } = view.account;
+  const gain = reboundOf(view, flight)?.height.value ?? 1;
+  const shorter = flight.length / Math.sqrt(Math.max(1, gain));
+  const t = Float64Array.from(fit.knots.t);
+  const x = Float64Array.from(fit.knots.x);
+  const y = Float64Array.from(fit.knots.y);
+  const end = flight.span + 1;
+  const sooner = shorter - flight.length;
+  const nearer = ((x[end]! - x[flight.span]!) / flight.length) * sooner;
+  for (let k = end; k < t.length; k += 1) {
+    t[k] = t[k]! + sooner;
+    x[k] = x[k]! + nearer;
+  }
+  const spans = [...fit.path.spans];
+  if (flight.closes) return along(view, spans, { t, x, y }, fit.theta[0]!, times);
+  const rise = flight.apex / Math.sqrt(Math.max(1, gain));
+  const put = (values: Float64Array, landing: number, after: number) =>
+    Float64Array.from([...values.slice(0, end), landing, after]);
+  const across = (x[end]! - x[flight.span]!) / shorter;
+  const land = { t: t[flight.span]! + 2 * rise, x: x[flight.span]! + across * 2 * rise, y: y[flight.span]! };
+  spans.push({ kind: 'rest', tangent: false, gravity: 0 });
+  const knots = {
+    t: put(t, land.t, Math.max(land.t + 1, times[times.length - 1]!)),
+    x: put(x, land.x, land.x),
+    y: put(y, land.y, land.y),
+  };
+  return along(view, spans, knots, fit.theta[0]!, times);
+}
+
+/** Places along spans between given knots, all flights bent by one gravity and none by a fault. */
+function along(view: TrackView, given: readonly Span[], places: Knots, gravity: number, times: Float64Array): Places {
   const { fit } = view.account;
   const old = fit.path;
-  const spans = old.spans.map((span) => ({ ...span, gravity: 0 }));
-  const last = spans.length - 1;
-  const path = layOut(
-    spans,
-    { start: fit.knots.t[0]!, end: fit.knots.t[last + 1]! },
-    { depthAt: old.depthAt >= 0 ? 0 : -1 },
-  );
+  const spans = given.map((span) => ({ ...span, gravity: 0 }));
+  const last = spans.length;
+  const ends = { start: places.t[0]!, end: places.t[last]! };
+  const path = layOut(spans, ends, { depthAt: old.depthAt >= 0 ? 0 : -1 });
   const theta = new Float64Array(path.size);
-  theta[0] = fit.theta[0]!;
-  for (let k = 0; k <= last + 1; k += 1) {
-    if (path.timeAt[k]! >= 0) theta[path.timeAt[k]!] = fit.knots.t[k]!;
-    if (path.xAt[k]! >= 0) theta[path.xAt[k]!] = fit.knots.x[k]!;
-    if (path.yAt[k]! >= 0) theta[path.yAt[k]!] = fit.knots.y[k]!;
+  theta[0] = gravity;
+  for (let k = 0; k <= last; k += 1) {
+    if (path.timeAt[k]! >= 0) theta[path.timeAt[k]!] = places.t[k]!;
+    if (path.xAt[k]! >= 0) theta[path.xAt[k]!] = places.x[k]!;
+    if (path.yAt[k]! >= 0) theta[path.yAt[k]!] = places.y[k]!;
   }
   if (path.depthAt >= 0) {
     theta[path.depthAt] = fit.theta[old.depthAt]!;
@@ -47,15 +105,22 @@ export function mendOf(view: TrackView, draft: Draft): Finding['mend'] {
     .filter((move) => Math.hypot(move.dx, move.dy) >= 0.05);
 }
 
+/** Moves to the mended path: by as much as the path moves, and all the way for a drawing that lay off its own path. */
 function flightMoves(view: TrackView, draft: Draft): { drawing: number; dx: number; dy: number }[] {
-  const { t } = view.field.samples;
+  const { samples } = view.field;
+  const { t } = samples;
   const { xs, ys } = view.account.fit;
-  const mended = mendedPath(view, t);
+  const noise = Math.sqrt(view.account.noise2);
+  const lowered = draft.kind === 'bounce-gains';
+  const mended = lowered ? loweredPath(view, draft.flight, t) : mendedPath(view, t);
   const out: { drawing: number; dx: number; dy: number }[] = [];
   const held = view.account.fault?.kind === 'held';
   for (let i = 0; i < t.length; i += 1) {
-    if (!held && (t[i]! <= draft.flight.start || t[i]! >= draft.flight.end)) continue;
-    out.push({ drawing: i, dx: mended.xs[i]! - xs[i]!, dy: mended.ys[i]! - ys[i]! });
+    const within = t[i]! > draft.flight.start && t[i]! < draft.flight.end;
+    if (!held && !within && !(lowered && t[i]! >= draft.flight.end)) continue;
+    const stray = Math.hypot(samples.x[i]! - xs[i]!, samples.y[i]! - ys[i]!) > 2.5 * noise;
+    const from = stray ? { x: samples.x[i]!, y: samples.y[i]! } : { x: xs[i]!, y: ys[i]! };
+    out.push({ drawing: i, dx: mended.xs[i]! - from.x, dy: mended.ys[i]! - from.y });
   }
   return out;
 }

@@ -65,7 +65,7 @@ export function prepare(local: Local, hand: HandWork | undefined, air = { airy: 
   const set = honoured(hand, local.origin);
   const unfree = (t: number) => set.notFree.some((span) => span.from < t && t < span.to);
   const drawings = local.drawings.map((one) => (unfree(one.t) ? { ...one, weight: one.weight * UNFREE_WEIGHT } : one));
-  const replicates = replicateNoise(drawings);
+  const replicates = tellingReplicates(drawings);
   const rough = replicates.freedom >= 6 ? Math.sqrt(replicates.sum / replicates.freedom) : roughNoise(drawings);
   const noise = Math.min(NOISE.most, Math.max(NOISE.least, rough));
   const odd = suspects(drawings, noise);
@@ -96,6 +96,17 @@ export function prepare(local: Local, hand: HandWork | undefined, air = { airy: 
     lost: pieces.filter((piece) => piece.kind === 'lost').map((piece) => piece.from),
     moves: Math.hypot(spread(drawings, 'x'), spread(drawings, 'y')) >= 6 * noise,
   };
+}
+
+/**
+ * Noise as the marks of one drawing disagree about it, where that says something: the same picture seen twice gives the same
+ * mark, however unsteady the hand that drew it.
+ */
+function tellingReplicates(drawings: readonly Drawing[]): { sum: number; freedom: number } {
+  const replicates = replicateNoise(drawings);
+  const unsteady = roughNoise(drawings);
+  const least = Math.max(0.05, 0.25 * Math.min(unsteady, NOISE.most));
+  return replicates.sum < least * least * replicates.freedom ? { sum: 0, freedom: 0 } : replicates;
 }
 
 /** Middle 90 % of the places on one axis, px: one stray mark is no motion. */

@@ -106,7 +106,7 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
 
   // Every account of what happened, true or faulty, competes on the same drawings.
   const contest = holdContest(field, stretches, lost, odd);
-  if (!contest || !contest.chosen.fit.path.spans.some((span) => span.kind === 'flight')) {
+  if (!contest || !fliesAtAll(contest.chosen)) {
     return nothing('not-in-flight', `${track.id} rests, rolls or is carried; nothing in it flies.`);
   }
   const account = reported(contest.chosen, balance?.error ?? 0);
@@ -142,6 +142,16 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
     cautions: [...cautions, ...(pattern.caution ? [pattern.caution] : [])],
     pattern,
   };
+}
+
+/** Whether any flight of an account falls by more than its noise: a thing that rests, rolls or is carried does not. */
+function fliesAtAll(account: Account): boolean {
+  const { path, knots, theta } = account.fit;
+  const least = Math.max(1, 4 * Math.sqrt(account.noise2));
+  return path.spans.some((span, k) => {
+    const length = knots.t[k + 1]! - knots.t[k]!;
+    return span.kind === 'flight' && (theta[span.gravity]! * length * length) / 8 > least;
+  });
 }
 
 /** Whether air slows the thing: then its gravity says nothing. */
