@@ -10,7 +10,6 @@ import { PegBar } from '../../features/layers/PegBar.tsx';
 import { PictureStage } from '../../features/layers/PictureStage.tsx';
 import { FrameNumber, PlayControl } from '../../features/playhead/PlayControl.tsx';
 import { outcomeOf } from '../../features/reading/OutcomeCard.tsx';
-import { ReviewActions, whyNot } from '../../features/review/ReviewActions.tsx';
 import { TakeMenu } from '../../features/review/TakeMenu.tsx';
 import { Score } from '../../features/score/Score.tsx';
 import { sentenceOf } from '../../lib/ApiProblem.ts';
@@ -21,9 +20,11 @@ import { createPlayhead } from '../../lib/playhead.ts';
 import { applyTake, readingOptions } from '../../lib/queries/take.ts';
 import { useActor } from '../../lib/queries/useActor.ts';
 import { stagedReading } from '../../lib/stage.ts';
+import { useMediaQuery } from '../../lib/useMediaQuery.ts';
 import { HangingNotes } from './HangingNotes.tsx';
 import { DESK, GRID, STAGE } from './layout.ts';
 import { ObjectSwitch } from './ObjectSwitch.tsx';
+import { TakeActions, ThumbBar } from './TakeActions.tsx';
 import { TakeHead } from './TakeHead.tsx';
 import { TakeMargin } from './TakeMargin.tsx';
 import { useFindings } from './useFindings.ts';
@@ -73,6 +74,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
     objectIds[0] ??
     null;
   const picture = useMemo(() => ({ width: take.width, height: take.height }), [take.width, take.height]);
+  const narrow = useMediaQuery('(max-width: 47.99rem)');
   const mayWrite = can(actor, 'note:write');
   const startNote = () => mayWrite && talk.startNote(playhead.frame());
 
@@ -92,7 +94,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
         take={take}
         title={shot?.title ?? null}
         latest={latest}
-        whyNot={whyNot(actor, take)}
+        narrow={narrow}
         menu={
           <TakeMenu
             slug={slug}
@@ -103,12 +105,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
           />
         }
       >
-        {mayWrite && (
-          <Button title="N" onClick={startNote}>
-            Write a note
-          </Button>
-        )}
-        <ReviewActions slug={slug} take={take} actor={actor} />
+        {!narrow && <TakeActions slug={slug} take={take} actor={actor} onWrite={startNote} />}
       </TakeHead>
       {readAgain.error && <ErrorNote className="mb-3">{sentenceOf(readAgain.error)}</ErrorNote>}
       <div className={GRID}>
@@ -184,18 +181,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
           )}
         </div>
       </div>
-      <div
-        hidden={talk.isWriting}
-        className="fixed inset-x-0 bottom-0 z-30 flex gap-2 border-t border-rule bg-sheet px-3.5 py-2.5 md:hidden [&[hidden]]:hidden"
-      >
-        {mayWrite && (
-          <Button className="flex-1 px-2" aria-label="Write a note" onClick={startNote}>
-            Note
-          </Button>
-        )}
-        <ReviewActions slug={slug} take={take} actor={actor} thumb />
-        {whyNot(actor, take) && <span className="flex-2 self-center text-xs text-graphite">{whyNot(actor, take)}</span>}
-      </div>
+      {narrow && !talk.isWriting && <ThumbBar slug={slug} take={take} actor={actor} onWrite={startNote} />}
     </div>
   );
 }

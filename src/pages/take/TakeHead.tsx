@@ -5,7 +5,6 @@ import { StateChip } from '../../components/StateChip.tsx';
 import { TimeAgo } from '../../components/TimeAgo.tsx';
 import { fpsWords, holdWords } from '../../lib/fpsWords.ts';
 import { paths } from '../../lib/paths.ts';
-import { useMediaQuery } from '../../lib/useMediaQuery.ts';
 
 interface TakeHeadProps {
   slug: string;
@@ -13,16 +12,15 @@ interface TakeHeadProps {
   title: string | null;
   /** Number of the shot's latest take. */
   latest: number;
-  /** Why someone who reviews may not decide here. */
-  whyNot: string | null;
+  /** A phone: the menu stands beside the title, and `children` under the thumb. */
+  narrow: boolean;
   /** What is seldom done to it; stands in the head of a phone too. */
   menu: ReactNode;
   children: ReactNode;
 }
 
 /** Which take this is, what became of it, and what can be done with it. */
-export function TakeHead({ slug, take, title, latest, whyNot, menu, children }: TakeHeadProps) {
-  const narrow = useMediaQuery('(max-width: 47.99rem)');
+export function TakeHead({ slug, take, title, latest, narrow, menu, children }: TakeHeadProps) {
   const hold = take.hold === null ? '' : `, ${holdWords(take.hold)}`;
   return (
     <div className="mb-3 flex flex-wrap items-center gap-x-3.5 gap-y-1.5 max-md:px-3.5">
@@ -49,12 +47,14 @@ export function TakeHead({ slug, take, title, latest, whyNot, menu, children }: 
           Take {latest} is newer
         </Link>
       )}
-      {narrow && <div className="-order-1 ml-auto">{menu}</div>}
-      <div className="ml-auto flex flex-wrap items-center gap-2 max-md:hidden">
-        {whyNot && <span className="text-sm text-graphite">{whyNot}</span>}
-        {!narrow && menu}
-        {children}
-      </div>
+      {narrow ? (
+        <div className="-order-1 ml-auto">{menu}</div>
+      ) : (
+        <div className="ml-auto flex flex-wrap items-center gap-2">
+          {menu}
+          {children}
+        </div>
+      )}
     </div>
   );
 }
