@@ -165,7 +165,9 @@ function stepFrom(base: Account, view: TrackView, fault: Fault, at?: number): Es
   const start = pathOf(sketch, fault, base.depth, view.field, { depth });
   const samples = { ...view.field.samples, weight: base.weight };
   const step = fitStep(start.path, start.theta, samples, at ?? start.path.shapeAt);
-  return (
-    step && { value: step.value, se: step.unit * Math.sqrt(base === view.account ? view.account.noise2 : base.noise2) }
-  );
+  if (!step) return null;
+  // The step's own gain is no noise: left in, it would widen the interval just where the estimate is far off.
+  const body = view.account.noise2 - view.account.squares / view.account.freedom;
+  const noise2 = Math.max(0, base.squares - step.gain) / Math.max(1, base.freedom - 1) + Math.max(0, body);
+  return { value: step.value, se: step.unit * Math.sqrt(noise2) };
 }

@@ -29,6 +29,9 @@ interface TrackReading {
 /** Fewest drawings from which a flight can be read. */
 const LEAST_DRAWINGS = 4;
 
+/** Cost by which a fault must beat the account without it to be modelled where it is within its tolerance. */
+const PLAIN_TO_SEE = 15;
+
 /**
  * Reads a take: where every thing flew, how true each flight is, what an animator would call off and how to mend it.
  * Pure: the same input gives the same reading. Data that cannot be read give a named outcome, never an exception.
@@ -109,24 +112,34 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
   if (!contest || !fliesAtAll(contest.chosen)) {
     return nothing('not-in-flight', `${track.id} rests, rolls or is carried; nothing in it flies.`);
   }
-  const account = reported(contest.chosen, balance?.error ?? 0);
-  account.covariance = covariance(account.fit, { ...field.samples, weight: account.weight });
   const unplaced = track.what === 'body' && !balance;
-  const view: TrackView = {
-    id: track.id,
-    field,
-    contest,
-    account,
-    flights: flightsOf(track.id, account, field).map((one) => (unplaced ? { ...one, judged: false } : one)),
-    tolerances,
-    origin: local.origin,
-    firstFrame: input.firstFrame,
-    hold: pattern.hold === 'mixed' ? 1 : pattern.hold,
-    fps: input.fps,
-    scale: input.scale ?? null,
-    expectedGravity: input.gravity ?? STANDARD_GRAVITY,
-    light: track.light === true || isSlowed(account),
+  const viewOf = (chosen: Account): TrackView => {
+    const account = reported(chosen, balance?.error ?? 0);
+    account.covariance = covariance(account.fit, { ...field.samples, weight: account.weight });
+    return {
+      id: track.id,
+      field,
+      contest,
+      account,
+      flights: flightsOf(track.id, account, field).map((one) => (unplaced ? { ...one, judged: false } : one)),
+      tolerances,
+      origin: local.origin,
+      firstFrame: input.firstFrame,
+      hold: pattern.hold === 'mixed' ? 1 : pattern.hold,
+      fps: input.fps,
+      scale: input.scale ?? null,
+      expectedGravity: input.gravity ?? STANDARD_GRAVITY,
+      light: track.light === true || isSlowed(account),
+    };
   };
+
+  // A fault that is neither past its tolerance nor plain to see is no reason to bend the numbers around it.
+  let view = viewOf(contest.chosen);
+  let findings = findingsOf(view);
+  if (!findings.length && contest.chosen.fault && contest.clean.cost - contest.chosen.cost < PLAIN_TO_SEE) {
+    view = viewOf(contest.clean);
+    findings = findingsOf(view);
+  }
   const flights = view.flights.map((flight) => describeFlight(view, flight, local.centre));
   const cautions = unplaced
     ? [`${track.id} is a body: place its points (head, hips and feet at least), and it is judged at its balance point.`]
@@ -138,7 +151,7 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
       contacts: contactsOf(view, local.centre),
       flights,
     },
-    findings: findingsOf(view),
+    findings,
     cautions: [...cautions, ...(pattern.caution ? [pattern.caution] : [])],
     pattern,
   };
