@@ -50,7 +50,7 @@ export function MendLayer({ objects, findings, unit, playhead, finding: id }: La
           />
           <Arrow arrow={own} unit={unit} strong />
           <HaloText
-            x={(own.from.x + own.to.x) / 2 + 12 * unit}
+            x={Math.max(own.from.x, own.to.x) + Math.max((lit.radius ?? 0) + 3 * unit, 9 * unit) + 7 * unit}
             y={(own.from.y + own.to.y) / 2 + 5 * unit}
             size={14}
             unit={unit}

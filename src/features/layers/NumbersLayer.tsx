@@ -8,6 +8,7 @@ import { type Box, type PlacedLabel, placeLabels } from './labels.ts';
 import type { DrawnObject, LayerProps } from './layerProps.ts';
 
 const SIZE = 12;
+const LIT_SIZE = 14;
 
 /**
  * Which drawings get a number: those at the ends of flights and at the apex, then every fifth by the production's count.
@@ -91,35 +92,34 @@ export const NumbersLayer = memo(function NumbersLayer({ numbers, firstFrame, un
   );
 });
 
-/** The number of the lit frame, always told: where it stands already, else below its ring, or above when something moves down. */
-export function LitNumber({
-  objects,
-  unit,
-  firstFrame,
-  playhead,
-  bounds,
-  numbers,
-  mend,
-}: NumbersLayerProps & { mend: Finding['mend'] }) {
+interface LitNumberProps extends NumbersLayerProps {
+  mend: Finding['mend'];
+  /** What it may not cover. */
+  taken: readonly Box[];
+}
+
+/** The number of the lit frame, always told: where it stands already, else below its ring, or above when its drawing moves down. */
+export function LitNumber({ objects, unit, firstFrame, playhead, bounds, numbers, mend, taken }: LitNumberProps) {
   const frame = useLitFrame(playhead);
   const drawing = objects.map((object) => drawingOn(object.drawings, frame)).find((one) => one !== undefined);
   if (!drawing) return null;
   const text = String(shownFrame(frame, firstFrame));
-  const place = numbers.find((one) => one.frame === frame);
-  if (place) return <PlainNumber place={place} text={text} unit={unit} strong />;
-  const away = Math.max((drawing.radius ?? 0) + 3 * unit, 9 * unit) + 6 * unit;
+  const known = numbers.find((one) => one.frame === frame);
+  if (known) return <PlainNumber place={known} text={text} unit={unit} strong />;
   const movesDown = mend.some((one) => one.frame === drawing.frame && one.dy > 0);
-  const below = !movesDown && drawing.y + away + 16 * unit < bounds.top + bounds.height;
-  return (
-    <HaloText
-      x={drawing.x}
-      y={below ? drawing.y + away + 10 * unit : drawing.y - away}
-      size={14}
-      unit={unit}
-      anchor="middle"
-      weight={700}
-    >
+  const request = {
+    key: text,
+    x: drawing.x,
+    y: drawing.y,
+    width: text.length * LIT_SIZE * 0.62 * unit,
+    height: LIT_SIZE * unit,
+    away: Math.max((drawing.radius ?? 0) + 3 * unit, 9 * unit) + 5 * unit,
+    prefer: movesDown ? ('above' as const) : ('below' as const),
+    must: true,
+  };
+  return placeLabels([request], taken, bounds).map((place) => (
+    <HaloText key={text} x={place.left} y={place.top + place.height * 0.82} size={LIT_SIZE} unit={unit} weight={700}>
       {text}
     </HaloText>
-  );
+  ));
 }

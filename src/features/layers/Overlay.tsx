@@ -7,7 +7,7 @@ import { LadderLayer, LitTick } from './LadderLayer.tsx';
 import type { DrawnObject } from './layerProps.ts';
 import { LitMark, MarksLayer } from './MarksLayer.tsx';
 import { MendLayer } from './MendLayer.tsx';
-import { LitNumber, NumbersLayer, placeNumbers } from './NumbersLayer.tsx';
+import { LitNumber, NumbersLayer, type PlacedNumber, placeNumbers } from './NumbersLayer.tsx';
 import type { PictureStageProps } from './PictureStage.tsx';
 import { QuarterDropLayer } from './QuarterDropLayer.tsx';
 import { StageGroup } from './StageGroup.tsx';
@@ -25,6 +25,7 @@ interface OverlayProps extends PictureStageProps {
 }
 
 const NO_BADGES: Badge[] = [];
+const NO_NUMBERS: PlacedNumber[] = [];
 const NO_MEND: NumberedFinding['mend'] = [];
 const STILL = { moved: false, offsets: [] };
 const LADDERS = ['across', 'up'] as const;
@@ -127,7 +128,14 @@ export function Overlay(props: OverlayProps) {
         <StageGroup {...stage}>
           {mend && <MendLayer {...shared} finding={mend} />}
           {layers.has('marks') && <LitMark {...shared} />}
-          {layers.has('numbers') && <LitNumber {...shared} numbers={numbers} mend={mended?.mend ?? NO_MEND} />}
+          {layers.has('numbers') && (
+            <LitNumber
+              {...shared}
+              numbers={mend ? NO_NUMBERS : numbers}
+              mend={mended?.mend ?? NO_MEND}
+              taken={hasFindings ? badges : NO_BADGES}
+            />
+          )}
         </StageGroup>
       </svg>
     </>

@@ -16,7 +16,7 @@ export interface LabelRequest {
   /** Free space between the point and the label. */
   away: number;
   /** The side to try first. */
-  prefer?: 'left' | 'right';
+  prefer?: 'left' | 'right' | 'above' | 'below';
   /** It stands even where it covers something; others are left out when there is no free place. */
   must?: boolean;
 }
@@ -46,10 +46,30 @@ function candidates({ x, y, width, height, away, prefer }: LabelRequest): Box[] 
   const below = y + away;
   const middleX = x - width / 2;
   const middleY = y - height / 2;
-  const side = prefer === 'left' ? left : right;
+  const first: Record<NonNullable<LabelRequest['prefer']>, [number, number][]> = {
+    left: [
+      [left, middleY],
+      [left, above],
+    ],
+    right: [
+      [right, middleY],
+      [right, above],
+    ],
+    above: [
+      [middleX, above],
+      [left, above],
+      [right, above],
+      [left, middleY],
+    ],
+    below: [
+      [middleX, below],
+      [left, below],
+      [right, below],
+      [left, middleY],
+    ],
+  };
   const places: [number, number][] = [
-    ...(prefer ? ([[side, middleY]] as [number, number][]) : []),
-    ...(prefer ? ([[side, above]] as [number, number][]) : []),
+    ...(prefer ? first[prefer] : []),
     [left, above],
     [right, above],
     [middleX, above - away],

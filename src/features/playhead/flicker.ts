@@ -61,8 +61,3 @@ export function flashesInASecond(luminances: readonly number[], fps: number): nu
   }
   return most;
 }
-
-/** Whether a warning and a choice come before Play. */
-export function flickersTooMuch(luminances: readonly number[], fps: number): boolean {
-  return flashesInASecond(luminances, fps) > MOST_FLASHES;
-}

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { frameDue, picturesAhead } from '../../../src/features/playhead/playback.ts';
+import { frameDue } from '../../../src/features/playhead/playback.ts';
 
 describe('the frame that is due', () => {
   it('follows the clock at the exact rate', () => {
@@ -16,13 +16,5 @@ describe('the frame that is due', () => {
 
   it('goes round', () => {
     expect(frameDue(24, 100, { num: 24, den: 1 }, 25)).toBe(1);
-  });
-});
-
-describe('the pictures wanted next', () => {
-  it('are those ahead and the one behind, inside the strip', () => {
-    expect(picturesAhead(5, 25, 3)).toEqual([6, 4, 7, 8]);
-    expect(picturesAhead(1, 25, 2)).toEqual([2, 3]);
-    expect(picturesAhead(25, 25, 3)).toEqual([24]);
   });
 });
