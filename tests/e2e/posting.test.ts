@@ -1,3 +1,4 @@
+import { readFile } from 'node:fs/promises';
 import path from 'node:path';
 import type { Locator } from 'playwright-core';
 import { afterAll, afterEach, beforeAll, beforeEach, expect, it } from 'vitest';
@@ -108,6 +109,28 @@ it('reads a strip in which two things move, each as its own', async () => {
   await see(desk.page.getByRole('heading', { name: /Flight B1/ }));
   await desk.page.getByRole('button', { name: 'Thing B' }).click();
   expect(await desk.page.getByRole('button', { name: 'Thing B' }).getAttribute('aria-pressed')).toBe('true');
+});
+
+it('takes frames that are dropped on it', async () => {
+  const dropped = await desk.page.evaluateHandle(
+    (files) => {
+      const transfer = new DataTransfer();
+      for (const { name, bytes } of files) {
+        transfer.items.add(
+          new File([Uint8Array.from(atob(bytes), (c) => c.charCodeAt(0))], name, { type: 'image/png' }),
+        );
+      }
+      return transfer;
+    },
+    await Promise.all(
+      good.map(async (file) => ({ name: path.basename(file), bytes: await readFile(file, { encoding: 'base64' }) })),
+    ),
+  );
+  const zone = desk.page.getByText('Drop the frames here');
+  await zone.dispatchEvent('dragover', { dataTransfer: dropped });
+  await zone.dispatchEvent('drop', { dataTransfer: dropped });
+  await see(desk.page.getByRole('heading', { name: /^12 frames/ }));
+  expect(await desk.page.getByLabel('First frame').inputValue()).toBe('1001');
 });
 
 it('finds the grid of a strip picture by itself, and takes a correction', async () => {
