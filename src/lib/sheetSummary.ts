@@ -1,5 +1,6 @@
 import type { ShotWithTakes } from '../../shared/api/shots.ts';
 import type { ReviewState, Take } from '../../shared/api/takes.ts';
+import type { FindingKind } from '../../shared/reading/kinds.ts';
 
 export interface SheetSummary {
   total: number;
@@ -7,7 +8,7 @@ export interface SheetSummary {
   through: number;
   waiting: number;
   anotherPass: number;
-  /** The finding that sent takes back most often, by its title, and how often; null before any was sent back with one. */
+  /** The finding that sent takes back most often, by its title, and how often; null while none did twice. */
   comesBack: { title: string; times: number } | null;
   /** How many shots were through after each decision, first to last. */
   steps: { at: string; through: number }[];
@@ -28,16 +29,16 @@ export function summarise(shots: readonly ShotWithTakes[]): SheetSummary {
   };
 }
 
+/** Counted by kind: the same fault has more than one title. What came back once only is no pattern. */
 function comesBackMost(takes: readonly Take[]): SheetSummary['comesBack'] {
-  const times = new Map<string, number>();
+  const counts = new Map<FindingKind, { title: string; times: number }>();
   for (const take of takes) {
     if (take.decision?.state !== 'another-pass') continue;
-    for (const title of new Set(take.sketch?.findings.map((finding) => finding.title))) {
-      times.set(title, (times.get(title) ?? 0) + 1);
-    }
+    const own = new Map(take.sketch?.findings.map((finding) => [finding.kind, finding.title]));
+    for (const [kind, title] of own) counts.set(kind, { title, times: (counts.get(kind)?.times ?? 0) + 1 });
   }
-  const most = [...times].sort((a, b) => b[1] - a[1])[0];
-  return most ? { title: most[0], times: most[1] } : null;
+  const most = [...counts.values()].sort((a, b) => b.times - a.times)[0];
+  return most && most.times > 1 ? most : null;
 }
 
 function stepsOf(shots: readonly ShotWithTakes[]): SheetSummary['steps'] {
