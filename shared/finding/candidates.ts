@@ -13,8 +13,15 @@ export interface Candidate extends Measured {
 
 /** What was measured on a picture, laid on the stage. */
 export function candidateOf(measured: Measured, index: number, pose: Pose): Candidate {
-  const whole = ontoStage(measured.whole, pose);
-  return { ...measured, whole, lit: measured.lit && ontoStage(measured.lit, pose), index, pose };
+  const { whole, lit, bare } = measured;
+  return {
+    ...measured,
+    whole: ontoStage(whole, pose),
+    lit: lit && ontoStage(lit, pose),
+    bare: bare && { ...bare, whole: ontoStage(bare.whole, pose), lit: bare.lit && ontoStage(bare.lit, pose) },
+    index,
+    pose,
+  };
 }
 
 function ontoStage(shape: Shape, { dx, dy, zoom }: Pose): Shape {

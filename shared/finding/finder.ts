@@ -9,6 +9,7 @@ import { joinParts } from './joinParts.ts';
 import { bestPath } from './link.ts';
 import { cut, type GroundCut, measure } from './measure.ts';
 import { settle } from './settle.ts';
+import { isGrainy, smooth } from './smooth.ts';
 import { type FoundTrack, thingsAmong, trackOf } from './tracks.ts';
 import type { Picture, PointAt } from './types.ts';
 
@@ -44,6 +45,7 @@ export class Finder {
   readonly #camera: FinderOptions['camera'];
   readonly #poses: (Pose | undefined)[];
   #ground: Ground | null = null;
+  #grainy = false;
   #differences = new Uint8Array(0);
 
   constructor(options: FinderOptions) {
@@ -58,7 +60,9 @@ export class Finder {
 
   /** Learns the background from the pictures at `sampleIndices`, in that order. They are kept until `finish`. */
   learn(samples: Picture[]): void {
-    this.#ground = learnGround(samples, this.sampleIndices, this.#factor, this.#camera);
+    this.#grainy = isGrainy(samples);
+    const clean = this.#grainy ? samples.map(smooth) : samples;
+    this.#ground = learnGround(clean, this.sampleIndices, this.#factor, this.#camera);
   }
 
   /**
@@ -66,9 +70,10 @@ export class Finder {
    * @param index place of the picture in the take, from 0
    * @throws Error when nothing was learned yet
    */
-  look(index: number, picture: Picture): void {
+  look(index: number, original: Picture): void {
     const ground = this.#ground;
     if (!ground) throw new Error('The finder has to learn the background before it looks at a picture.');
+    const picture = this.#grainy ? smooth(original) : original;
     const coarse = reduce(picture, this.#factor);
     const pose = ground.poseOf(index, coarse);
     this.#poses[index] = pose;
@@ -76,7 +81,7 @@ export class Finder {
     const threshold = noiseThreshold(differences);
     for (const region of regionsOf(differences, coarse.width, coarse.height, threshold)) {
       const box = windowOf(region, this.#factor, picture);
-      const measured = measure(cut(picture, box), ground.window(box, pose), threshold, picture);
+      const measured = measure(cut(picture, box), ground.window(box, pose), threshold, this.#factor, picture);
       if (measured) this.#frames[index].push(candidateOf(measured, index, pose));
     }
   }

@@ -2,7 +2,7 @@ import type { Path } from './link.ts';
 import { type FoundTrack, trackOf } from './tracks.ts';
 
 /** How alike two parts have to look: log of the areas' ratio, and colour in grey levels. */
-const AREA = 0.35;
+const AREA = 0.7;
 const COLOUR = 45;
 /** How much faster than before and after a thing may have gone where nobody saw it. */
 const FASTER = 2;

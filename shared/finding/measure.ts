@@ -1,8 +1,9 @@
-import { difference, looseDifference } from './difference.ts';
+import { difference, looseDifference, noiseThreshold } from './difference.ts';
 import type { Box } from './grid.ts';
 import { insideLine } from './drawnLine.ts';
 import type { View } from './outline.ts';
 import { type Silhouette, silhouetteOf } from './silhouette.ts';
+import { withoutLoops } from './wireLoops.ts';
 import type { Picture } from './types.ts';
 
 /** A part of a picture together with where it was cut from. */
@@ -32,6 +33,8 @@ export interface Measured {
   whole: Shape;
   /** Without the part that only darkens the background, as a shadow does; null where nothing else is left. */
   lit: Shape | null;
+  /** Both shapes without a loop of wire, such as a handle; null where there is none. */
+  bare: { whole: Shape; lit: Shape | null; filled: Uint8Array } | null;
   /** Share of the differing pixels that only darken the background. */
   shadowShare: number;
   /** Difference from the background, grey levels, that a tenth of the differing pixels exceed. */
@@ -64,23 +67,26 @@ export function cut(picture: Picture, box: Box): Cut {
 
 /**
  * Measures the thing in a window of the full picture against the background there. Null when nothing in it stands out.
- * @param threshold grey levels that noise does not reach
+ * @param threshold grey levels that noise does not reach in the reduced picture
+ * @param factor by how much that was reduced
  */
 export function measure(
   frame: Cut,
   background: GroundCut,
   threshold: number,
+  factor: number,
   size: { width: number; height: number },
 ): Measured | null {
   const { width, height } = frame;
   const differences = windowDifferences(frame, background);
-  const peak = upperShare(differences, threshold, 0.1);
+  const quiet = factor === 1 ? threshold : windowThreshold(differences, width, height, threshold, factor);
+  const peak = upperShare(differences, quiet, 0.1);
   if (peak === 0) return null;
-  const limit = Math.max(threshold, EDGE_SHARE * peak);
+  const limit = Math.max(quiet, EDGE_SHARE * peak);
   const mask = differences.map((value) => (value >= limit ? 1 : 0));
   const closing = Math.max(1, Math.min(4, Math.round(Math.min(width, height) / 24)));
   const tint = (pixels: number[]): number => meanDifference(frame, background, pixels);
-  const whole = silhouetteOf(mask, width, height, closing, tint);
+  const whole = silhouetteOf(mask, width, height, closing);
   if (!whole) return null;
   const shadow = shadowMask(frame, background, mask);
   let shadowed = 0;
@@ -92,10 +98,17 @@ export function measure(
     if (shadow[at] === 1) shadowed++;
     else litMask[at] = 1;
   }
-  const lit = silhouetteOf(litMask, width, height, closing, tint);
+  const lit = silhouetteOf(litMask, width, height, closing);
+  const bareOf = (shape: Silhouette, litShape: Silhouette | null): Measured['bare'] => {
+    const bare = withoutLoops(shape, mask, width, height, closing, tint);
+    if (!bare) return null;
+    const bareLit = litShape && (withoutLoops(litShape, litMask, width, height, closing, tint) ?? litShape);
+    return { whole: placed(bare, frame), lit: bareLit && placed(bareLit, frame), filled: bare.filled };
+  };
   return {
     whole: placed(whole, frame),
     lit: lit && placed(lit, frame),
+    bare: bareOf(whole, lit),
     shadowShare: shadowed / Math.max(1, differing),
     contrast: peak,
     body: Math.max(0.35 * peak, medianInside(differences, whole)),
@@ -118,6 +131,25 @@ function windowDifferences(frame: Cut, background: GroundCut): Uint8Array {
   return background.known
     ? looseDifference(frame, background, background.known, into)
     : difference(frame, background, into);
+}
+
+/**
+ * What noise does not reach in a window of the full picture: averaging had hidden it from the reduced one. The window's
+ * rim is background, so it says how strong the noise is there; at most it is what white noise would be.
+ */
+function windowThreshold(
+  differences: Uint8Array,
+  width: number,
+  height: number,
+  threshold: number,
+  factor: number,
+): number {
+  const rim = differences.filter((_, at) => {
+    const x = at % width;
+    const y = Math.floor(at / width);
+    return x < 2 || y < 2 || x >= width - 2 || y >= height - 2;
+  });
+  return Math.min(threshold * factor, Math.max(threshold, noiseThreshold(rim)));
 }
 
 /** The value that only `share` of the differing pixels exceed; 0 when none differs. */

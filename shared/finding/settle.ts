@@ -1,7 +1,7 @@
 import { type Candidate, ontoPicture } from './candidates.ts';
 import type { Shape } from './measure.ts';
 import { discOutline, fitOutline, type Outline, outlineOf } from './outline.ts';
-import type { FoundTrack } from './tracks.ts';
+import { type FoundTrack, trackOf } from './tracks.ts';
 
 /** Where the thing is on one frame when all of its frames are known, px of the picture. */
 export interface Placed {
@@ -24,7 +24,8 @@ const BETTER = 0.94;
  * where it passes behind something or over the picture's edge, its outline is laid over what shows of it. Frames that
  * show less than half of it get no place.
  */
-export function settle(track: FoundTrack): Placed[] {
+export function settle(found: FoundTrack): Placed[] {
+  const track = withoutWire(found);
   let usual = usualSizes(track);
   let offs = offsOf(track, usual);
   const round = isRound(track, oddOnes(offs), usual);
@@ -54,6 +55,19 @@ export function settle(track: FoundTrack): Placed[] {
     if (fit.support < 0.45) return shape.area < 0.5 * usual[k].area ? [] : [{ ...plain, support: 0.5 * plain.support }];
     return [{ candidate, x: fit.x, y: fit.y, radius, support: fit.support }];
   });
+}
+
+/** Share of the frames on which a loop has to show, and how even the rest has to be, log of the area. */
+const LOOP_FRAMES = 0.35;
+const LOOP_SPREAD = 0.04;
+
+/** A handle is there on most frames and leaves the same shape on all of them; a gap between pencil lines does not. */
+function withoutWire(track: FoundTrack): FoundTrack {
+  const logs = track.path.flatMap(({ bare }) => (bare ? [Math.log(bare.whole.area)] : []));
+  if (logs.length < LOOP_FRAMES * track.path.length) return track;
+  const middle = median(logs);
+  if (median(logs.map((value) => Math.abs(value - middle))) > LOOP_SPREAD) return track;
+  return trackOf(track.path.map((candidate) => (candidate.bare ? { ...candidate, ...candidate.bare } : candidate)));
 }
 
 function offsOf(track: FoundTrack, usual: Usual[]): number[] {

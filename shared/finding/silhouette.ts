@@ -20,20 +20,18 @@ export interface Silhouette {
 
 /**
  * The filled shape that a mask draws: small gaps in its outline closed, everything inside it counted, the largest part
- * kept. The centre is the area centroid, the middle of the first pixel being (0.5, 0.5). Null for an empty mask.
+ * kept. Null for an empty mask.
  * @param closing px of gap to close on each side
- * @param tint tells holes that show the background from those that only resemble it; left out, all holes are filled
  */
-export function silhouetteOf(
-  mask: Uint8Array,
-  width: number,
-  height: number,
-  closing: number,
-  tint?: MeanDifference,
-): Silhouette | null {
-  const closed = closeGaps(mask, width, height, closing);
-  const filled = fillHoles(closed, width, height);
-  if (tint) openLoops(filled, closed, width, height, tint);
+export function silhouetteOf(mask: Uint8Array, width: number, height: number, closing: number): Silhouette | null {
+  return largestPart(fillHoles(closeGaps(mask, width, height, closing), width, height), width, height);
+}
+
+/**
+ * The largest connected part of a filled mask, which is narrowed to that part. The centre is the area centroid, the
+ * middle of the first pixel being (0.5, 0.5). Null for an empty mask.
+ */
+export function largestPart(filled: Uint8Array, width: number, height: number): Silhouette | null {
   const { labels, regions } = labelRegions(filled, width, height);
   if (regions.length === 0) return null;
   const largest = regions.reduce((best, region) => (region.area > best.area ? region : best));
@@ -69,58 +67,13 @@ export function silhouetteOf(
   };
 }
 
-/** Half the width up to which a part is a wire, as a share of the thing's size. */
-const WIRE = 0.1;
-/** Share of a hole's wall that has to be wire. */
-const WIRE_WALL = 0.25;
-/** Mean difference in grey levels up to which a hole shows the background itself. */
-const SEE_THROUGH = 2.5;
-
-/** How far the mean colour of some pixels is from that of the background there, grey levels. */
-export type MeanDifference = (pixels: number[]) => number;
-
-/**
- * Takes loops of wire off a solid thing: the handle of a bucket encloses background that is none of its area. A thing
- * that is drawn in outline only has nothing solid and stays filled.
- */
-function openLoops(filled: Uint8Array, closed: Uint8Array, width: number, height: number, tint: MeanDifference): void {
-  const holes = filled.map((value, at) => (value === 1 && closed[at] === 0 ? 1 : 0));
-  const count = (values: Uint8Array): number => values.reduce((sum, value) => sum + value, 0);
-  const area = count(filled);
-  if (count(holes) < 0.03 * area) return;
-  const half = Math.max(2, Math.round(WIRE * Math.sqrt(area)));
-  const body = closed.slice();
-  const { labels, regions } = labelRegions(holes, width, height);
-  const loops: Uint8Array[] = [];
-  for (const hole of regions) {
-    const own = labels.map((label) => (label === hole.label ? 1 : 0));
-    const pixels: number[] = [];
-    for (let at = 0; at < own.length; at++) if (own[at] === 1) pixels.push(at);
-    if (hole.area >= 0.03 * area && tint(pixels) <= SEE_THROUGH) loops.push(Uint8Array.from(own));
-    else for (const at of pixels) body[at] = 1;
-  }
-  const solid = opened(body, width, height, half);
-  if (count(solid) < 0.4 * area) return;
-  for (const loop of loops) {
-    const around = grow(loop, width, height, half + 2);
-    let wall = 0;
-    let wire = 0;
-    for (let at = 0; at < around.length; at++) {
-      if (around[at] === 0 || closed[at] === 0) continue;
-      wall++;
-      if (solid[at] === 0) wire++;
-    }
-    if (wire < WIRE_WALL * wall) continue;
-    for (let at = 0; at < around.length; at++) if (around[at] === 1 && solid[at] === 0) filled[at] = 0;
-  }
-}
-
-function grow(mask: Uint8Array, width: number, height: number, by: number): Uint8Array {
+/** The mask with every pixel set that has a set one within `by` in both directions. */
+export function grow(mask: Uint8Array, width: number, height: number, by: number): Uint8Array {
   return spread(spread(mask, width, height, by, 1), width, height, by, width);
 }
 
 /** Morphological opening with a square: what is thinner than twice `by` goes. */
-function opened(mask: Uint8Array, width: number, height: number, by: number): Uint8Array {
+export function opened(mask: Uint8Array, width: number, height: number, by: number): Uint8Array {
   const inverse = mask.map((value) => 1 - value);
   return grow(
     grow(inverse, width, height, by).map((value) => 1 - value),
