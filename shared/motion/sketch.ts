@@ -1,3 +1,4 @@
+import { fitQuadratic } from './parabola.ts';
 import type { Knots, Path, Span } from './path.ts';
 import { layOut } from './path.ts';
 import type { Fault, Field } from './account.ts';
@@ -187,11 +188,12 @@ export function oneFlight(field: Field, before: number, after: number): Sketch |
   const { drawings } = field;
   const n = drawings.length;
   if (n - before - after < 3) return null;
-  const first = drawings[before]!;
-  const last = drawings[n - 1 - after]!;
-  const middle = drawings[Math.floor((before + n - after) / 2)]!;
-  const h = Math.max(1, (last.t - first.t) / 2);
-  const gravity = Math.max(1e-2, (first.y - 2 * middle.y + last.y) / (h * h));
+  const part = drawings.slice(before, n - after);
+  const fit = fitQuadratic(
+    part.map((one) => one.t),
+    part.map((one) => one.y),
+  );
+  const gravity = Math.max(1e-2, (2 * fit.c2) / fit.half ** 2);
   const base: Sketch = {
     spans: [{ kind: 'flight', tangent: false, gravity: 0 }],
     knots: {

@@ -1,7 +1,7 @@
 import type { Drawing } from './drawings.ts';
-import type { PolynomialFit } from './parabola.ts';
-import { fitQuadratic } from './parabola.ts';
 import type { Piece } from './partition.ts';
+import type { Polynomial } from './polynomial.ts';
+import { fitPolynomial, speedAt, valueAt } from './polynomial.ts';
 
 /** A stretch of drawings with one way of moving, before the path is fitted. */
 export interface Stretch {
@@ -16,21 +16,12 @@ export interface Stretch {
 /** How a piece moves: one polynomial each for x and y, and the error of its speed at its ends over noise. */
 interface Motion {
   piece: Piece;
-  x: PolynomialFit;
-  y: PolynomialFit;
+  x: Polynomial;
+  y: Polynomial;
   speedError: number;
   /** Time of its last drawing. */
   until: number;
 }
-
-const valueAt = (fit: PolynomialFit, t: number): number => {
-  const u = (t - fit.middle) / fit.half;
-  return fit.c0 + u * (fit.c1 + u * fit.c2);
-};
-const speedAt = (fit: PolynomialFit, t: number): number => {
-  const u = (t - fit.middle) / fit.half;
-  return (fit.c1 + 2 * u * fit.c2) / fit.half;
-};
 
 /**
  * Joins pieces to stretches. Contacts push up and nothing else does: a cut where the speed jumps upwards is a contact, a cut
@@ -85,7 +76,7 @@ function endSpeed(stretch: Stretch): number {
 function typicalBend(motions: readonly Motion[]): number {
   const bends = motions
     .filter((motion) => motion.piece.kind === 'flight')
-    .map((motion) => (2 * motion.y.c2) / motion.y.half ** 2)
+    .map((motion) => (2 * motion.y.c[2]!) / motion.y.half ** 2)
     .sort((a, b) => a - b);
   return bends[Math.floor(bends.length / 2)] ?? 0;
 }
@@ -102,39 +93,21 @@ function motionOf(drawings: readonly Drawing[], piece: Piece, suspects: readonly
   const part = drawings.slice(piece.from, piece.to + 1).filter((_, i) => !suspects.includes(piece.from + i));
   const times = part.map((d) => d.t);
   const flat = piece.kind === 'rest';
-  const x = straight(part, 'x', flat);
-  const y =
-    piece.kind === 'flight'
-      ? fitQuadratic(
-          times,
-          part.map((d) => d.y),
-        )
-      : straight(part, 'y', flat);
+  const line = flat ? 0 : 1;
+  const x = fitPolynomial(
+    times,
+    part.map((d) => d.x),
+    line,
+  );
+  const y = fitPolynomial(
+    times,
+    part.map((d) => d.y),
+    piece.kind === 'flight' ? 2 : line,
+  );
   const n = part.length;
   const span = Math.max(1, times[n - 1]! - times[0]!);
   const speedError = flat ? 0 : (piece.kind === 'flight' ? 12 : 3.5) / (span * Math.sqrt(n));
   return { piece, x, y, speedError, until: times[n - 1]! };
-}
-
-function straight(part: readonly Drawing[], axis: 'x' | 'y', flat: boolean): PolynomialFit {
-  const n = part.length;
-  const t0 = part.reduce((sum, d) => sum + d.t, 0) / n;
-  const v0 = part.reduce((sum, d) => sum + d[axis], 0) / n;
-  let stt = 0;
-  let stv = 0;
-  for (const d of part) {
-    stt += (d.t - t0) ** 2;
-    stv += (d.t - t0) * (d[axis] - v0);
-  }
-  return {
-    middle: t0,
-    half: 1,
-    c0: v0,
-    c1: flat || stt === 0 ? 0 : stv / stt,
-    c2: 0,
-    rss: 0,
-    freedom: Math.max(0, n - 2),
-  };
 }
 
 function kindOf(
@@ -151,8 +124,8 @@ function kindOf(
     return 'rest';
   }
   if (piece.kind === 'line') {
-    const down = motion.y.c1;
-    const across = Math.abs(motion.x.c1);
+    const down = speedAt(motion.y, motion.y.middle);
+    const across = Math.abs(speedAt(motion.x, motion.x.middle));
     const level = Math.abs(down) < 0.12 * across + 3 * noise * motion.speedError;
     if (level && across > 0 && (!before || before.kind !== 'flight' || endSpeed(before) > kick)) {
       return 'roll';
