@@ -1,4 +1,4 @@
-import { type ReactNode, useMemo, useRef } from 'react';
+import { type CSSProperties, type ReactNode, useMemo, useRef } from 'react';
 import type { Reading } from '../../../shared/reading/document.ts';
 import { drawingOn, drawingsOf } from '../../lib/drawings.ts';
 import { useKeys } from '../../lib/keys.ts';
@@ -89,6 +89,7 @@ export function PictureStage(props: PictureStageProps) {
       ref={ref}
       {...hand}
       data-testid="stage"
+      style={{ '--aspect': picture.width / picture.height } as CSSProperties}
       className={`relative overflow-hidden bg-surround ${control.fitted ? 'touch-pan-y' : 'cursor-grab touch-none active:cursor-grabbing'} ${className ?? ''}`}
     >
       {room.width > 0 && (
