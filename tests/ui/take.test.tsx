@@ -153,10 +153,20 @@ describe('the reading in the margin', () => {
   test('tells a measure in words with its verdict, also to those who cannot see the gauge', () => {
     const object = buildObject();
     const flight = { ...object.flights[0]!, measures: [buildMeasure()] };
-    showTake({ reading: buildReading({ objects: [{ ...object, flights: [flight] }] }) });
+    showTake({ reading: buildReading({ objects: [{ ...object, flights: [flight] }], findings: [buildFinding()] }) });
     const card = screen.getByRole('region', { name: 'Flight A1' });
     expect(within(card).getAllByText('Apex in time')).toHaveLength(2);
     expect(card.textContent).toContain('64\u202f%, should be 50\u202f%, off');
+  });
+
+  test('keeps red for what a finding says', () => {
+    const object = buildObject();
+    const flight = { ...object.flights[0]!, measures: [buildMeasure()] };
+    showTake({ reading: buildReading({ objects: [{ ...object, flights: [flight] }] }) });
+    const card = screen.getByRole('region', { name: 'Flight A1' });
+    expect(card.textContent).toContain('64\u202f%, should be 50\u202f%, outside the tolerance');
+    expect(card.querySelector('.text-red')).toBeNull();
+    expect(card.textContent).not.toContain('Reads true');
   });
 
   test('shows the mend on the picture and as a timing chart when it is asked for', async () => {

@@ -32,7 +32,11 @@ export function FlightCard({ flight, object, reading, findings, open }: FlightCa
         </summary>
         <dl className="mt-2">
           {gaugeRows(flight.measures).map((row) => (
-            <GaugeLine key={row.words} {...row} />
+            <GaugeLine
+              key={row.words}
+              {...row}
+              called={findings.some((finding) => finding.kind === row.measure.kind)}
+            />
           ))}
         </dl>
         <HowRead flight={flight} object={object} reading={reading} />

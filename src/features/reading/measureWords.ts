@@ -75,6 +75,9 @@ export interface Gauge {
   beyond: boolean;
 }
 
+/** Only more than expected is off here: a rebound may always be lower. */
+const NO_LOWER_EDGE: ReadonlySet<MeasureName> = new Set(['rebound-height', 'repeats', 'off-arc']);
+
 /** The axis reaches this many tolerances to both sides of what is expected. */
 const REACH = 4;
 
@@ -85,7 +88,7 @@ export function gaugeOf(measure: Measure): Gauge | null {
   const at = (number: number) => 0.5 + (number - expected) / (2 * REACH * tolerance);
   const hold = (share: number) => Math.min(1, Math.max(0, share));
   return {
-    band: [at(expected - tolerance), at(expected + tolerance)],
+    band: [NO_LOWER_EDGE.has(measure.name) ? 0 : at(expected - tolerance), at(expected + tolerance)],
     interval: [hold(at(low)), hold(at(high))],
     marker: hold(at(value)),
     beyond: at(value) < 0 || at(value) > 1,

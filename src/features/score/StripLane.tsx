@@ -82,7 +82,7 @@ function Cursor({ firstFrame, columns, playhead }: Pick<StripLaneProps, 'firstFr
       />
       <span className="rounded-[4px] border-2 border-ink" style={{ width: columns.width, height: THUMB + 4 }} />
       <span className="font-mono text-2xs leading-tight font-bold text-ink">
-        <span className="rounded-mark bg-sheet px-0.5">{shownFrame(frame, firstFrame)}</span>
+        <span className="rounded-mark bg-sheet px-1">{shownFrame(frame, firstFrame)}</span>
       </span>
     </div>
   );

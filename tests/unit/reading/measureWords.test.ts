@@ -36,6 +36,18 @@ describe('a gauge', () => {
     expect(gaugeOf(buildMeasure({ value: 0.1, low: 0.05, high: 0.15 }))).toMatchObject({ marker: 0, beyond: true });
   });
 
+  it('has no lower edge where only more is off', () => {
+    const rebound = buildMeasure({
+      name: 'rebound-height',
+      value: 0.64,
+      low: 0.6,
+      high: 0.7,
+      expected: 1,
+      tolerance: 0.03,
+    });
+    expect(gaugeOf(rebound)!.band[0]).toBe(0);
+  });
+
   it('is not drawn where nothing is expected', () => {
     expect(gaugeOf(buildMeasure({ name: 'gravity', expected: null, tolerance: null }))).toBeNull();
   });
