@@ -52,7 +52,7 @@ export function bestPath(frames: Candidate[][]): Path {
 function extend(states: State[], earlier: Candidate, candidate: Candidate): State | null {
   const gap = candidate.index - earlier.index;
   const hidden = gap === 1 ? 0 : FIRST_HIDDEN_FRAME + NEXT_HIDDEN_FRAME * (gap - 2);
-  const price = changeOfLook(earlier, candidate) + hidden;
+  const price = changeOfLook(earlier, candidate) + leapBetween(earlier, candidate) + hidden;
   const held = isSameDrawing(earlier, candidate);
   let best: State | null = null;
   for (const state of states) {
@@ -77,18 +77,28 @@ function isSameDrawing(a: Candidate, b: Candidate): boolean {
 }
 
 function worth(candidate: Candidate): number {
-  return REWARD * Math.min(1, 0.4 + candidate.contrast / 100);
+  // A faint thing is worth nearly as much as a bright one, or a path would change over to a counter to gain.
+  return REWARD * Math.min(1, 0.75 + candidate.contrast / 200);
+}
+
+/** Nothing crosses the picture in one frame: steps far beyond the thing's size are jumps between things. */
+function leapBetween(a: Candidate, b: Candidate): number {
+  const size = sizeOf(a);
+  const speed = Math.hypot(b.whole.x - a.whole.x, b.whole.y - a.whole.y) / (b.index - a.index);
+  return (3 * Math.max(0, speed - 3 * size - 20)) / (size + 10);
 }
 
 function changeOfVelocity(was: State['velocity'], now: { x: number; y: number }, at: Candidate, steps: number): number {
-  const size = 2 * Math.sqrt(at.whole.area / Math.PI);
-  const speed = Math.hypot(now.x, now.y);
-  // Nothing crosses the picture in one frame: steps far beyond the thing's size are jumps between things.
-  const leap = Math.max(0, speed - 3 * size - 20) / (size + 10);
-  if (!was) return leap + Math.min(0.5, (0.1 * speed) / (size + 5));
+  const size = sizeOf(at);
+  if (!was) return Math.min(0.5, (0.1 * Math.hypot(now.x, now.y)) / (size + 5));
   const bend = Math.hypot(now.x - was.x, now.y - was.y) / Math.min(4, steps);
   const expected = 2 + 0.12 * size + 0.1 * Math.hypot(was.x, was.y);
-  return leap + Math.min(BOUNCE + (0.02 * bend) / expected, 0.12 * (bend / expected) ** 2);
+  return Math.min(BOUNCE + (0.02 * bend) / expected, 0.12 * (bend / expected) ** 2);
+}
+
+/** Diameter of a disc of the same area, px. */
+function sizeOf(candidate: Candidate): number {
+  return 2 * Math.sqrt(candidate.whole.area / Math.PI);
 }
 
 function changeOfLook(a: Candidate, b: Candidate): number {
