@@ -28,7 +28,7 @@ const digits = (value: number, certified: number) => {
 /** Coefficients of powers of x itself, from those of u = (x - middle) / half. */
 function inPowers(fit: { middle: number; half: number; c: ArrayLike<number> }): number[] {
   const degree = fit.c.length - 1;
-  const out = new Array<number>(degree + 1).fill(0);
+  const out = Array.from({ length: degree + 1 }, () => 0);
   let power = [1];
   for (let k = 0; k <= degree; k += 1) {
     power.forEach((value, i) => {
