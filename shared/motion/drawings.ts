@@ -90,26 +90,32 @@ export function suspects(drawings: readonly Drawing[], noise: number): number[] 
   const kept = drawings.map((_, i) => i);
   const out: number[] = [];
   const least = Math.max(6, 5 * noise);
-  for (let round = 0; round < 1 + Math.floor(drawings.length / 7); round += 1) {
-    let best = -1;
-    let most = 8;
-    for (let k = 0; k < kept.length; k += 1) {
-      const window = kept.slice(Math.max(0, k - 4), k + 5);
-      if (window.length < 6) continue;
-      const without = window.filter((i) => i !== kept[k]);
-      const rough = roughness(drawings, window);
-      const smooth = roughness(drawings, without);
-      const gain = rough / (smooth + 2 * without.length * noise * noise);
-      if (gain > most && Math.sqrt(rough) > least) {
-        most = gain;
-        best = k;
-      }
-    }
-    if (best < 0) break;
-    out.push(kept[best]!);
-    kept.splice(best, 1);
+  for (let round = 0; round < 3; round += 1) {
+    const gains = kept.map((_, k) => gainWithout(drawings, kept, k, noise, least));
+    const found = kept.filter(
+      (_, k) => gains[k]! > 8 && gains.slice(Math.max(0, k - 4), k + 5).every((one) => one <= gains[k]!),
+    );
+    if (!found.length) break;
+    out.push(...found);
+    for (const i of found) kept.splice(kept.indexOf(i), 1);
   }
   return out;
+}
+
+/** How many times smoother the drawings around one are without it; 0 where it does not stand out by `least` px at all. */
+function gainWithout(
+  drawings: readonly Drawing[],
+  kept: readonly number[],
+  k: number,
+  noise: number,
+  least: number,
+): number {
+  const window = kept.slice(Math.max(0, k - 4), k + 5);
+  if (window.length < 6) return 0;
+  const rough = roughness(drawings, window);
+  if (Math.sqrt(rough) <= least) return 0;
+  const without = window.filter((i) => i !== kept[k]);
+  return rough / (roughness(drawings, without) + 2 * without.length * noise * noise);
 }
 
 /** Sum of squared third differences of a run of drawings, each scaled to the noise of one drawing, px². */

@@ -2,6 +2,7 @@ import type { Account, Fault, Field } from './account.ts';
 import { PRIOR_FREEDOM } from './account.ts';
 import { fitStep } from './fit.ts';
 import type { ShapeName } from './shapes.ts';
+import { scoreBase, scoreGravity, scoreShape } from './score.ts';
 import { pathOf, sketchFrom } from './sketch.ts';
 
 /** Faults worth fitting: what one step away from the account without a fault promises to gain, best first. */
@@ -26,19 +27,24 @@ export function promising(clean: Account, field: Field): Promise[] {
   const squares = clean.noise2 * (clean.freedom + PRIOR_FREEDOM);
   const deep: [number, number] | undefined = clean.depth ? [theta[path.depthAt]!, theta[path.depthAt + 1]!] : undefined;
   const out: Promise[] = [];
-  const consider = (fault: Fault | null, depth: boolean) => {
-    if (fault?.kind === 'held') {
-      out.push({ fault, depth, gain: Infinity });
-      return;
-    }
-    const start = pathOf(base, fault, depth, field, { depth: deep });
-    const step = fitStep(start.path, start.theta, samples, 0);
-    if (!step) return;
-    const gain = marks * Math.log(squares / Math.max(squares - step.gain, 0.02 * squares));
-    if (gain > LEAST_PROMISE) out.push({ fault, depth, gain });
+  const marksOf = (gain: number) => marks * Math.log(squares / Math.max(squares - gain, 0.02 * squares));
+  const offer = (fault: Fault | null, depth: boolean, gain: number | undefined) => {
+    const worth = gain === undefined ? 0 : marksOf(gain);
+    if (worth > LEAST_PROMISE) out.push({ fault, depth, gain: worth });
   };
-  if (!clean.depth && !field.scaled) consider(null, true);
-  for (const fault of possibleFaults(clean, field)) consider(fault, clean.depth);
+  if (!clean.depth && !field.scaled) {
+    const start = pathOf(base, null, true, field);
+    offer(null, true, fitStep(start.path, start.theta, samples, 0)?.gain);
+  }
+  const scores = scoreBase(clean.fit, samples);
+  for (const fault of scores ? possibleFaults(clean, field) : []) {
+    if (fault.kind === 'held') out.push({ fault, depth: clean.depth, gain: Infinity });
+    else if (fault.kind === 'gravity') offer(fault, clean.depth, scoreGravity(scores!, fault.span)?.gain);
+    else {
+      const start = pathOf(base, fault, clean.depth, field, { depth: deep });
+      offer(fault, clean.depth, scoreShape(scores!, start.path, start.theta)?.gain);
+    }
+  }
   out.sort((a, b) => b.gain - a.gain);
   const best = out.find((one) => Number.isFinite(one.gain))?.gain ?? 0;
   return out.filter((one, i) => i < MOST_TRIED && one.gain > 0.15 * best);

@@ -1,12 +1,14 @@
 import type { Measure } from '../reading/document.ts';
 import type { FindingKind, MeasureName } from '../reading/kinds.ts';
-import type { Account, Fault } from './account.ts';
+import type { Account } from './account.ts';
 import { boundsOf, reboundOf } from './bounces.ts';
 import { errorOf } from './errors.ts';
-import { fitStep } from './fit.ts';
 import { metresPerSecond2 } from './units.ts';
 import { offArc, repeatsOf, stepScatter } from './scatter.ts';
+import type { ScoreBase } from './score.ts';
+import { scoreBase, scoreGravity, scoreShape } from './score.ts';
 import type { ShapeName } from './shapes.ts';
+import { SHAPE_NOTHING } from './shapes.ts';
 import { pathOf, sketchFrom } from './sketch.ts';
 import { Z95, Z99_ONE, studentQuantile } from './statistics.ts';
 import type { FlightView, TrackView } from './view.ts';
@@ -140,9 +142,10 @@ function gravityRatio(view: TrackView, flight: FlightView): Estimated | null {
     const ratio = (theta: Float64Array) => theta[1]! / theta[0]!;
     return { value: ratio(account.fit.theta), se: errorOf(account, ratio) };
   }
-  const step = stepFrom(account, view, { kind: 'gravity', span: flight.span }, 1);
+  const scores = scoresOf(view, account);
+  const score = scores && scoreGravity(scores, flight.span);
   const others = account.fit.theta[0]!;
-  return step && { value: step.value / others, se: step.se / others };
+  return score && { value: 1 + score.step / others, se: (score.unit * noiseAfter(view, account, score.gain)) / others };
 }
 
 /** One shape number of a flight: the fitted one when the chosen account carries it, else one step away from that account. */
@@ -154,20 +157,31 @@ function shapeNumber(view: TrackView, flight: FlightView, name: ShapeName): Esti
     return { value: fit.theta[fit.path.shapeAt]!, se: errorOf(account, (theta) => theta[fit.path.shapeAt]!) };
   }
   const base = here ? contest.clean : account;
-  return stepFrom(base, view, { kind: 'shape', name, span: flight.span });
-}
-
-function stepFrom(base: Account, view: TrackView, fault: Fault, at?: number): Estimated | null {
   const { path, theta, knots } = base.fit;
   const sketch = sketchFrom(path, theta, knots);
-  if ('span' in fault && sketch.spans[fault.span]?.kind !== 'flight') return null;
+  const scores = scoresOf(view, base);
+  if (!scores || sketch.spans[flight.span]?.kind !== 'flight') return null;
   const depth: [number, number] = base.depth ? [theta[path.depthAt]!, theta[path.depthAt + 1]!] : [0, 0];
-  const start = pathOf(sketch, fault, base.depth, view.field, { depth });
-  const samples = { ...view.field.samples, weight: base.weight };
-  const step = fitStep(start.path, start.theta, samples, at ?? start.path.shapeAt);
-  if (!step) return null;
-  // The step's own gain is no noise: left in, it would widen the interval just where the estimate is far off.
+  const start = pathOf(sketch, { kind: 'shape', name, span: flight.span }, base.depth, view.field, { depth });
+  const score = scoreShape(scores, start.path, start.theta);
+  if (!score) return null;
+  return { value: SHAPE_NOTHING[name] + score.step, se: score.unit * noiseAfter(view, base, score.gain) };
+}
+
+/** The score tests of an account, worked out once a view. */
+function scoresOf(view: TrackView, account: Account): ScoreBase | null {
+  const known = view.scores.get(account);
+  if (known !== undefined) return known;
+  const scores = scoreBase(account.fit, { ...view.field.samples, weight: account.weight });
+  view.scores.set(account, scores);
+  return scores;
+}
+
+/**
+ * Noise that is left once a number is let go where its step takes it: the step's own gain is no noise, and left in it would widen
+ * the interval just where the estimate is far off. A balance point's own error comes on top.
+ */
+function noiseAfter(view: TrackView, base: Account, gain: number): number {
   const body = view.account.noise2 - view.account.squares / view.account.freedom;
-  const noise2 = Math.max(0, base.squares - step.gain) / Math.max(1, base.freedom - 1) + Math.max(0, body);
-  return { value: step.value, se: step.unit * Math.sqrt(noise2) };
+  return Math.sqrt(Math.max(0, base.squares - gain) / Math.max(1, base.freedom - 1) + Math.max(0, body));
 }

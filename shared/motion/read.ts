@@ -121,6 +121,7 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
       field,
       contest,
       account,
+      scores: new Map(),
       flights: flightsOf(track.id, account, field).map((one) => (unplaced ? { ...one, judged: false } : one)),
       tolerances,
       origin: local.origin,

@@ -4,6 +4,7 @@ import type { Tolerances } from '../reading/tolerances.ts';
 import type { Account, Field } from './account.ts';
 import type { Contest } from './compete.ts';
 import { isUnfree } from './faults.ts';
+import type { ScoreBase } from './score.ts';
 
 /** One flight as the findings and measures see it. Times here are local (frames after the first drawing). */
 export interface FlightView {
@@ -40,6 +41,8 @@ export interface TrackView {
   hold: number;
   fps: FrameRate;
   scale: { pxPerMetre: number } | null;
+  /** Score tests worked out so far, by account. */
+  scores: Map<Account, ScoreBase | null>;
   /** What the production's gravity is, m/s². */
   expectedGravity: number;
   /** A light thing: air slows it, so that its gravity is not judged. */
