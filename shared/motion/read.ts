@@ -11,6 +11,7 @@ import { covariance } from './fit.ts';
 import { describeFlight } from './flight.ts';
 import type { HoldPattern } from './hold.ts';
 import { holdOf, exposuresOf } from './hold.ts';
+import { joinParts, partsOf } from './parts.ts';
 import { prepare, toLocal } from './prepare.ts';
 import { contactsOf, findingsOf } from './report.ts';
 import { readStream } from './stream.ts';
@@ -106,6 +107,16 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
     scaled: !!input.scale,
   });
   if (!moves) return nothing('no-motion', `${track.id} does not move.`);
+
+  // A long track is read in parts, cut at contacts, and put together again.
+  const parts = partsOf(stretches, drawings.length);
+  if (parts.length > 1) {
+    const readings = parts.map((part) => {
+      const own = drawings.slice(part.from, part.to + 1).flatMap((drawing) => drawing.marks);
+      return readTrack({ ...track, what: 'thing', marks: own }, { ...input, hold: pattern.hold }, options);
+    });
+    return { ...joinParts(object, readings), pattern };
+  }
 
   // Every account of what happened, true or faulty, competes on the same drawings.
   const contest = holdContest(field, stretches, lost, odd);
