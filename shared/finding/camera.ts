@@ -6,8 +6,11 @@ export const STILL: Pose = { dx: 0, dy: 0, zoom: 1 };
 
 /** Levels of the pyramid on which pictures are aligned. */
 export const LEVELS = 3;
-/** Share of the picture's edges that differ from one sample to the next before a move of the camera is looked for. */
+/** Share of a tile's edges, and share of the tiles, that differ between samples before a camera's move is looked for. */
 const CHANGED_EDGES = 0.3;
+const CHANGED_TILES = 0.5;
+/** Change of grey over two px that makes an edge; fainter ones drown in grain. */
+const LEAST_SLOPE = 8;
 /** Move in px of the reduced picture under which the camera counts as still. */
 const LEAST_MOVE = 0.4;
 /** How much better a zoom has to explain two pictures before one is believed. */
@@ -73,22 +76,36 @@ function edgesChange(samples: Picture[]): boolean {
   if (shares.length === 0) return false;
   const sorted = shares.toSorted((a, b) => a - b);
   // A camera that starts late or stops early is still for part of the shot.
-  return sorted[Math.floor(0.75 * (sorted.length - 1))] > CHANGED_EDGES;
+  return sorted[Math.floor(0.75 * (sorted.length - 1))] > CHANGED_TILES;
 }
 
+/** Tiles across and down in which edges are looked at: what moves is in few of them, a camera's move is in all. */
+const TILES = 5;
+const LEAST_EDGES = 12;
+
+/** Share of the tiles with edges in which most of these differ. */
 function changedShare(a: Grey, b: Grey): number {
-  let edges = 0;
-  let changed = 0;
+  const edges = new Uint32Array(TILES * TILES);
+  const changed = new Uint32Array(TILES * TILES);
   for (let y = 1; y < a.height - 1; y++) {
+    const row = Math.floor((y * TILES) / a.height) * TILES;
     for (let x = 1; x < a.width - 1; x++) {
       const at = y * a.width + x;
       const gx = Math.abs(a.data[at + 1] - a.data[at - 1]);
       const gy = Math.abs(a.data[at + a.width] - a.data[at - a.width]);
       const slope = Math.max(gx, gy);
-      if (slope < 14) continue;
-      edges++;
-      if (Math.abs(a.data[at] - b.data[at]) > Math.max(5, 0.2 * slope)) changed++;
+      if (slope < LEAST_SLOPE) continue;
+      const tile = row + Math.floor((x * TILES) / a.width);
+      edges[tile]++;
+      if (Math.abs(a.data[at] - b.data[at]) > Math.max(4, 0.2 * slope)) changed[tile]++;
     }
   }
-  return edges < 30 ? 0 : changed / edges;
+  let withEdges = 0;
+  let moved = 0;
+  for (let tile = 0; tile < edges.length; tile++) {
+    if (edges[tile] < LEAST_EDGES) continue;
+    withEdges++;
+    if (changed[tile] > CHANGED_EDGES * edges[tile]) moved++;
+  }
+  return withEdges < 4 ? 0 : moved / withEdges;
 }

@@ -48,9 +48,14 @@ const LEAST_AREA = 5;
 /**
  * Regions of the reduced picture that differ from the background: neighbours up to two pixels apart count as one, so
  * that an outline drawn with a pencil stays whole.
- * @returns boxes in pixels of the reduced picture, strongest first
+ * @returns the label of each pixel, and the regions in pixels of the reduced picture, strongest first
  */
-export function regionsOf(differences: Uint8Array, width: number, height: number, threshold: number): Region[] {
+export function regionsOf(
+  differences: Uint8Array,
+  width: number,
+  height: number,
+  threshold: number,
+): { labels: Int32Array; regions: Region[] } {
   const mask = new Uint8Array(differences.length);
   for (let y = 0; y < height; y++) {
     for (let x = 0; x < width; x++) {
@@ -72,10 +77,11 @@ export function regionsOf(differences: Uint8Array, width: number, height: number
     strength[labels[at] - 1] += differences[at];
     cores[labels[at] - 1]++;
   }
-  return regions
+  const strongest = regions
     .filter((region) => cores[region.label - 1] >= LEAST_AREA)
     .toSorted((a, b) => strength[b.label - 1] - strength[a.label - 1])
     .slice(0, MOST);
+  return { labels, regions: strongest };
 }
 
 /** The window of the full picture in which a region of the reduced one is measured, with room around it. */
@@ -86,4 +92,31 @@ export function windowOf(region: Region, factor: number, size: { width: number; 
   const right = Math.min(size.width, (region.x1 + 1 + room) * factor);
   const bottom = Math.min(size.height, (region.y1 + 1 + room) * factor);
   return { left, top, width: right - left, height: bottom - top };
+}
+
+/**
+ * The pixels of a region's window that belong to other regions, or null where none does: two things that pass close by
+ * share a window, and each is measured without the other.
+ * @param labels labels of the reduced picture, `width` px wide
+ */
+export function foreignIn(
+  box: Box,
+  label: number,
+  labels: Int32Array,
+  width: number,
+  factor: number,
+): Uint8Array | null {
+  const foreign = new Uint8Array(box.width * box.height);
+  let any = false;
+  const last = labels.length / width - 1;
+  for (let y = 0; y < box.height; y++) {
+    const row = Math.min(last, Math.floor((box.top + y) / factor)) * width;
+    for (let x = 0; x < box.width; x++) {
+      const other = labels[row + Math.min(width - 1, Math.floor((box.left + x) / factor))];
+      if (other === 0 || other === label) continue;
+      foreign[y * box.width + x] = 1;
+      any = true;
+    }
+  }
+  return any ? foreign : null;
 }

@@ -1,6 +1,6 @@
 import type { Mark, Reading } from '../reading/document.ts';
 import type { Pose } from './align.ts';
-import { type Candidate, candidateOf, regionsOf, windowOf } from './candidates.ts';
+import { type Candidate, candidateOf, foreignIn, regionsOf, windowOf } from './candidates.ts';
 import { coarseFactor, reduce } from './coarse.ts';
 import { difference, looseDifference, noiseThreshold } from './difference.ts';
 import { type Ground, learnGround } from './ground.ts';
@@ -79,9 +79,12 @@ export class Finder {
     this.#poses[index] = pose;
     const differences = this.#compare(coarse, ground.coarse(pose));
     const threshold = noiseThreshold(differences);
-    for (const region of regionsOf(differences, coarse.width, coarse.height, threshold)) {
+    const { labels, regions } = regionsOf(differences, coarse.width, coarse.height, threshold);
+    for (const region of regions) {
       const box = windowOf(region, this.#factor, picture);
-      const measured = measure(cut(picture, box), ground.window(box, pose), threshold, this.#factor, picture);
+      const foreign = foreignIn(box, region.label, labels, coarse.width, this.#factor);
+      const noise = { threshold, factor: this.#factor };
+      const measured = measure(cut(picture, box), ground.window(box, pose), noise, foreign, picture);
       if (measured) this.#frames[index].push(candidateOf(measured, index, pose));
     }
   }

@@ -67,18 +67,20 @@ export function cut(picture: Picture, box: Box): Cut {
 
 /**
  * Measures the thing in a window of the full picture against the background there. Null when nothing in it stands out.
- * @param threshold grey levels that noise does not reach in the reduced picture
- * @param factor by how much that was reduced
+ * @param noise grey levels that noise does not reach in the reduced picture, and by how much that was reduced
+ * @param foreign 1 where the window shows another thing
+ * @param size of the full picture
  */
 export function measure(
   frame: Cut,
   background: GroundCut,
-  threshold: number,
-  factor: number,
+  { threshold, factor }: { threshold: number; factor: number },
+  foreign: Uint8Array | null,
   size: { width: number; height: number },
 ): Measured | null {
   const { width, height } = frame;
   const differences = windowDifferences(frame, background);
+  if (foreign) for (let at = 0; at < foreign.length; at++) if (foreign[at] === 1) differences[at] = 0;
   const quiet = factor === 1 ? threshold : windowThreshold(differences, width, height, threshold, factor);
   const peak = upperShare(differences, quiet, 0.1);
   if (peak === 0) return null;

@@ -63,7 +63,7 @@ function likelier(candidate: Candidate, area: number): Shape {
  * stronger thing is its shadow or its reflection.
  */
 export function thingsAmong(tracks: FoundTrack[]): FoundTrack[] {
-  const movers = tracks.filter((track) => track.path.length >= 4 && track.extent > Math.max(8, 0.8 * track.radius));
+  const movers = tracks.filter(isMover);
   const byWeight = movers.toSorted((a, b) => b.weight - a.weight);
   const things: FoundTrack[] = [];
   for (const track of byWeight) {
@@ -73,6 +73,22 @@ export function thingsAmong(tracks: FoundTrack[]): FoundTrack[] {
   }
   // A shadow that shows on more frames than its thing comes first by weight, and goes once the thing is known.
   return things.filter((track) => !things.some((thing) => thing !== track && isCastBy(track, thing))).slice(0, 3);
+}
+
+/** Steps in px over which a place counts as another one. */
+const PLACE = 2;
+
+/** What moves comes to new places; the digits of a counter go back and forth between a few. */
+function isMover({ path, shapes, extent, radius }: FoundTrack): boolean {
+  if (path.length < 4 || extent <= Math.max(8, 0.8 * radius)) return false;
+  const places: Shape[] = [];
+  let steps = 0;
+  shapes.forEach((shape, k) => {
+    const isAt = (place: Shape): boolean => Math.hypot(shape.x - place.x, shape.y - place.y) <= PLACE;
+    if (k > 0 && !isAt(shapes[k - 1])) steps++;
+    if (!places.some(isAt)) places.push(shape);
+  });
+  return places.length >= Math.max(4, 0.35 * steps);
 }
 
 function isComparable(track: FoundTrack, first: FoundTrack): boolean {
