@@ -43,6 +43,9 @@ const PARAMETER_PRICE = 5;
 /** Cost of a drawing that nothing explains: spread evenly over (60 px)², one in thirty. */
 const LOST_PRICE = 2 * Math.log(60 * 60) - 2 * Math.log(2 * Math.PI * Math.E) + 2 * Math.log(30) + 8;
 
+/** On top for every drawing left out next to another: stray marks come alone, what comes in rows is a motion not understood. */
+const NEIGHBOUR_PRICE = 12;
+
 /** Price of a contact that kicks the thing down, or hardly at all: that is no contact. */
 const IMPOSSIBLE_PRICE = 80;
 const LEAST_KICK = 1.2;
@@ -71,8 +74,9 @@ export function fitOnce(
   depth: boolean,
   weight: Float64Array,
   field: Field,
+  most?: number,
 ): Account {
-  return judge(fitPath(start.path, start.theta, { ...field.samples, weight }), fault, depth, weight, field);
+  return judge(fitPath(start.path, start.theta, { ...field.samples, weight }, most), fault, depth, weight, field);
 }
 
 /** Fits an account again and again without the drawing that lies farthest off, as long as leaving it out is worth its price. */
@@ -154,6 +158,7 @@ function judge(fit: PathFit, fault: Fault | null, depth: boolean, weight: Float6
       marks * Math.log(squares / marks) +
       (price * marks) / (free + PRIOR_FREEDOM) +
       left.length * LOST_PRICE +
+      neighbours(left) * NEIGHBOUR_PRICE +
       odd * IMPOSSIBLE_PRICE,
     impossible: odd,
     covariance: null,
@@ -198,6 +203,10 @@ function impossible(fit: PathFit, weight: Float64Array, field: Field): number {
     else if (down - up < WEAK_KICK * g * (left + right)) count += 0.3;
   }
   return count;
+}
+
+function neighbours(left: readonly number[]): number {
+  return left.filter((i) => left.includes(i + 1)).length;
 }
 
 function drawingsBetween(field: Field, weight: Float64Array, from: number, to: number): number {

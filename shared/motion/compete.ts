@@ -13,7 +13,7 @@ export interface Contest {
 }
 
 /** An account so much dearer than the best that leaving drawings out will not save it. */
-const OUT_OF_REACH = 60;
+const OUT_OF_REACH = 40;
 
 /** Fits the structure of a sketch without a fault and with every fault that promises something. */
 export function compete(sketch: Sketch, weight: Float64Array, field: Field): Contest {
@@ -28,7 +28,7 @@ export function compete(sketch: Sketch, weight: Float64Array, field: Field): Con
   tried.push(...afterGravity(clean, tried, field));
   tried.sort((a, b) => a.cost - b.cost);
   const accounts = [clean];
-  for (const account of tried.slice(0, 4)) {
+  for (const account of tried.slice(0, 3)) {
     const near = account.cost < Math.min(clean.cost, tried[0]!.cost) + OUT_OF_REACH;
     accounts.push(near ? trim(account, field) : account);
   }

@@ -59,6 +59,9 @@ export interface Prepared {
 /** Weight of a drawing in a span that is no free flight: enough to carry the path through, too little to pull at anything. */
 const UNFREE_WEIGHT = 1e-4;
 
+/** Marks of one drawing that agree better than this were found in the same picture twice, px. */
+const SAME_PICTURE = 0.05;
+
 const NOISE = { least: 0.25, most: 3 };
 
 export function prepare(local: Local, hand: HandWork | undefined, air = { airy: false, scaled: false }): Prepared {
@@ -104,9 +107,7 @@ export function prepare(local: Local, hand: HandWork | undefined, air = { airy: 
  */
 function tellingReplicates(drawings: readonly Drawing[]): { sum: number; freedom: number } {
   const replicates = replicateNoise(drawings);
-  const unsteady = roughNoise(drawings);
-  const least = Math.max(0.05, 0.25 * Math.min(unsteady, NOISE.most));
-  return replicates.sum < least * least * replicates.freedom ? { sum: 0, freedom: 0 } : replicates;
+  return replicates.sum < SAME_PICTURE ** 2 * replicates.freedom ? { sum: 0, freedom: 0 } : replicates;
 }
 
 /** Middle 90 % of the places on one axis, px: one stray mark is no motion. */

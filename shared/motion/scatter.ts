@@ -103,12 +103,18 @@ function mayBeContact(view: TrackView, drawing: number): boolean {
   return outer && samples.y[drawing]! < ys[drawing]!;
 }
 
+/** How far a thing pressed flat at a contact may seem to be off its arc, px. */
+const PRESSED = 4;
+
 /** A drawing right at a contact: the thing is pressed flat there, so that its middle is not where a flight would have it. */
 function touches(view: TrackView, drawing: number): boolean {
   const { samples, step } = view.field;
   const { knots, path, xs, ys } = view.account.fit;
   const t = samples.t[drawing]!;
-  const near = Array.from(knots.t).some((time, k) => k > 0 && k < path.spans.length && Math.abs(time - t) < 1.7 * step);
+  const near = path.spans.some((span, k) => {
+    const lands = span.kind === 'flight' && k < path.spans.length - 1;
+    return lands && Math.abs(knots.t[k + 1]! - t) < 1.7 * step;
+  });
   const off = Math.hypot(samples.x[drawing]! - xs[drawing]!, samples.y[drawing]! - ys[drawing]!);
-  return near && off < 0.5 * localStep(view, drawing);
+  return near && off < Math.min(PRESSED, 0.5 * localStep(view, drawing));
 }

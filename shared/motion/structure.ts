@@ -28,7 +28,7 @@ export function restructure(account: Account, field: Field, full: Float64Array):
     const { fault, ends } = option;
     if (fault && 'span' in fault && option.sketch.spans[fault.span]?.kind !== 'flight') continue;
     const start = pathOf(option.sketch, fault, option.depth, field, { shape: option.shape, depth });
-    const next = fitOnce(start, fault, option.depth, ends ? weight : account.weight, field);
+    const next = fitOnce(start, fault, option.depth, ends ? weight : account.weight, field, GLANCE);
     if (next.cost < (best?.cost ?? Infinity)) {
       second = best;
       best = next;
@@ -40,7 +40,9 @@ export function restructure(account: Account, field: Field, full: Float64Array):
     best = rolled;
   }
   const tries = [best, second].filter((one) => one !== null && one.cost < account.cost + 60) as Account[];
-  const trimmed = tries.map((one) => trim(one, field)).sort((a, b) => a.cost - b.cost)[0];
+  const trimmed = tries
+    .map((one) => trim(fitOnce(one.fit, one.fault, one.depth, one.weight, field), field))
+    .sort((a, b) => a.cost - b.cost)[0];
   return trimmed && trimmed.cost < account.cost - 1e-6 ? trimmed : null;
 }
 
@@ -60,6 +62,9 @@ function bendsFirst(account: Account): boolean {
   const { fault } = account;
   return fault?.kind === 'shape' && fault.span === 0;
 }
+
+/** Rounds that show whether a structure is worth fitting to the end. */
+const GLANCE = 4;
 
 /** Drawings at either end whose place in the structure is tried anew. */
 const OUTER = 4;
