@@ -76,6 +76,7 @@ function possibleFaults(clean: Account, field: Field): Fault[] {
       isFlightAt(clean, field.samples.t[i - 1]!) &&
       isFlightAt(clean, field.samples.t[i]!) &&
       steps[i]! < 0.35 * around &&
+      steps[i - 1]! > 2 * steps[i]! &&
       around > 3 * Math.sqrt(clean.noise2)
     ) {
       faults.push({ kind: 'held', drawing: i });

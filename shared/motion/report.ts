@@ -1,4 +1,5 @@
 import type { Finding, ReadObject } from '../reading/document.ts';
+import type { Draft } from './findings/rule.ts';
 import { FINDING_RULES } from './findings/table.ts';
 import { isPinned } from './hand.ts';
 import { chartOf, mendOf } from './mend.ts';
@@ -7,9 +8,8 @@ import { frameOf, framesOf } from './view.ts';
 
 /** The findings of a track, in the order of the table, with their mends and timing charts. */
 export function findingsOf(view: TrackView): Finding[] {
-  return FINDING_RULES.flatMap((rule) => rule.find(view))
-    .filter((draft) => draft.flight.judged)
-    .map((draft) => {
+  return standing(FINDING_RULES.flatMap((rule) => rule.find(view)).filter((draft) => draft.flight.judged)).map(
+    (draft) => {
       const whole = framesOf(view, draft.flight);
       const from = Math.max(whole.from, Math.floor(frameOf(view, draft.from)));
       const to = Math.min(whole.to, Math.ceil(frameOf(view, draft.to)));
@@ -26,7 +26,24 @@ export function findingsOf(view: TrackView): Finding[] {
         mend: mendOf(view, draft),
         chart: draft.move ? [] : chartOf(view, draft.flight),
       };
-    });
+    },
+  );
+}
+
+/**
+ * Two findings on one flight only where each stands alone: the account fits them together, so a second one is what would remain
+ * once the first is mended; a slight one beside another is left unsaid. The second's sentence says so.
+ */
+function standing(drafts: readonly Draft[]): Draft[] {
+  const out: Draft[] = [];
+  for (const draft of drafts) {
+    const first = out.find((one) => one.flight === draft.flight && one.kind !== draft.kind);
+    if (first && draft.severity === 'minor') continue;
+    out.push(
+      first ? { ...draft, detail: `Even with that put right (${first.title.toLowerCase()}): ${draft.detail}` } : draft,
+    );
+  }
+  return out;
 }
 
 /** Where two spans meet: bounces, take-offs, landings, edges. A thing that is let go touches nothing, so that is no contact. */

@@ -22,7 +22,8 @@ export const pop: FindingRule = {
       const off = Math.hypot(dx, dy);
       const step = localStep(view, i);
       const noise = Math.sqrt(account.noise2);
-      const least = Math.max(1, 4 * noise, tolerances.pop.from * step);
+      const bent = account.fault?.kind === 'shape' && account.fault.span === flight.span;
+      const least = Math.max(1, (bent ? 9 : 4) * noise, (bent ? tolerances.pop.visible : tolerances.pop.from) * step);
       if (off < least) continue;
       const severity = severityOf(off / Math.max(step, 1), 0, account.freedom, tolerances.pop) ?? 'minor';
       out.push({
