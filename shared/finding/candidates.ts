@@ -120,3 +120,14 @@ export function foreignIn(
   }
   return any ? foreign : null;
 }
+
+/** Share of the take's strongest candidates below which one is dust: noise along a line, a blemish of the coding. */
+const DUST = 0.01;
+
+/** The candidates without those that are next to nothing beside what the take usually shows. */
+export function withoutDust(frames: Candidate[][]): Candidate[][] {
+  const strength = ({ whole, contrast }: Candidate): number => whole.area * contrast;
+  const strongest = frames.map((candidates) => Math.max(0, ...candidates.map(strength))).toSorted((a, b) => a - b);
+  const usual = strongest[strongest.length >> 1] ?? 0;
+  return frames.map((candidates) => candidates.filter((candidate) => strength(candidate) >= DUST * usual));
+}

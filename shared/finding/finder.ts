@@ -1,6 +1,6 @@
 import type { Mark, Reading } from '../reading/document.ts';
 import type { Pose } from './align.ts';
-import { type Candidate, candidateOf, foreignIn, regionsOf, windowOf } from './candidates.ts';
+import { type Candidate, candidateOf, foreignIn, regionsOf, windowOf, withoutDust } from './candidates.ts';
 import { coarseFactor, reduce } from './coarse.ts';
 import { difference, looseDifference, noiseThreshold } from './difference.ts';
 import { type Ground, learnGround } from './ground.ts';
@@ -98,7 +98,7 @@ export class Finder {
 
   /** Links what stood out to tracks and names the things A, B and C. Frames of the marks count from 1. */
   finish(): Found {
-    let rest = this.#frames;
+    let rest = withoutDust(this.#frames);
     const tracks: FoundTrack[] = [];
     while (tracks.length < MOST_PATHS) {
       const path = bestPath(rest);

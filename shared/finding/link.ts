@@ -5,6 +5,10 @@ export type Path = Candidate[];
 
 /** Longest stretch of frames without a candidate that a path bridges. */
 const LONGEST_GAP = 8;
+/** Ways into one candidate that are kept: the best ones hold everything that a later bend could turn round. */
+const MOST_STATES = 8;
+/** Dearest single step; a jump that costs more than this is between two things. */
+const DEAREST = 5;
 /** What one more candidate is worth; costs are in the same unit. */
 const REWARD = 1;
 /** Most that one change of velocity costs: a bounce is a change that physics allows. */
@@ -40,7 +44,7 @@ export function bestPath(frames: Candidate[][]): Path {
           if (link) own.push(link);
         }
       }
-      states.set(candidate, own);
+      states.set(candidate, own.toSorted((a, b) => b.score - a.score).slice(0, MOST_STATES));
       for (const state of own) if (!best || state.score > best.score) best = state;
     }
   }
@@ -53,6 +57,7 @@ function extend(states: State[], earlier: Candidate, candidate: Candidate): Stat
   const gap = candidate.index - earlier.index;
   const hidden = gap === 1 ? 0 : FIRST_HIDDEN_FRAME + NEXT_HIDDEN_FRAME * (gap - 2);
   const price = changeOfLook(earlier, candidate) + leapBetween(earlier, candidate) + hidden;
+  if (price > DEAREST) return null;
   const held = isSameDrawing(earlier, candidate);
   let best: State | null = null;
   for (const state of states) {
