@@ -35,6 +35,7 @@ export function compete(sketch: Sketch, weight: Float64Array, field: Field): Con
   accounts.sort((a, b) => a.cost - b.cost);
   const deep = accounts.slice(0, 2).find((account) => account.depth);
   if (deep) accounts.push(...inDepth(deep, field));
+  else if (unexplained(accounts[0]!, field)) accounts.push(...bentInDepth(accounts[0]!, field));
   accounts.sort((a, b) => a.cost - b.cost);
   return { chosen: accounts[0]!, clean, accounts };
 }
@@ -76,6 +77,25 @@ function inDepth(deep: Account, field: Field): Account[] {
   }
   out.sort((a, b) => a.cost - b.cost);
   return out.slice(0, 2).map((account) => trim(account, field));
+}
+
+/** Whether an account leaves far more than noise. */
+export function unexplained(account: Account, field: Field): boolean {
+  return Math.sqrt(account.noise2) > 2 * field.noise + 0.25;
+}
+
+/** One flight that no fault alone explains: every shape of it, moving towards or away from the camera at the same time. */
+function bentInDepth(account: Account, field: Field): Account[] {
+  const base = sketchOfAccount(account);
+  const flights = base.spans.flatMap((span, k) => (span.kind === 'flight' ? [k] : []));
+  if (field.scaled || flights.length !== 1) return [];
+  const out = SHAPE_NAMES.map((name) => {
+    const fault: Fault = { kind: 'shape', name, span: flights[0]! };
+    const start = SHAPE_STARTS[name][0]!;
+    const path = pathOf(base, fault, true, field, { shape: start.base + start.steps * field.step });
+    return fitOnce(path, fault, true, account.weight, field);
+  }).sort((a, b) => a.cost - b.cost);
+  return out.slice(0, 1).map((one) => trim(one, field));
 }
 
 function sketchOfAccount(account: Account): Sketch {

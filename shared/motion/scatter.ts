@@ -1,3 +1,4 @@
+import { unexplained } from './compete.ts';
 import type { FlightView, TrackView } from './view.ts';
 
 /** Index of the drawings of a flight that its account uses. */
@@ -90,7 +91,7 @@ export function repeatsOf(view: TrackView, flight: FlightView): number {
 /** One drawing pops; where its neighbours are off as well, or many are, the arc itself is not understood. */
 export function standsAlone(view: TrackView, drawing: number): boolean {
   const { left } = view.account;
-  if (mayBeContact(view, drawing) || touches(view, drawing)) return false;
+  if (unexplained(view.account, view.field) || mayBeContact(view, drawing) || touches(view, drawing)) return false;
   if (left.includes(drawing - 1) || left.includes(drawing + 1)) return false;
   return left.length <= Math.max(3, view.field.drawings.length / 6);
 }
