@@ -42,10 +42,13 @@ export function compete(sketch: Sketch, weight: Float64Array, field: Field): Con
 
 function fitStarts(base: Sketch, fault: Fault | null, depth: boolean, weight: Float64Array, field: Field): Account[] {
   if (fault?.kind !== 'shape') return [fitOnce(pathOf(base, fault, depth, field), fault, depth, weight, field)];
-  return SHAPE_STARTS[fault.name].map((start) => {
+  const out: Account[] = [];
+  for (const start of SHAPE_STARTS[fault.name]) {
     const shape = start.base + start.steps * field.step;
-    return fitOnce(pathOf(base, fault, depth, field, { shape }), fault, depth, weight, field);
-  });
+    out.push(fitOnce(pathOf(base, fault, depth, field, { shape }), fault, depth, weight, field));
+    if (!unexplained(out[out.length - 1]!, field)) break;
+  }
+  return out;
 }
 
 /**

@@ -98,19 +98,29 @@ function straightOf(path: Path): Int32Array {
   const straight = new Int32Array(path.size).fill(-1);
   if (path.depthAt >= 0) return straight;
   const last = path.spans.length - 1;
+  const bendsX = path.shape !== null && !KEEPS_X.has(path.shape.name);
+  const bendsY = path.shape !== null && path.shape.name !== 'ease';
   for (let k = 0; k <= last + 1; k += 1) {
-    let bends = false;
-    for (const at of [path.xAt[k]!, path.yAt[k]!]) {
-      if (at < 0) continue;
-      for (let s = path.reach[2 * at]!; s <= path.reach[2 * at + 1]!; s += 1) {
-        bends ||= path.shape?.span === s || path.spans[s]!.tangent;
-      }
-    }
-    if (bends) continue;
-    if (path.xAt[k]! >= 0) straight[path.xAt[k]!] = k;
-    if (path.yAt[k]! >= 0) straight[path.yAt[k]!] = k;
+    const [x, y] = [path.xAt[k]!, path.yAt[k]!];
+    if (x >= 0 && !(bendsX && reaches(path, x)) && !rolls(path, x)) straight[x] = k;
+    if (y >= 0 && !((bendsX || bendsY) && reaches(path, y)) && !rolls(path, y)) straight[y] = k;
   }
   return straight;
+}
+
+/** Shapes that leave the way across as it is, a straight line in time. */
+const KEEPS_X: ReadonlySet<string> = new Set(['apex', 'power', 'power-rise', 'power-fall', 'hang-up', 'drag']);
+
+/** Whether a parameter moves the span that carries the shape fault. */
+function reaches(path: Path, at: number): boolean {
+  const span = path.shape!.span;
+  return path.reach[2 * at]! <= span && span <= path.reach[2 * at + 1]!;
+}
+
+/** Whether a parameter moves a span whose end follows from its start. */
+function rolls(path: Path, at: number): boolean {
+  for (let s = path.reach[2 * at]!; s <= path.reach[2 * at + 1]!; s += 1) if (path.spans[s]!.tangent) return true;
+  return false;
 }
 
 /** Which spans each parameter moves: a knot moves the spans beside it and those whose knots follow from it. */

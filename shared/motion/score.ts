@@ -43,8 +43,8 @@ export function scoreBase(fit: PathFit, samples: Samples): ScoreBase | null {
   const to = room.to.slice(0, p);
   for (let k = 0; k < p; k += 1) {
     for (let i = from[k]!; i < to[k]!; i += 1) {
-      slopes[2 * n * k + i] = room.rows[2 * k * room.stride + i]!;
-      slopes[2 * n * k + n + i] = room.rows[2 * k * room.stride + room.stride + i]!;
+      if (room.moves[k]! & 1) slopes[2 * n * k + i] = room.rows[2 * k * room.stride + i]!;
+      if (room.moves[k]! & 2) slopes[2 * n * k + n + i] = room.rows[2 * k * room.stride + room.stride + i]!;
     }
   }
   return { fit, samples, slopes, from, to, factor, rest };

@@ -9,6 +9,8 @@ export interface Slopes {
   stride: number;
   from: Int32Array;
   to: Int32Array;
+  /** Per parameter: whether it moves x (1), y (2) or both (3). */
+  moves: Uint8Array;
   tx: Float64Array;
   ty: Float64Array;
   normal: Float64Array;
@@ -32,6 +34,7 @@ export function roomFor(n: number, p: number): Slopes {
       stride: sharedMarks,
       from: new Int32Array(sharedSize),
       to: new Int32Array(sharedSize),
+      moves: new Uint8Array(sharedSize),
       tx: new Float64Array(sharedMarks),
       ty: new Float64Array(sharedMarks),
       normal: new Float64Array(sharedSize * sharedSize),
@@ -72,7 +75,9 @@ export function differentiate(
     const to = first[path.reach[2 * k + 1]! + 1]!;
     room.from[k] = from;
     room.to[k] = to;
+    room.moves[k] = 3;
     if (path.straight[k]! >= 0) {
+      room.moves[k] = path.xAt[path.straight[k]!] === k ? 1 : 2;
       straightSlopes(path, knots, samples.t, path.straight[k]!, k, first, room);
       continue;
     }
@@ -108,7 +113,6 @@ function straightSlopes(
   const across = path.xAt[knot] === parameter;
   const at = across ? path.xAt : path.yAt;
   const main = 2 * parameter * stride + (across ? 0 : stride);
-  const other = 2 * parameter * stride + (across ? stride : 0);
   let tied = knot;
   while (tied + 1 < at.length && at[tied + 1]! < 0) tied += 1;
   for (let s = Math.max(0, knot - 1); s <= Math.min(path.spans.length - 1, tied); s += 1) {
@@ -119,7 +123,6 @@ function straightSlopes(
     for (let i = first[s]!; i < first[s + 1]!; i += 1) {
       const t = times[i]! - (i >= path.delayFrom ? path.delay : 0);
       rows[main + i] = path.spans[s]!.kind === 'rest' ? 1 : begins + rate * (t - start);
-      rows[other + i] = 0;
     }
   }
 }
@@ -149,7 +152,9 @@ export function gather(samples: Samples, xs: Float64Array, ys: Float64Array, p: 
     const ax = 2 * a * stride;
     const ay = ax + stride;
     let slope = 0;
-    for (let i = from[a]!; i < to[a]!; i += 1) slope += rows[ax + i]! * tx[i]! + rows[ay + i]! * ty[i]!;
+    const moves = room.moves[a]!;
+    if (moves & 1) for (let i = from[a]!; i < to[a]!; i += 1) slope += rows[ax + i]! * tx[i]!;
+    if (moves & 2) for (let i = from[a]!; i < to[a]!; i += 1) slope += rows[ay + i]! * ty[i]!;
     gradient[a] = slope;
     for (let b = 0; b <= a; b += 1) {
       const bx = 2 * b * stride;
@@ -157,9 +162,9 @@ export function gather(samples: Samples, xs: Float64Array, ys: Float64Array, p: 
       const start = Math.max(from[a]!, from[b]!);
       const end = Math.min(to[a]!, to[b]!);
       let sum = 0;
-      for (let i = start; i < end; i += 1) {
-        sum += weight[i]! * (rows[ax + i]! * rows[bx + i]! + rows[ay + i]! * rows[by + i]!);
-      }
+      const both = moves & room.moves[b]!;
+      if (both & 1) for (let i = start; i < end; i += 1) sum += weight[i]! * rows[ax + i]! * rows[bx + i]!;
+      if (both & 2) for (let i = start; i < end; i += 1) sum += weight[i]! * rows[ay + i]! * rows[by + i]!;
       normal[a * p + b] = sum;
       normal[b * p + a] = sum;
     }
