@@ -20,5 +20,5 @@ export function changeDraft<Answer>(
 }
 
 export function draftClosed(): AppError {
-  return new AppError('draft_closed', 'This post is posted already.');
+  return new AppError('draft_closed', 'This strip is posted already; nothing was posted twice.');
 }

@@ -1,15 +1,22 @@
-import { screen, within } from '@testing-library/react';
-import { describe, expect, test } from 'vitest';
+import { fireEvent, screen, waitFor, within } from '@testing-library/react';
+import { afterEach, describe, expect, test, vi } from 'vitest';
 import type { Draft, Post } from '../../shared/api/drafts.ts';
 import type { Grid } from '../../shared/finding/grid.ts';
 import { ContactSheet } from '../../src/features/posting/ContactSheet.tsx';
 import { GridEditor } from '../../src/features/posting/GridEditor.tsx';
 import { PostForm, type PostFormProps } from '../../src/features/posting/PostForm.tsx';
+import { PostStrip } from '../../src/features/posting/PostStrip.tsx';
 import { RefusedFiles } from '../../src/features/posting/RefusedFiles.tsx';
 import { UploadProgress } from '../../src/features/posting/UploadProgress.tsx';
 import { ApiProblem } from '../../src/lib/ApiProblem.ts';
+import { draftOptions } from '../../src/lib/queries/draft.ts';
+import { sheetOptions } from '../../src/lib/queries/shots.ts';
 import { buildShot, buildTake } from '../support/wire.ts';
-import { show, SLUG } from './show.tsx';
+import { filledClient, show, SLUG } from './show.tsx';
+
+afterEach(() => {
+  vi.unstubAllGlobals();
+});
 
 const draft = (given: Partial<Draft> = {}): Draft => ({
   id: crypto.randomUUID(),
@@ -123,6 +130,43 @@ describe('the form beside a strip', () => {
     showForm({ problem });
     expect(screen.getByText('Something in the post is not right.')).toBeTruthy();
     expect(screen.getByText('Give the shot a title.')).toBeTruthy();
+  });
+
+  test('posts once, however fast someone clicks', async () => {
+    const client = filledClient();
+    const ready = draft({ firstFrame: 1001 });
+    const picture = { width: 640, height: 360 };
+    const pictures = [1001, 1002].map((number) => ({ ...picture, name: `a.${number}.png`, number }));
+    client.setQueryData(draftOptions(ready.id).queryKey, { ...ready, pictures });
+    client.setQueryData(sheetOptions(SLUG).queryKey, { shots: [] });
+    const at = `/p/${SLUG}/post?draft=${ready.id}`;
+    const { user } = show(<PostStrip slug={SLUG} />, { client, at });
+    await user.type(screen.getByLabelText('Shot number'), '020-0150');
+    await user.type(screen.getByLabelText('Title of the new shot'), 'Lantern');
+    // A server that takes its time, and then cannot be reached.
+    let sent = 0;
+    let lose = () => {};
+    const wire = new Promise<Response>((_, reject) => (lose = () => reject(new TypeError('the line is cut'))));
+    vi.stubGlobal('fetch', () => {
+      sent += 1;
+      return wire;
+    });
+    const form = screen.getByRole('button', { name: 'Post the strip' }).closest('form')!;
+    fireEvent.submit(form);
+    fireEvent.submit(form);
+    await screen.findByRole('button', { name: 'Posting…' });
+    expect(sent).toBe(1);
+    lose();
+    await screen.findByRole('alert');
+    await user.click(screen.getByRole('button', { name: 'Post the strip' }));
+    await waitFor(() => expect(sent).toBe(2));
+  });
+
+  test('leads to the take when the answer to an earlier try was lost', async () => {
+    const problem = new ApiProblem({ code: 'draft_closed', status: 409, detail: 'This strip is posted already.' });
+    const { user } = showForm({ problem });
+    await user.type(screen.getByLabelText('Shot number'), '020-0140');
+    expect(screen.getByRole('link', { name: 'See it' }).getAttribute('href')).toMatch(/takes\/2$/);
   });
 
   test('warns where footage may be posted', () => {

@@ -1,5 +1,6 @@
 import { useEffect } from 'react';
 import { useForm, useWatch } from 'react-hook-form';
+import { Link } from 'react-router';
 import type { Draft, Post } from '../../../shared/api/drafts.ts';
 import type { ShotWithTakes } from '../../../shared/api/shots.ts';
 import { Button } from '../../components/Button.tsx';
@@ -9,6 +10,7 @@ import { TextArea } from '../../components/TextArea.tsx';
 import { TextField } from '../../components/TextField.tsx';
 import { ApiProblem, sentenceOf } from '../../lib/ApiProblem.ts';
 import { FRAME_RATES } from '../../lib/frameRates.ts';
+import { paths } from '../../lib/paths.ts';
 import { schemaResolver } from '../../lib/schemaResolver.ts';
 import { FilmingCaution } from './FilmingCaution.tsx';
 import { keepValues, keptValues } from './keptValues.ts';
@@ -50,6 +52,9 @@ export function PostForm({ slug, shots, draft, shotNumber, notYet, posting, prob
   const shot = shotOf(shots, values.shotNumber);
   const found = draft?.firstFrame;
   const errors = formState.errors;
+  // The answer of an earlier try was lost on its way, but the take is there.
+  const posted = problem instanceof ApiProblem && problem.code === 'draft_closed' ? shot?.takes.at(-1) : undefined;
+  const newest = posted && paths.take(slug, posted.shotNumber, posted.number);
 
   useEffect(() => keepValues(slug, values), [slug, values]);
 
@@ -137,7 +142,7 @@ export function PostForm({ slug, shots, draft, shotNumber, notYet, posting, prob
         error={errors.intended?.message}
         {...register('intended')}
       />
-      {problem && <ErrorNote>{sentenceOf(problem)}</ErrorNote>}
+      {problem && <ErrorNote action={newest && <Link to={newest}>See it</Link>}>{sentenceOf(problem)}</ErrorNote>}
       <FilmingCaution />
       <Button
         type="submit"

@@ -1,5 +1,5 @@
 import { useIsMutating, useQuery } from '@tanstack/react-query';
-import { useCallback, useEffect, useState } from 'react';
+import { useCallback, useEffect, useRef, useState } from 'react';
 import { useNavigate, useSearchParams } from 'react-router';
 import type { Draft } from '../../../shared/api/drafts.ts';
 import { draftOptions } from '../../lib/queries/draft.ts';
@@ -19,6 +19,7 @@ export function PostStrip({ slug }: { slug: string }) {
   const { data: sheet } = useQuery(sheetOptions(slug));
   const { data: draft } = useQuery({ ...draftOptions(draftId ?? ''), enabled: draftId !== null });
   const post = usePost(slug, draftId);
+  const underWay = useRef(false);
 
   const sending = useUpload(
     slug,
@@ -49,16 +50,23 @@ export function PostStrip({ slug }: { slug: string }) {
         draft={draft}
         shotNumber={search.get('shot')}
         notYet={notYet(sending.upload, draft, changing, wrongCut)}
-        posting={post.isPending}
+        // Once posted, the button holds still until the page of the take is there.
+        posting={post.isPending || post.isSuccess}
         problem={post.error}
-        onPost={(body) =>
+        onPost={(body) => {
+          // A second click may come before the button knows that the first is on its way.
+          if (underWay.current) return;
+          underWay.current = true;
           post.mutate(body, {
             onSuccess: (take) => {
               keepValues(slug, null);
               void navigate(paths.take(slug, take.shotNumber, take.number), { replace: true });
             },
-          })
-        }
+            onError: () => {
+              underWay.current = false;
+            },
+          });
+        }}
       />
     </div>
   );
