@@ -35,7 +35,10 @@ export async function readTake(
   return presentTake(await loadTake(manager, take.id));
 }
 
-/** Clears a take, asks for another pass, or waives what is off. Only the latest take of a shot is decided on. */
+/**
+ * Clears a take, asks for another pass, or waives what is off. Only the latest take of a shot is decided on. Saying once
+ * more what one said last, as a second click does, changes nothing and makes no event.
+ */
 export async function decideTake(deps: Deps, userId: string, takeId: string, given: DecisionGiven): Promise<WireTake> {
   const { actor, take, production } = await accessByTake(deps.dataSource.manager, userId, takeId);
   allow(actor, 'take:decide', take);
@@ -44,6 +47,10 @@ export async function decideTake(deps: Deps, userId: string, takeId: string, giv
     const latest = await latestTake(manager, shotId);
     if (latest && latest.id !== takeId) {
       throw new AppError('conflict', `Take ${latest.number} is newer; decide on that one.`);
+    }
+    const last = await manager.findOne(Decision, { where: { takeId }, order: { seq: 'DESC' } });
+    if (last && last.byId === userId && last.state === given.state && last.remark === given.remark) {
+      return { change: null, answer: presentTake(await loadTake(manager, takeId)) };
     }
     await manager.insert(Decision, { id: randomUUID(), takeId, byId: userId, ...given, seq, decidedAt: at });
     await manager.update(Take, { id: takeId }, { review: given.state, revision: seq });

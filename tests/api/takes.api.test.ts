@@ -86,6 +86,15 @@ describe('deciding', () => {
     expect(body).toMatchObject({ review: 'another-pass', decision: { remark: 'It hangs after all.' } });
   });
 
+  test('a second click decides nothing more', async () => {
+    const take = await post();
+    const decide = (remark: string) =>
+      people.mentor.client.post(`/takes/${take.id}/decision`, { state: 'another-pass', remark }).expect(200);
+    const [first, second] = await Promise.all([decide('Lower the top.'), decide('Lower the top.')]);
+    expect(second.body).toEqual(first.body);
+    expect((await decide('Lower the top by two frames.')).body.revision).toBe(first.body.revision + 1);
+  });
+
   test('an older take is not decided on', async () => {
     const first = await post();
     await post(first.shotNumber);
