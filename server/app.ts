@@ -9,6 +9,7 @@ import { errorSink } from './http/errorSink.ts';
 import { describeApi } from './http/openapi.ts';
 import { originCheck } from './http/originCheck.ts';
 import { signInLimits } from './http/rateLimits.ts';
+import { refuseMethod } from './http/refuseMethod.ts';
 import { requestLog } from './http/requestLog.ts';
 import { requireUser } from './http/requireUser.ts';
 import { securityHeaders } from './http/securityHeaders.ts';
@@ -18,6 +19,7 @@ import { productionRoutes } from './routes/productions.routes.ts';
 import { sessionRoutes } from './routes/session.routes.ts';
 import { takeRoutes } from './routes/takes.routes.ts';
 import { threadRoutes } from './routes/threads.routes.ts';
+import { groupBy } from './services/groupBy.ts';
 
 export interface AppOptions {
   sessions: Sessions;
@@ -62,6 +64,9 @@ function api(deps: Deps, { sessions, passport, publicOrigin }: AppOptions): Rout
   router.use(sessions.middleware, passport.session());
   router.post('/session', ...signInLimits());
   for (const { contract, handler } of endpoints) router[contract.method](contract.path, handler);
+  for (const [path, there] of groupBy(endpoints, ({ contract }) => contract.path)) {
+    router.all(path, refuseMethod(there.map(({ contract }) => contract.method)));
+  }
   router.get('/openapi.json', (req, res) => {
     requireUser(req);
     description ??= describeApi(endpoints.map(({ contract }) => contract));

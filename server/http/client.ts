@@ -25,6 +25,9 @@ export function client(distDir: string): Router {
     if (!existsSync(page)) throw new AppError('not_found', 'The pages are not built yet; run npm run build.');
     res.set('Cache-Control', 'no-store').sendFile(page, { dotfiles: 'allow', cacheControl: false });
   });
+  router.use(() => {
+    throw new AppError('not_found', 'There is nothing at this address.');
+  });
   return router;
 }
 

@@ -55,6 +55,7 @@ export function endpoint<
 ): Endpoint {
   const handler: RequestHandler = async (req, res) => {
     if (!contract.open) requireUser(req);
+    refuseOtherTypes(contract, req);
     const answer = await run({
       params: parseParams(contract.params, req.params) as Parsed<P>,
       query: parse(contract.query, req.query) as Parsed<Q>,
@@ -66,6 +67,14 @@ export function endpoint<
     await send(res, contract as Contract, answer);
   };
   return { contract: contract as Contract, handler };
+}
+
+/** @throws {AppError} 415 for a body of a kind that the contract does not take; it would be read as no body at all. */
+function refuseOtherTypes({ body, files }: Pick<Contract, 'body' | 'files'>, req: Request): void {
+  const wanted = body ? 'application/json' : files ? 'multipart/form-data' : undefined;
+  if (wanted && req.is(wanted) === false) {
+    throw new AppError('invalid_request', `Send this as ${wanted}.`, { status: 415 });
+  }
 }
 
 function parse(schema: z.ZodType | undefined, value: unknown): unknown {

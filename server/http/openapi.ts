@@ -28,7 +28,9 @@ export function describeApi(contracts: Contract[]) {
     info: {
       title: 'Spandrel',
       version: packageJson.version,
-      description: 'Post a frame strip, read what is off in its flights, and talk about it on the picture.',
+      description:
+        'Post a frame strip, read what is off in its flights, and talk about it on the picture. Sign in first and keep the ' +
+        'cookie. Whatever is not a GET must name the address of the server in its Origin header.',
     },
     servers: [{ url: '/api' }],
     security: [{ session: [] }],

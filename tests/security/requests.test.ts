@@ -104,6 +104,27 @@ describe('problem details', () => {
     expect(body.code).toBe('not_found');
   });
 
+  test('answer a method that the pages do not know', async () => {
+    for (const method of ['post', 'delete'] as const) {
+      const { body, headers } = await supertest(server.url)[method]('/p/nowhere').expect(404);
+      expect(headers['content-type']).toContain('application/problem+json');
+      expect(body.code).toBe('not_found');
+    }
+  });
+
+  test('answer a method that an address below /api does not know, and name those it does', async () => {
+    const { body, headers } = await openClient(server).patch('/session', {}).expect(405);
+    expect(headers.allow).toBe('POST, GET, DELETE');
+    expect(body).toMatchObject({ code: 'invalid_request', status: 405 });
+  });
+
+  test('answer a body of another kind instead of reading it as none', async () => {
+    const { take, user } = await buildTake(server.deps);
+    const client = await signIn(server, user);
+    const sent = client.request('post', `/takes/${take.id}/threads`).type('text/plain').send('A word.');
+    expect((await sent.expect(415)).body.detail).toContain('application/json');
+  });
+
   test('answer a broken address and a body that is too large', async () => {
     await supertest(server.url).get('/api/productions/%E0%A4%A').expect(404);
     const { user } = await buildMember(server.deps);
