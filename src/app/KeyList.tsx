@@ -54,7 +54,8 @@ export function KeyList({ slug }: { slug: string }) {
         </section>
       ))}
       <p className="border-t border-rule pt-3 text-sm text-graphite">
-        Tab moves through everything on the page, Enter presses it, Esc closes what is open.
+        Tab moves through everything on the page, Enter presses it, Esc closes what is open. Ctrl and Enter sends what
+        is written.
       </p>
       <div className="mt-3 flex min-h-9 items-center gap-2 touch:min-h-11">
         <input

@@ -14,6 +14,8 @@ export interface DialogProps {
   className?: string;
 }
 
+const WRITING = 'textarea, select, input:not([type=checkbox], [type=radio])';
+
 /** A native modal dialog: the browser keeps the focus inside; it goes back to where it was when the dialog closes. */
 export function Dialog({ open, onClose, title, children, actions, className }: DialogProps) {
   const dialog = useRef<HTMLDialogElement>(null);
@@ -24,6 +26,8 @@ export function Dialog({ open, onClose, title, children, actions, className }: D
     if (!open || !element) return;
     const before = document.activeElement;
     if (!element.open) element.showModal();
+    // Where something is written, that comes first; else the browser's own choice stands.
+    element.querySelector<HTMLElement>(WRITING)?.focus();
     return () => {
       element.close();
       if (before instanceof HTMLElement && before.isConnected) before.focus();

@@ -5,10 +5,10 @@ import { InkRing } from '../../components/InkRing.tsx';
 import { hereOptions, productionOptions } from '../../lib/queries/production.ts';
 
 const DOES: Record<Role, string> = {
-  animator: 'Draws shots, posts strips, talks about every take.',
-  mentor: 'Looks at takes: clears them, asks for another pass, or waives what is off.',
-  producer: 'Follows every shot until it is through, and moves takes that landed on the wrong shot.',
-  owner: 'Keeps the production and its people, and looks at takes as a mentor does.',
+  animator: 'An animator draws shots, posts strips and talks about every take.',
+  mentor: 'A mentor looks at takes: clears them, asks for another pass, or waives what is off.',
+  producer: 'A producer follows every shot until it is through, and moves takes that landed on the wrong shot.',
+  owner: 'An owner keeps the production and its people, and looks at takes as a mentor does.',
 };
 const TITLES: Record<Role, string> = {
   owner: 'Owners',

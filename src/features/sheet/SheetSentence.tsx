@@ -14,7 +14,7 @@ export function SheetSentence({ shots }: { shots: ShotWithTakes[] }) {
         {back && (
           <>
             {' '}
-            What comes back most: “{back.title}”, {back.times} times.
+            What comes back most: “{back.title}”, {back.times === 2 ? 'twice' : `${back.times} times`}.
           </>
         )}
       </p>
