@@ -1,12 +1,15 @@
 import { mkdtemp, rm, stat } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { basename, join } from 'node:path';
+import sharp from 'sharp';
 import { evenGrid, type Grid } from '../../../shared/finding/grid.ts';
 import type { AnalysisRequest } from '../../../shared/finding/types.ts';
 import type { FrameRate } from '../../../shared/reading/document.ts';
 import { findGrid, splitStrip } from '../../analysis/grid.ts';
 import { inspectPicture } from '../../analysis/inspect.ts';
 import { PictureError } from '../../analysis/PictureError.ts';
+import { unfoldPages } from '../../analysis/unfold/pages.ts';
+import { unfoldVideo } from '../../analysis/unfold/video.ts';
 import { openFrameFolder } from './folderInput.ts';
 import { InputError } from './InputError.ts';
 import type { ReadOptions } from './options.ts';
@@ -20,6 +23,8 @@ export interface PictureInput {
   fps: FrameRate | null;
   cautions: string[];
 }
+
+const VIDEO = /\.(mp4|m4v|mov|webm|mkv)$/i;
 
 /**
  * Turns a folder, a strip picture, an animation or a video into frames on disk, lets `work` read them, and takes away
@@ -41,7 +46,17 @@ export async function withPictureInput<T>(options: ReadOptions, work: (input: Pi
 
 async function unpack(options: ReadOptions, scratch: string): Promise<PictureInput> {
   const path = options.input;
-  await inspectPicture(path, basename(path));
+  const name = basename(path);
+  if (VIDEO.test(name)) return { ...(await unfoldVideo(path, name, scratch)), firstFrame: null };
+  if (name.toLowerCase().endsWith('.gif')) return { ...(await unfoldPages(path, name, scratch)), firstFrame: null };
+  try {
+    await inspectPicture(path, name);
+  } catch (cause) {
+    if (!(cause instanceof PictureError) || cause.code !== 'animated_picture') throw cause;
+    const isWebp = (await sharp(path).metadata()).format === 'webp';
+    const frames = isWebp ? unfoldPages(path, name, scratch) : unfoldVideo(path, name, scratch, 'animation');
+    return { ...(await frames), firstFrame: null };
+  }
   const grid = options.grid ? await givenGrid(path, options.grid) : await findGrid(path);
   if (grid.count < 2) {
     throw new InputError(
