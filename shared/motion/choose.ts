@@ -23,7 +23,7 @@ export function holdContest(
   const weight = even.map((one, i) => (lost.includes(i) ? 0 : one));
   let best: Contest | null = null;
   if (stretches.some((stretch) => stretch.kind === 'flight')) {
-    for (const sketch of firstSketches(sketchOf(field, stretches), stretches, field)) {
+    for (const sketch of firstSketches(sketchOf(field, stretches), stretches, field, weight)) {
       const next = compete(honour(sketch, field), weight, field);
       if (!best || next.chosen.cost < best.chosen.cost) best = next;
     }
@@ -44,6 +44,7 @@ export function holdContest(
     let better: Account | null = null;
     if (!isDoubtful(best.chosen, field)) break;
     for (const account of best.accounts.slice(0, 2)) {
+      if (account.cost > best.chosen.cost + RIVAL) break;
       const next = restructure(account, field, full);
       if (next && next.cost < (better ?? best.chosen).cost) better = next;
     }
@@ -55,14 +56,22 @@ export function holdContest(
   return best;
 }
 
+/** Cost within which a dearer account may still turn out to be the right one. */
+const RIVAL = 40;
+
 /** The sketch as it is, and with the drawings that no stretch claims at either end taken for rest. */
-function firstSketches(sketch: Sketch, stretches: readonly Stretch[], field: Field): Sketch[] {
+function firstSketches(sketch: Sketch, stretches: readonly Stretch[], field: Field, weight: Float64Array): Sketch[] {
   const before = stretches[0]!.from;
   const after = field.drawings.length - 1 - stretches[stretches.length - 1]!.to;
   const opened = before > 0 && before < 4 ? restFirst(sketch, before, field) : null;
   const closed = after > 0 && after < 4 ? restLast(opened ?? sketch, after, field) : null;
   const resting = closed ?? opened;
-  return resting ? [sketch, resting] : [sketch];
+  if (!resting) return [sketch];
+  const [plain, rested] = [sketch, resting].map((one) =>
+    fitOnce(pathOf(one, null, false, field), null, false, weight, field),
+  );
+  if (rested!.cost < plain!.cost - RIVAL) return [resting];
+  return [sketch, resting];
 }
 
 /** The two best of the plainest sketches: one flight, with rest before and after it or without. */
