@@ -35,6 +35,8 @@ export function viewDraft(draft: Draft, all: DraftPicture[]): DraftParts {
       `More than one file carries the number ${sayNumbers(repeated)}; take out the ones that do not belong.`,
     );
   }
+  const strays = names.filter((_, index) => numbers[index] === null);
+  if (strays.length > 0 && strays.length < names.length) warnings.push(sayStrays(strays));
   return {
     draft,
     pictures: frames.map((picture, index) => ({ picture, number: single ? null : numbers[index]! })),
@@ -44,6 +46,14 @@ export function viewDraft(draft: Draft, all: DraftPicture[]): DraftParts {
     warnings,
     ready: frames.length > 1 || (single && isStrip(draft)),
   };
+}
+
+/** A name without a number among numbered ones: the strip then goes by the order of names, and no gap shows. */
+function sayStrays(strays: string[]): string {
+  const [first, ...others] = strays;
+  const more = others.length === 0 ? '' : others.length === 1 ? ' and one more' : ` and ${others.length} more`;
+  const [carry, it, it2] = others.length === 0 ? ['carries', 'it', 'it does'] : ['carry', 'them', 'they do'];
+  return `“${first}”${more} ${carry} no frame number like the rest; take ${it} out if ${it2} not belong.`;
 }
 
 function isStrip(draft: Draft): boolean {

@@ -162,6 +162,24 @@ describe('the form beside a strip', () => {
     await waitFor(() => expect(sent).toBe(2));
   });
 
+  test('starts anew where the address names a post that is gone', async () => {
+    const asked: string[] = [];
+    vi.stubGlobal('fetch', async (address: string, { method }: RequestInit) => {
+      asked.push(`${method} ${address}`);
+      const code = 'not_found';
+      const problem = { type: 'about:blank', title: 'Not found', status: 404, detail: 'There is no such post.', code };
+      return Response.json(problem, { status: 404 });
+    });
+    const client = filledClient();
+    client.setQueryData(sheetOptions(SLUG).queryKey, { shots: [] });
+    const { user, container } = show(<PostStrip slug={SLUG} />, { client, at: `/p/${SLUG}/post?draft=old` });
+    await screen.findByText('There is no such post. Frames you choose here start a new one.');
+    const frames = [1, 2].map((number) => new File(['x'], `a.${number}.png`, { type: 'image/png' }));
+    await user.upload(container.querySelector<HTMLInputElement>('input[type=file]')!, frames);
+    await waitFor(() => expect(asked).toHaveLength(2));
+    expect(asked).toEqual(['GET /api/drafts/old', `POST /api/productions/${SLUG}/drafts`]);
+  });
+
   test('leads to the take when the answer to an earlier try was lost', async () => {
     const problem = new ApiProblem({ code: 'draft_closed', status: 409, detail: 'This strip is posted already.' });
     const { user } = showForm({ problem });

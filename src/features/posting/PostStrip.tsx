@@ -2,6 +2,8 @@ import { useIsMutating, useQuery } from '@tanstack/react-query';
 import { useCallback, useEffect, useRef, useState } from 'react';
 import { useNavigate, useSearchParams } from 'react-router';
 import type { Draft } from '../../../shared/api/drafts.ts';
+import { ErrorNote } from '../../components/ErrorNote.tsx';
+import { ApiProblem } from '../../lib/ApiProblem.ts';
 import { draftOptions } from '../../lib/queries/draft.ts';
 import { sheetOptions } from '../../lib/queries/shots.ts';
 import { paths } from '../../lib/paths.ts';
@@ -15,9 +17,13 @@ import { type Upload, useUpload } from './useUpload.ts';
 export function PostStrip({ slug }: { slug: string }) {
   const navigate = useNavigate();
   const [search, setSearch] = useSearchParams();
-  const draftId = search.get('draft');
+  const asked = search.get('draft');
   const { data: sheet } = useQuery(sheetOptions(slug));
-  const { data: draft } = useQuery({ ...draftOptions(draftId ?? ''), enabled: draftId !== null });
+  const reading = useQuery({ ...draftOptions(asked ?? ''), enabled: asked !== null });
+  // Frames may not be sent to a post that takes none: they start a new one.
+  const gone = reading.error instanceof ApiProblem && GONE.has(reading.error.code) ? reading.error.detail : null;
+  const draftId = gone === null ? asked : null;
+  const draft = gone === null ? reading.data : undefined;
   const post = usePost(slug, draftId);
   const underWay = useRef(false);
 
@@ -43,6 +49,7 @@ export function PostStrip({ slug }: { slug: string }) {
 
   return (
     <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-4 lg:grid-cols-[minmax(0,1fr)_24rem]">
+      {gone !== null && <ErrorNote className="lg:col-span-2">{gone} Frames you choose here start a new one.</ErrorNote>}
       <StripSide draft={draft} sending={sending} onWrongCut={setWrongCut} />
       <PostForm
         slug={slug}
@@ -71,6 +78,9 @@ export function PostStrip({ slug }: { slug: string }) {
     </div>
   );
 }
+
+/** The address may be an old one: the post was posted, thrown away, or is someone else's. */
+const GONE = new Set<ApiProblem['code']>(['draft_closed', 'not_found', 'not_allowed']);
 
 /** Why the strip cannot be posted yet, as a sentence; null when it can. */
 function notYet(upload: Upload, draft: Draft | undefined, changing: boolean, wrongCut: boolean): string | null {

@@ -61,6 +61,18 @@ describe('a draft as a whole', () => {
     expect(ready).toBe(true);
   });
 
+  test('names a file without a number among numbered ones, which hides gaps', () => {
+    const numbered = [picture('t1.png'), picture('t2.png'), picture('t4.png')];
+    expect(viewDraft(draft(), [...numbered, picture('cover.png')]).warnings).toEqual([
+      '“cover.png” carries no frame number like the rest; take it out if it does not belong.',
+    ]);
+    const [more] = viewDraft(draft(), [...numbered, picture('cover.png'), picture('end.png')]).warnings;
+    expect(more).toBe(
+      '“cover.png” and one more carry no frame number like the rest; take them out if they do not belong.',
+    );
+    expect(viewDraft(draft(), [picture('a.png'), picture('b.png')]).warnings).toEqual([]);
+  });
+
   test('takes a single picture for a strip only when it is cut', () => {
     expect(viewDraft(draft(), [picture('strip 7.png')])).toMatchObject({ ready: false, firstFrame: null });
     expect(viewDraft(draft({ grid }), [picture('strip 7.png')])).toMatchObject({ ready: true, warnings: [] });
