@@ -190,51 +190,92 @@ export function follow(
   from = 0,
   to = times.length,
 ): void {
-  const { spans, shape } = path;
+  const { spans } = path;
   const last = spans.length - 1;
-  const depth = path.depthAt;
+  let i = from;
+  for (let s = 0; s <= last && i < to; s += 1) {
+    const end = s === last ? Infinity : knots.t[s + 1]!;
+    const begin = i;
+    while (i < to && times[i]! - (i >= path.delayFrom ? path.delay : 0) <= end) i += 1;
+    if (i > begin) followSpan(path, theta, knots, s, times, xs, ys, begin, i);
+  }
+  if (path.depthAt >= 0) lookFrom(path, theta, knots, times, xs, ys, from, to);
+}
+
+/** Places along one span, as if seen flat. */
+function followSpan(
+  path: Path,
+  theta: Float64Array,
+  knots: Knots,
+  s: number,
+  times: Float64Array,
+  xs: Float64Array,
+  ys: Float64Array,
+  from: number,
+  to: number,
+): void {
+  const span = path.spans[s]!;
+  const x0 = knots.x[s]!;
+  const y0 = knots.y[s]!;
+  if (span.kind === 'rest') {
+    xs.fill(x0, from, to);
+    ys.fill(y0, from, to);
+    return;
+  }
+  const start = knots.t[s]!;
+  const length = knots.t[s + 1]! - start;
+  const dx = knots.x[s + 1]! - x0;
+  const dy = knots.y[s + 1]! - y0;
+  const g = span.kind === 'flight' ? theta[span.gravity]! : 0;
+  const { shape, delayFrom, delay } = path;
+  if (!shape || shape.span !== s) {
+    const vx = dx / length;
+    const vy = dy / length - 0.5 * g * length;
+    for (let i = from; i < to; i += 1) {
+      const u = times[i]! - (i >= delayFrom ? delay : 0) - start;
+      xs[i] = x0 + vx * u;
+      ys[i] = y0 + u * (vy + 0.5 * g * u);
+    }
+    return;
+  }
+  const held = shape.name === 'hang' || shape.name === 'hang-up' ? theta[path.shapeAt]! : 0;
+  const lengthY = length - held;
+  const vx = dx / (shape.name === 'hang' ? lengthY : length);
+  const vy = dy / lengthY - 0.5 * g * lengthY;
+  const across = Math.max(Math.abs(dx), 1e-3 * Math.abs(g) * length * length);
+  const apex = lengthY / 2 - dy / (lengthY * g);
+  const bend = (g * length) / across;
+  for (let i = from; i < to; i += 1) {
+    const u = times[i]! - (i >= delayFrom ? delay : 0) - start;
+    warpTime(shape, theta, path.shapeAt, u, lengthY, apex, bend, warped);
+    const uy = warped[1]!;
+    xs[i] = x0 + vx * warped[0]!;
+    ys[i] = y0 + uy * (vy + 0.5 * g * uy);
+  }
+}
+
+/** Divides places by their depth: relative depth speed while the thing moves, and the share of depth per px of height. */
+function lookFrom(
+  path: Path,
+  theta: Float64Array,
+  knots: Knots,
+  times: Float64Array,
+  xs: Float64Array,
+  ys: Float64Array,
+  from: number,
+  to: number,
+): void {
+  const { spans, depthAt, delayFrom, delay } = path;
+  const last = spans.length - 1;
   const moveFrom = spans[0]!.kind === 'rest' ? knots.t[1]! : -Infinity;
   const moveTo = spans[last]!.kind === 'rest' && last > 0 ? knots.t[last]! : Infinity;
-  let s = 0;
+  const speed = theta[depthAt]!;
+  const tilt = theta[depthAt + 1]!;
   for (let i = from; i < to; i += 1) {
-    const t = times[i]! - (i >= path.delayFrom ? path.delay : 0);
-    while (s < last && t > knots.t[s + 1]!) s += 1;
-    while (s > 0 && t <= knots.t[s]!) s -= 1;
-    const span = spans[s]!;
-    const x0 = knots.x[s]!;
-    const y0 = knots.y[s]!;
-    let x = x0;
-    let y = y0;
-    if (span.kind !== 'rest') {
-      const length = knots.t[s + 1]! - knots.t[s]!;
-      const dx = knots.x[s + 1]! - x0;
-      let ux = t - knots.t[s]!;
-      let uy = ux;
-      const g = span.kind === 'flight' ? theta[span.gravity]! : 0;
-      const dy = knots.y[s + 1]! - y0;
-      let lengthX = length;
-      let lengthY = length;
-      if (shape && shape.span === s) {
-        if (shape.name === 'hang' || shape.name === 'hang-up') {
-          lengthY = length - theta[path.shapeAt]!;
-          if (shape.name === 'hang') lengthX = lengthY;
-        }
-        const across = Math.max(Math.abs(dx), 1e-3 * Math.abs(g) * length * length);
-        const apex = lengthY / 2 - dy / (lengthY * g);
-        warpTime(shape, theta, path.shapeAt, ux, lengthY, apex, (g * length) / across, warped);
-        ux = warped[0]!;
-        uy = warped[1]!;
-      }
-      x = x0 + (dx * ux) / lengthX;
-      y = y0 + (dy * uy) / lengthY + 0.5 * g * uy * (uy - lengthY);
-    }
-    if (depth >= 0) {
-      const moving = t < moveFrom ? moveFrom : t > moveTo ? moveTo : t;
-      const away = 1 + theta[depth]! * moving + theta[depth + 1]! * y;
-      x /= away;
-      y /= away;
-    }
-    xs[i] = x;
-    ys[i] = y;
+    const t = times[i]! - (i >= delayFrom ? delay : 0);
+    const moving = t < moveFrom ? moveFrom : t > moveTo ? moveTo : t;
+    const away = 1 + speed * moving + tilt * ys[i]!;
+    xs[i] = xs[i]! / away;
+    ys[i] = ys[i]! / away;
   }
 }

@@ -13,6 +13,8 @@ export interface Slopes {
   moves: Uint8Array;
   tx: Float64Array;
   ty: Float64Array;
+  wx: Float64Array;
+  wy: Float64Array;
   normal: Float64Array;
   damped: Float64Array;
   gradient: Float64Array;
@@ -37,6 +39,8 @@ export function roomFor(n: number, p: number): Slopes {
       moves: new Uint8Array(sharedSize),
       tx: new Float64Array(sharedMarks),
       ty: new Float64Array(sharedMarks),
+      wx: new Float64Array(sharedMarks),
+      wy: new Float64Array(sharedMarks),
       normal: new Float64Array(sharedSize * sharedSize),
       damped: new Float64Array(sharedSize * sharedSize),
       gradient: new Float64Array(sharedSize),
@@ -142,7 +146,7 @@ function firstDrawings(path: Path, knots: Knots, times: Float64Array): Int32Arra
 
 /** Normal matrix and gradient of the weighted residuals, from slopes worked out before. */
 export function gather(samples: Samples, xs: Float64Array, ys: Float64Array, p: number, room: Slopes): void {
-  const { rows, stride, from, to, normal, gradient, tx, ty } = room;
+  const { rows, stride, from, to, normal, gradient, tx, ty, wx, wy } = room;
   const { weight } = samples;
   for (let i = 0; i < xs.length; i += 1) {
     tx[i] = weight[i]! * (samples.x[i]! - xs[i]!);
@@ -156,6 +160,12 @@ export function gather(samples: Samples, xs: Float64Array, ys: Float64Array, p: 
     if (moves & 1) for (let i = from[a]!; i < to[a]!; i += 1) slope += rows[ax + i]! * tx[i]!;
     if (moves & 2) for (let i = from[a]!; i < to[a]!; i += 1) slope += rows[ay + i]! * ty[i]!;
     gradient[a] = slope;
+    // The row times the weights, once for all the rows it meets.
+    for (let i = from[a]!; i < to[a]!; i += 1) {
+      const w = weight[i]!;
+      wx[i] = w * rows[ax + i]!;
+      wy[i] = w * rows[ay + i]!;
+    }
     for (let b = 0; b <= a; b += 1) {
       const bx = 2 * b * stride;
       const by = bx + stride;
@@ -163,8 +173,8 @@ export function gather(samples: Samples, xs: Float64Array, ys: Float64Array, p: 
       const end = Math.min(to[a]!, to[b]!);
       let sum = 0;
       const both = moves & room.moves[b]!;
-      if (both & 1) for (let i = start; i < end; i += 1) sum += weight[i]! * rows[ax + i]! * rows[bx + i]!;
-      if (both & 2) for (let i = start; i < end; i += 1) sum += weight[i]! * rows[ay + i]! * rows[by + i]!;
+      if (both & 1) for (let i = start; i < end; i += 1) sum += wx[i]! * rows[bx + i]!;
+      if (both & 2) for (let i = start; i < end; i += 1) sum += wy[i]! * rows[by + i]!;
       normal[a * p + b] = sum;
       normal[b * p + a] = sum;
     }
