@@ -1,10 +1,8 @@
-import type { FeedCard } from '../../shared/api/feed.ts';
+import { excerptOf, type FeedCard } from '../../shared/api/feed.ts';
 import type { Role } from '../../shared/api/people.ts';
 import type { Note } from '../entities/Note.ts';
 import { presentMember } from './people.presenter.ts';
 import { presentTake, type TakeParts } from './takes.presenter.ts';
-
-const EXCERPT = 160;
 
 export interface CardParts extends TakeParts {
   posterRole: Role | undefined;
@@ -25,14 +23,4 @@ export function presentFeedCard(parts: CardParts): FeedCard {
       excerpt: excerptOf(note.body),
     })),
   };
-}
-
-/** The beginning of a note, cut between words. */
-function excerptOf(body: string): string {
-  const line = body.replaceAll(/\s+/g, ' ');
-  const letters = [...line];
-  if (letters.length <= EXCERPT) return line;
-  const cut = letters.slice(0, EXCERPT).join('');
-  const space = cut.lastIndexOf(' ');
-  return `${space > EXCERPT / 2 ? cut.slice(0, space) : cut}…`;
 }

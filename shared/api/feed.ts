@@ -20,6 +20,19 @@ export const feedCardSchema = z
   .meta({ id: 'FeedCard' });
 export type FeedCard = z.infer<typeof feedCardSchema>;
 
+/** How much of a note a card shows, in characters. */
+const EXCERPT = 160;
+
+/** The beginning of a note on one line, cut between words. Both ends use it, so a card reads the same live and reloaded. */
+export function excerptOf(body: string): string {
+  const line = body.replaceAll(/\s+/g, ' ');
+  const letters = [...line];
+  if (letters.length <= EXCERPT) return line;
+  const cut = letters.slice(0, EXCERPT).join('');
+  const space = cut.lastIndexOf(' ');
+  return `${space > EXCERPT / 2 ? cut.slice(0, space) : cut}…`;
+}
+
 export const feedPageSchema = z.object({ cards: z.array(feedCardSchema), nextCursor: z.string().nullable() });
 export type FeedPage = z.infer<typeof feedPageSchema>;
 

@@ -1,5 +1,5 @@
 import { type InfiniteData, infiniteQueryOptions, type QueryClient } from '@tanstack/react-query';
-import { type FeedCard, type FeedFilter, type FeedPage, feedContracts } from '../../../shared/api/feed.ts';
+import { excerptOf, type FeedCard, type FeedFilter, type FeedPage, feedContracts } from '../../../shared/api/feed.ts';
 import type { Note } from '../../../shared/api/threads.ts';
 import type { Take } from '../../../shared/api/takes.ts';
 import { call } from '../call.ts';
@@ -70,9 +70,6 @@ export function patchCards(client: QueryClient, slug: string, takeId: string, ch
   );
 }
 
-/** How much of a note a card shows, in characters. */
-const EXCERPT = 160;
-
 /** Hangs what was said last from the cards of its take, with what it answers. Older talk than the card has is dropped. */
 export function applyTalk(
   client: QueryClient,
@@ -88,10 +85,6 @@ export function applyTalk(
     const answered = card.talk.filter((one) => one.frame === frame && said.every((note) => note.noteId !== one.noteId));
     return { ...card, talk: [...answered, ...said].slice(-2), take: { ...card.take, noteCount } };
   });
-}
-
-function excerptOf(body: string): string {
-  return body.length > EXCERPT ? `${body.slice(0, EXCERPT - 1).trimEnd()}…` : body;
 }
 
 function belongs(filter: FeedFilter, take: Take, me: string | undefined): boolean {

@@ -152,6 +152,16 @@ describe('talk', () => {
     expect(client.getQueryData(threadsOptions(take.id).queryKey)?.threads).toHaveLength(1);
   });
 
+  test('is cut on the card as the server cuts it: on one line, between words', () => {
+    const take = buildTake();
+    fillFeed([buildCard({ take })]);
+    const thread = buildThread({ takeId: take.id });
+    const [note] = thread.notes;
+    show(pinned(take.id, { ...thread, notes: [{ ...note!, body: 'up\nand down '.repeat(30) }] }));
+    const [said] = feed()[0]!.talk;
+    expect(said!.excerpt).toMatch(/^up and down .*(up|and|down)…$/);
+  });
+
   test('a reply stands under what it answers, in the thread and on the card', () => {
     const take = buildTake();
     const thread = buildThread({ takeId: take.id });
