@@ -9,7 +9,10 @@ import { readSession } from '../services/session.service.ts';
 /** @param authenticate Passport's local strategy; it changes the session's id and signs in */
 export const sessionRoutes = (deps: Deps, authenticate: RequestHandler) => [
   endpoint(sessionContracts.signIn, async ({ req, res }) => {
+    const before = req.sessionID;
     await signIn(authenticate, req, res);
+    // Whoever was signed in here no longer is; their other tabs must not go on under the new name.
+    deps.broadcast.endSession(before);
     return readSession(deps, req.user!);
   }),
   endpoint(sessionContracts.read, ({ user }) => readSession(deps, user)),

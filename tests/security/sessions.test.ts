@@ -75,6 +75,18 @@ describe('sockets', () => {
     elsewhere.close();
   });
 
+  test('end when someone else signs in over their session', async () => {
+    const client = await signIn(server, (await buildMember(server.deps)).user);
+    const tab = await goLive(server, client);
+    const told = message(tab, 'session:ended');
+    const { user } = await buildMember(server.deps);
+    await client.post('/session', { email: user.email, password: PASSWORD }).expect(200);
+    await told;
+    const own = await goLive(server, client);
+    expect(own.socket.connected).toBe(true);
+    own.close();
+  });
+
   test('do not open a production of others, nor hear of it', async () => {
     const { take, production, user } = await buildTake(server.deps);
     const stranger = await goLive(server, await signIn(server, (await buildMember(server.deps)).user));
