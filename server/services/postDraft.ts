@@ -27,17 +27,21 @@ export async function postDraft(deps: Deps, userId: string, draftId: string, giv
     await transaction.update(Draft, { id: draftId }, { status: 'posting' });
     return parts;
   });
+  let take: WireTake;
   try {
     const strip = await stripOf(deps, view);
-    const take = await postTake(deps, userId, production.slug, strip, given);
-    await manager.update(Draft, { id: draftId }, { status: 'posted' });
-    await rm(draftFolder(deps.dataDir, draftId), { recursive: true, force: true });
-    return take;
+    take = await postTake(deps, userId, production.slug, strip, given);
   } catch (error) {
     await rm(cellFolder(deps, draftId), { recursive: true, force: true });
     await manager.update(Draft, { id: draftId, status: 'posting' }, { status: 'open' });
     throw error;
   }
+  // From here on the take is there: whatever fails now must not open the draft to a second post.
+  await manager.update(Draft, { id: draftId }, { status: 'posted' });
+  await rm(draftFolder(deps.dataDir, draftId), { recursive: true, force: true }).catch((error: unknown) =>
+    deps.log.warn({ err: error, draftId }, 'the folder of a posted draft is left to the sweep'),
+  );
+  return take;
 }
 
 /** Where a strip picture is cut into, until its frames are the take's. */
