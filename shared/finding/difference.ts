@@ -69,12 +69,12 @@ export function looseDifference(
 }
 
 /** The difference that noise does not reach, grey levels: the thing covers less than a quarter of the picture. */
-export function noiseThreshold(differences: Uint8Array): number {
+export function noiseThreshold(differences: Uint8Array, least = LEAST_THRESHOLD): number {
   const counts = new Uint32Array(256);
   for (let pixel = 0; pixel < differences.length; pixel += 3) counts[differences[pixel]]++;
   const wanted = Math.ceil(differences.length / 3) * 0.75;
   let seen = 0;
   let quartile = 0;
   while (quartile < 255 && seen + counts[quartile] < wanted) seen += counts[quartile++];
-  return Math.min(LARGEST_THRESHOLD, Math.max(LEAST_THRESHOLD, NOISE_TIMES * quartile));
+  return Math.min(LARGEST_THRESHOLD, Math.max(least, NOISE_TIMES * quartile));
 }

@@ -9,7 +9,7 @@ import { joinParts } from './joinParts.ts';
 import { bestPath } from './link.ts';
 import { cut, type GroundCut, measure } from './measure.ts';
 import { settle } from './settle.ts';
-import { isGrainy, smooth } from './smooth.ts';
+import { isGrainy, isPaletted, smooth } from './smooth.ts';
 import { type FoundTrack, thingsAmong, trackOf } from './tracks.ts';
 import type { Picture, PointAt } from './types.ts';
 
@@ -32,6 +32,8 @@ export interface Found {
 const MOST_SAMPLES = 15;
 /** Paths taken out of the candidates before they are judged: the thing, its shadow, counters, a second thing. */
 const MOST_PATHS = 8;
+/** Least difference that counts where a palette dithers, grey levels. */
+const DITHERED = 16;
 const NAMES = ['A', 'B', 'C'];
 
 /**
@@ -46,6 +48,7 @@ export class Finder {
   readonly #poses: (Pose | undefined)[];
   #ground: Ground | null = null;
   #grainy = false;
+  #least: number | undefined;
   #differences = new Uint8Array(0);
 
   constructor(options: FinderOptions) {
@@ -60,7 +63,9 @@ export class Finder {
 
   /** Learns the background from the pictures at `sampleIndices`, in that order. They are kept until `finish`. */
   learn(samples: Picture[]): void {
-    this.#grainy = isGrainy(samples);
+    const paletted = isPaletted(samples[0]);
+    this.#least = paletted ? DITHERED : undefined;
+    this.#grainy = paletted || isGrainy(samples);
     const clean = this.#grainy ? samples.map(smooth) : samples;
     this.#ground = learnGround(clean, this.sampleIndices, this.#factor, this.#camera);
   }
@@ -78,7 +83,7 @@ export class Finder {
     const pose = ground.poseOf(index, coarse);
     this.#poses[index] = pose;
     const differences = this.#compare(coarse, ground.coarse(pose));
-    const threshold = noiseThreshold(differences);
+    const threshold = noiseThreshold(differences, this.#least);
     const { labels, regions } = regionsOf(differences, coarse.width, coarse.height, threshold);
     for (const region of regions) {
       const box = windowOf(region, this.#factor, picture);

@@ -58,3 +58,16 @@ function grainOf({ width, height, data }: Picture): number {
   const share = counts[quartile] === 0 ? 0 : (total / 4 - seen) / counts[quartile];
   return (quartile + share) / 0.39;
 }
+
+/** Colours of a picture up to which it was reduced to a palette, which dithers: the pixels around a thing change with it. */
+const PALETTE = 256;
+
+/** True when a picture has no more colours than a palette holds. */
+export function isPaletted({ data }: Picture): boolean {
+  const colours = new Set<number>();
+  for (let at = 0; at < data.length; at += 3) {
+    colours.add((data[at] << 16) | (data[at + 1] << 8) | data[at + 2]);
+    if (colours.size > PALETTE) return false;
+  }
+  return true;
+}
