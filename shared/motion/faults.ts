@@ -25,7 +25,6 @@ export function promising(clean: Account, field: Field): Promise[] {
   const samples = { ...field.samples, weight: clean.weight };
   const marks = 2 * (field.drawings.length - clean.left.length) + field.replicates.freedom;
   const squares = clean.noise2 * (clean.freedom + PRIOR_FREEDOM);
-  const deep: [number, number] | undefined = clean.depth ? [theta[path.depthAt]!, theta[path.depthAt + 1]!] : undefined;
   const out: Promise[] = [];
   const marksOf = (gain: number) => marks * Math.log(squares / Math.max(squares - gain, 0.02 * squares));
   const offer = (fault: Fault | null, depth: boolean, gain: number | undefined) => {
@@ -40,10 +39,7 @@ export function promising(clean: Account, field: Field): Promise[] {
   for (const fault of scores ? possibleFaults(clean, field) : []) {
     if (fault.kind === 'held') out.push({ fault, depth: clean.depth, gain: Infinity });
     else if (fault.kind === 'gravity') offer(fault, clean.depth, scoreGravity(scores!, fault.span)?.gain);
-    else {
-      const start = pathOf(base, fault, clean.depth, field, { depth: deep });
-      offer(fault, clean.depth, scoreShape(scores!, start.path, start.theta)?.gain);
-    }
+    else offer(fault, clean.depth, scoreShape(scores!, fault.name, fault.span)?.gain);
   }
   out.sort((a, b) => b.gain - a.gain);
   const best = out.find((one) => Number.isFinite(one.gain))?.gain ?? 0;

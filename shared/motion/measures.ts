@@ -9,7 +9,6 @@ import type { ScoreBase } from './score.ts';
 import { scoreBase, scoreGravity, scoreShape } from './score.ts';
 import type { ShapeName } from './shapes.ts';
 import { SHAPE_NOTHING } from './shapes.ts';
-import { pathOf, sketchFrom } from './sketch.ts';
 import { Z95, Z99_ONE, studentQuantile } from './statistics.ts';
 import type { FlightView, TrackView } from './view.ts';
 
@@ -157,13 +156,9 @@ function shapeNumber(view: TrackView, flight: FlightView, name: ShapeName): Esti
     return { value: fit.theta[fit.path.shapeAt]!, se: errorOf(account, (theta) => theta[fit.path.shapeAt]!) };
   }
   const base = here ? contest.clean : account;
-  const { path, theta, knots } = base.fit;
-  const sketch = sketchFrom(path, theta, knots);
   const scores = scoresOf(view, base);
-  if (!scores || sketch.spans[flight.span]?.kind !== 'flight') return null;
-  const depth: [number, number] = base.depth ? [theta[path.depthAt]!, theta[path.depthAt + 1]!] : [0, 0];
-  const start = pathOf(sketch, { kind: 'shape', name, span: flight.span }, base.depth, view.field, { depth });
-  const score = scoreShape(scores, start.path, start.theta);
+  if (!scores || base.fit.path.spans[flight.span]?.kind !== 'flight') return null;
+  const score = scoreShape(scores, name, flight.span);
   if (!score) return null;
   return { value: SHAPE_NOTHING[name] + score.step, se: score.unit * noiseAfter(view, base, score.gain) };
 }

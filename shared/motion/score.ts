@@ -1,6 +1,7 @@
 import type { PathFit, Samples } from './fit.ts';
-import type { Path } from './path.ts';
-import { follow, makeKnotsFor, placeKnots } from './path.ts';
+import { follow } from './path.ts';
+import type { Shape, ShapeName } from './shapes.ts';
+import { SHAPE_NOTHING } from './shapes.ts';
 import { differentiate, gather, roomFor } from './slopes.ts';
 import { factorCholesky, substitute } from './solve.ts';
 
@@ -50,29 +51,32 @@ export function scoreBase(fit: PathFit, samples: Samples): ScoreBase | null {
   return { fit, samples, slopes, from, to, factor, rest };
 }
 
-/** Scores the shape number of `path`, which is the base's path with a shape at nothing on one of its spans. */
-export function scoreShape(base: ScoreBase, path: Path, theta: Float64Array): Score | null {
-  const { samples } = base;
+/** Scores the number of a shape at nothing on one span of the base that carries no shape yet. */
+export function scoreShape(base: ScoreBase, name: ShapeName, span: number): Score | null {
+  const { samples, fit } = base;
+  const { path, knots } = fit;
   const n = samples.t.length;
-  const knots = makeKnotsFor(path);
-  placeKnots(path, theta, knots);
-  const span = path.shape!.span;
   const from = firstAfter(samples.t, knots.t[span]!);
   const to = firstAfter(samples.t, knots.t[span + 1]!);
-  const plain = { xs: new Float64Array(n), ys: new Float64Array(n) };
-  const bent = { xs: new Float64Array(n), ys: new Float64Array(n) };
-  follow(path, theta, knots, samples.t, plain.xs, plain.ys, from, to);
-  const nothing = theta[path.shapeAt]!;
-  theta[path.shapeAt] = nothing + 1e-6;
-  follow(path, theta, knots, samples.t, bent.xs, bent.ys, from, to);
-  const inverse = 1 / (theta[path.shapeAt]! - nothing);
-  theta[path.shapeAt] = nothing;
+  const last = path.spans.length - 1;
+  const shape: Shape = { name, span, parameters: 1, openStart: span === 0, openEnd: span === last };
+  const theta = new Float64Array(path.size + 1);
+  theta.set(fit.theta);
+  theta[path.size] = SHAPE_NOTHING[name] + SMALL;
+  const bent = { ...path, shape, shapeAt: path.size, size: path.size + 1 };
+  const xs = new Float64Array(n);
+  const ys = new Float64Array(n);
+  follow(bent, theta, knots, samples.t, xs, ys, from, to);
+  const inverse = 1 / (theta[path.size]! - SHAPE_NOTHING[name]);
   for (let i = from; i < to; i += 1) {
-    bent.xs[i] = (bent.xs[i]! - plain.xs[i]!) * inverse;
-    bent.ys[i] = (bent.ys[i]! - plain.ys[i]!) * inverse;
+    xs[i] = (xs[i]! - fit.xs[i]!) * inverse;
+    ys[i] = (ys[i]! - fit.ys[i]!) * inverse;
   }
-  return scoreColumn(base, bent.xs, bent.ys, from, to);
+  return scoreColumn(base, xs, ys, from, to);
 }
+
+/** Step of the forward difference of a shape's number. */
+const SMALL = 1e-6;
 
 /** Scores a gravity of its own for one span: the base's gravity column, over that span's drawings alone. */
 export function scoreGravity(base: ScoreBase, span: number): Score | null {

@@ -122,11 +122,9 @@ export function warpTime(
       break;
     }
     case 'even-path': {
-      const start = shape.openStart && !shape.openEnd ? 2 * apex - length : 0;
-      const end = shape.openEnd && !shape.openStart && apex > 1 ? 2 * apex : length;
-      const from = along((start - apex) * bend);
-      const to = along((end - apex) * bend);
-      const even = apex + alongInverse(from + ((to - from) * (u - start)) / (end - start)) / bend;
+      const ends = endsOf(shape, length, apex, bend);
+      const way = ends.from + ((ends.to - ends.from) * (u - ends.start)) / (ends.end - ends.start);
+      const even = apex + alongInverse(way, (u - apex) * bend) / bend;
       wy = (1 - value) * u + value * even;
       wx = wy;
       break;
@@ -153,16 +151,33 @@ function along(q: number): number {
   return Math.asinh(q) + q * Math.sqrt(1 + q * q);
 }
 
-/** The slope at which `along` reaches `length`, by Newton's method from the limits of short and long arcs. */
-function alongInverse(length: number): number {
-  const size = Math.abs(length);
-  let q = size < 1 ? size / 2 : Math.sqrt(size);
-  for (let i = 0; i < 6; i += 1) {
-    const step = (along(q) - size) / (2 * Math.sqrt(1 + q * q));
+/** The slope at which `along` reaches `length`, by Newton's method from a slope nearby; the way grows evenly enough to end there. */
+function alongInverse(length: number, guess: number): number {
+  let q = guess;
+  for (let i = 0; i < 12; i += 1) {
+    const root = Math.sqrt(1 + q * q);
+    const step = (Math.asinh(q) + q * root - length) / (2 * root);
     q -= step;
-    if (Math.abs(step) < 1e-9 * (1 + q)) break;
+    if (Math.abs(step) < 1e-6 * (1 + Math.abs(q))) break;
   }
-  return length < 0 ? -q : q;
+  return q;
+}
+
+/** Ends of the way along one arc, kept from call to call: they are the same for all drawings of a flight. */
+const known = { length: Number.NaN, apex: 0, bend: 0, open: 0, start: 0, end: 0, from: 0, to: 0 };
+
+function endsOf(shape: Shape, length: number, apex: number, bend: number): typeof known {
+  const open = (shape.openStart ? 1 : 0) + (shape.openEnd ? 2 : 0);
+  if (known.length === length && known.apex === apex && known.bend === bend && known.open === open) return known;
+  known.length = length;
+  known.apex = apex;
+  known.bend = bend;
+  known.open = open;
+  known.start = open === 1 ? 2 * apex - length : 0;
+  known.end = open === 2 && apex > 1 ? 2 * apex : length;
+  known.from = along((known.start - apex) * bend);
+  known.to = along((known.end - apex) * bend);
+  return known;
 }
 
 /** Time from the apex to the end of the flight on one side; where that end is not seen, the other side's. */
