@@ -24,9 +24,9 @@ export async function analyseFrames(
   const { tracks, camera, cautions, width, height } = frameNumbers ? atTheirFrames(staged, frameNumbers) : staged;
   const frames = frameNumbers?.at(-1) ?? total;
   report({ done: 0, total, phase: 'reading' });
-  const { id, kind, firstFrame, fps, hold, scale, tolerances } = request;
+  const { id, kind, firstFrame, fps, hold, scale, gravity, tolerances } = request;
   const reading = readMotion(
-    { id, kind, frames, width, height, firstFrame, fps, hold, scale, camera, tracks, cautions },
+    { id, kind, frames, width, height, firstFrame, fps, hold, scale, gravity, camera, tracks, cautions },
     { tolerances },
   );
   report({ done: total, total, phase: 'reading' });

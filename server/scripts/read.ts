@@ -49,6 +49,7 @@ function readPictures(options: ReadOptions): Promise<Reading> {
         fps: options.fps ?? fps ?? { num: 24, den: 1 },
         hold: options.hold,
         scale: options.pxPerMetre === undefined ? null : { pxPerMetre: options.pxPerMetre },
+        gravity: options.gravity,
         object: options.object && { ...options.object, frame: options.object.frame - start + 1 },
       },
       () => undefined,

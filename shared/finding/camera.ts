@@ -15,6 +15,8 @@ const LEAST_SLOPE = 8;
 const LEAST_MOVE = 0.4;
 /** How much better a zoom has to explain two pictures before one is believed. */
 const ZOOM_GAIN = 0.9;
+/** Difference in misfit up to which two places fit alike. */
+const ALIKE = 0.05;
 const SPECTRUM = 256;
 
 /**
@@ -55,7 +57,11 @@ function stepBetween(before: Grey[], after: Grey[], last: Pose): Pose {
   const scale = 2 ** (LEVELS - 1);
   const starts: Pose[] = [STILL, last, { dx: -shift.x * scale, dy: -shift.y * scale, zoom: 1 }];
   const tried = starts.map((start) => align(before, after, { ...start, zoom: 1 }, false, 1));
-  const best = tried.reduce((least, one) => (one.misfit < least.misfit ? one : least));
+  const least = Math.min(...tried.map(({ misfit }) => misfit));
+  // A fence or a brick wall fits in several places: of those that fit alike, the camera's own way so far decides.
+  const alike = tried.filter(({ misfit }) => misfit <= least + ALIKE);
+  const off = ({ pose }: Alignment): number => Math.hypot(pose.dx - last.dx, pose.dy - last.dy);
+  const best = alike.reduce((nearest, one) => (off(one) < off(nearest) ? one : nearest));
   return withZoomWhereNeeded(before, after, align(before, after, best.pose, false)).pose;
 }
 

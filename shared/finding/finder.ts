@@ -1,6 +1,6 @@
 import type { Mark, Reading } from '../reading/document.ts';
 import type { Pose } from './align.ts';
-import { type Candidate, candidateOf, foreignIn, regionsOf, windowOf, withoutDust } from './candidates.ts';
+import { type Candidate, candidateOf, foreignIn, ontoPicture, regionsOf, windowOf, withoutDust } from './candidates.ts';
 import { coarseFactor, reduce } from './coarse.ts';
 import { difference, looseDifference, noiseThreshold } from './difference.ts';
 import { type Ground, learnGround } from './ground.ts';
@@ -45,6 +45,7 @@ export class Finder {
   readonly #frames: Candidate[][];
   readonly #factor: number;
   readonly #camera: FinderOptions['camera'];
+  readonly #object: PointAt | undefined;
   readonly #poses: (Pose | undefined)[];
   #ground: Ground | null = null;
   #grainy = false;
@@ -54,6 +55,7 @@ export class Finder {
   constructor(options: FinderOptions) {
     this.#factor = coarseFactor(options.width, options.height);
     this.#camera = options.camera;
+    this.#object = options.object;
     this.#poses = Array.from({ length: options.frames });
     this.#frames = Array.from({ length: options.frames }, () => []);
     const count = Math.min(MOST_SAMPLES, options.frames);
@@ -112,7 +114,7 @@ export class Finder {
       rest = rest.map((candidates) => candidates.filter((candidate) => !taken.has(candidate)));
       tracks.push(trackOf(path));
     }
-    const named = thingsAmong(joinParts(tracks));
+    const { named, cautions } = this.#choose(joinParts(tracks));
     const things = named.map((thing) => {
       const others = new Set(named.filter((other) => other !== thing).flatMap((other) => other.path));
       return extend(
@@ -123,8 +125,19 @@ export class Finder {
     return {
       tracks: things.map((thing, k) => ({ id: NAMES[k], marks: marksOf(thing) })),
       camera: this.#cameraMove(),
-      cautions: things.length === 0 ? ['Nothing moves in these frames, so there is no flight to read.'] : [],
+      cautions,
     };
+  }
+
+  /** The things that are to be followed: what someone pointed at, or what is in flight. */
+  #choose(tracks: FoundTrack[]): { named: FoundTrack[]; cautions: string[] } {
+    const object = this.#object;
+    const pointed = object && trackAt(tracks, object);
+    if (pointed) return { named: [pointed], cautions: [] };
+    const named = thingsAmong(tracks);
+    const cautions = named.length === 0 ? ['Nothing moves in these frames, so there is no flight to read.'] : [];
+    if (object) cautions.unshift('Nothing stands out where you pointed, so what moves most was followed.');
+    return { named, cautions };
   }
 
   /** The camera's way against the first frame, px of the full picture. */
@@ -139,6 +152,24 @@ export class Finder {
     });
     return { moved: true, offsets };
   }
+}
+
+/** How far from a thing someone may point, in its radii, and px that are always near enough. */
+const POINTED = 1.5;
+const NEAR = 12;
+
+/** The track that has something nearest to the place that was pointed at, on that frame; null where nothing is near. */
+function trackAt(tracks: FoundTrack[], point: PointAt): FoundTrack | null {
+  let best: { track: FoundTrack; distance: number } | null = null;
+  for (const track of tracks) {
+    const candidate = track.path.find(({ index }) => index === point.frame - 1);
+    if (!candidate) continue;
+    const place = ontoPicture(candidate.whole, candidate.pose);
+    const distance = Math.hypot(place.x - point.x, place.y - point.y);
+    if (distance > Math.max(NEAR, POINTED * track.radius)) continue;
+    if (!best || distance < best.distance) best = { track, distance };
+  }
+  return best?.track ?? null;
 }
 
 function marksOf(track: FoundTrack): Mark[] {

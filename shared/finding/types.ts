@@ -28,6 +28,8 @@ export interface AnalysisRequest {
   /** Left out: found from the marks. */
   hold?: Hold;
   scale?: { pxPerMetre: number } | null;
+  /** The production's gravity in m/s²; left out: standard gravity. */
+  gravity?: number;
   tolerances?: Tolerances;
   /** `still` switches the search for a moving camera off. Left out: found. */
   camera?: 'still' | 'moving';

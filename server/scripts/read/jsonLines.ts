@@ -56,6 +56,7 @@ function readLine(text: string, number: number, options: ReadOptions): Reading {
     fps: options.fps ?? frameRateOf(fps),
     hold: options.hold ?? hold ?? undefined,
     scale: options.pxPerMetre === undefined ? null : { pxPerMetre: options.pxPerMetre },
+    gravity: options.gravity,
     tracks: [{ id: 'A', marks: marks.map((mark) => ({ ...mark, origin: 'import' })) }],
   });
 }

@@ -37,6 +37,7 @@ export async function readMarksCsv(options: ReadOptions): Promise<Reading> {
       fps: options.fps ?? { num: 24, den: 1 },
       hold: options.hold,
       scale: options.pxPerMetre === undefined ? null : { pxPerMetre: options.pxPerMetre },
+      gravity: options.gravity,
       tracks: imported.map(({ object, marks }) => ({
         id: object,
         marks: marks.map((mark) => ({ ...mark, frame: mark.frame - firstFrame + 1 })),

@@ -91,6 +91,24 @@ describe('what moves in a take', { timeout: 60_000 }, () => {
     expect(Math.max(...near)).toBeLessThan(0.5);
   });
 
+  it('is what someone pointed at, and nothing else', () => {
+    const other = (frame: number): Place => ({ x: 290 - 9 * frame, y: 60 + 0.4 * frame * frame });
+    const { pictures, places } = paintTake({ discs: [toss, other], radius: 7 });
+    for (const disc of [0, 1]) {
+      const { x, y } = places[4][disc]!;
+      const found = findIn(pictures, { object: { x: x + 3, y: y - 2, frame: 5 } });
+      expect(found.tracks).toHaveLength(1);
+      expect(mean(errorsOf(found, 0, places, disc))).toBeLessThan(0.5);
+    }
+  });
+
+  it('is said to be elsewhere when nothing is where someone pointed', () => {
+    const { pictures } = paintTake({});
+    const found = findIn(pictures, { object: { x: 5, y: 5, frame: 3 } });
+    expect(found.tracks).toHaveLength(1);
+    expect(found.cautions[0]).toContain('Nothing stands out where you pointed');
+  });
+
   it('is nothing where nothing moves, and the caution says so', () => {
     const found = findInTake({ discs: [() => ({ x: 100, y: 100 })] });
     expect(found.tracks).toEqual([]);
