@@ -13,7 +13,18 @@ export const shotNumberSchema = z
   .regex(/^[A-Za-z0-9]+([-_.][A-Za-z0-9]+)*$/, 'A shot number is letters and digits in groups, such as 020-0140.')
   .max(40);
 
-export const shotTitleSchema = z.string().trim().min(1, 'Give the shot a title.').max(120);
+/** Whether a text shows anything: spaces, control characters and joiners of no width alone are no word. */
+export function showsSomething(text: string): boolean {
+  return /[^\s\p{Cc}\p{Cf}]/u.test(text);
+}
+
+const NO_TITLE = 'Give the shot a title.';
+export const shotTitleSchema = z
+  .string()
+  .trim()
+  .min(1, { error: NO_TITLE, abort: true })
+  .max(120, 'A title holds 120 characters.')
+  .refine(showsSomething, NO_TITLE);
 
 /** The sequence a shot belongs to: what stands before the first hyphen, underscore or dot of its number. */
 export function sequenceOf(shotNumber: string): string {

@@ -1,13 +1,16 @@
 import { z } from 'zod';
 import { contract } from './contract.ts';
+import { showsSomething } from './names.ts';
 import { memberSchema } from './people.ts';
 import { stampBoardSchema } from './stamps.ts';
 
+const NOTHING_WRITTEN = 'Write something first.';
 export const noteBodySchema = z
   .string()
   .trim()
-  .min(1, 'Write something first.')
-  .max(4000, 'A note holds 4,000 characters; split it in two.');
+  .min(1, { error: NOTHING_WRITTEN, abort: true })
+  .max(4000, 'A note holds 4,000 characters; split it in two.')
+  .refine(showsSomething, NOTHING_WRITTEN);
 
 export const noteSchema = z
   .object({

@@ -46,6 +46,15 @@ describe('threads', () => {
     ]);
   });
 
+  test.each([
+    ['nothing', ''],
+    ['only spaces', ' \n\t '],
+    ['only what nobody sees', '\u200B\u2060\u0000'],
+  ])('take no note that shows %s', async (_, body) => {
+    const answer = await mentor.client.post(`/takes/${takeId}/threads`, { frame: 1, body }).expect(422);
+    expect(answer.body).toMatchObject({ detail: 'Write something first.', fields: [{ path: 'body' }] });
+  });
+
   test('keep what was written, pictograms and all', async () => {
     const words = 'Über die Ecke 🪁👩‍👩‍👧 <b>not bold</b> & "so on"';
     const { body } = await animator.client.post(`/takes/${takeId}/threads`, { frame: 3, body: words }).expect(201);
