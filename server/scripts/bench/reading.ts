@@ -65,16 +65,20 @@ function read(track: TrackLine): void {
   });
 }
 
-/**
- * Microseconds of one call: the least of several short batches, so that what others do on the machine meanwhile does not count.
- * Batches of a millisecond or two on both sides keep the ratio fair.
- */
-function costOf(run: () => void, batch: number, batches: number): number {
-  let least = Infinity;
-  for (let k = 0; k < batches; k += 1) {
-    const before = process.hrtime.bigint();
-    for (let i = 0; i < batch; i += 1) run();
-    least = Math.min(least, Number(process.hrtime.bigint() - before) / 1000 / batch);
+/** Processor time of a number of calls, microseconds a call: what others do on the machine meanwhile hardly counts. */
+function costOf(run: () => void, times: number): number {
+  const before = process.cpuUsage();
+  for (let i = 0; i < times; i += 1) run();
+  return process.cpuUsage(before).user / times;
+}
+
+/** Costs of several things, measured in turns so that a slow moment of the machine falls on all of them; the least of each. */
+function inTurns(runs: { run: () => void; times: number }[], turns: number): number[] {
+  const least = runs.map(() => Infinity);
+  for (let turn = 0; turn < turns; turn += 1) {
+    runs.forEach(({ run, times }, k) => {
+      least[k] = Math.min(least[k]!, costOf(run, times));
+    });
   }
   return least;
 }
@@ -94,12 +98,16 @@ export function benchReading(): void {
     fitQuadratic(t, y);
   };
   const some = tracks().filter((track) => track.marks.length >= 20 && track.marks.length <= 28);
-  costOf(bare, 200, 30);
-  costOf(own, 5000, 10);
-  some.forEach(read);
-  const qr = costOf(bare, 200, 60);
-  const ours = costOf(own, 5000, 60);
-  const reading = some.reduce((sum, track) => sum + costOf(() => read(track), 1, 6), 0) / some.length;
+  const all = () => some.forEach(read);
+  const [qr = 1, ours = 1, whole = 1] = inTurns(
+    [
+      { run: bare, times: 30_000 },
+      { run: own, times: 300_000 },
+      { run: all, times: 1 },
+    ],
+    5,
+  );
+  const reading = whole / some.length;
   const print = (line: string) => process.stdout.write(`${line}\n`);
   print(`bare quadratic fit of 24 marks, ml-matrix QR   ${qr.toFixed(2)} µs`);
   print(
@@ -112,7 +120,7 @@ export function benchReading(): void {
   const costs = sizes.map((count) => {
     const track = { id: 'long', fps: 24, hold: 1 as const, width: 0, height: 0, marks: bounces(count, 16, 0.3, 5) };
     read(track);
-    return costOf(() => read(track), 1, count > 500 ? 4 : 12);
+    return inTurns([{ run: () => read(track), times: count > 500 ? 2 : 10 }], 4)[0]!;
   });
   sizes.forEach((count, i) => {
     const growth = costs[i]! / costs[0]! / (count / sizes[0]!);
