@@ -38,10 +38,10 @@ interface Place {
   folder: string;
 }
 
-/** Whatever else this machine does can only slow a start down, so the quickest of three counts. */
+/** Whatever else this machine does can only slow a start down, so the quickest of five counts. */
 async function quickStart(place: Place): Promise<void> {
   const times: number[] = [];
-  while (times.length < 3) {
+  while (times.length < 5) {
     const seconds = await startAndStop('second start', place, { not: ['Installing', 'Building'] });
     if (seconds <= secondStartWithin) return;
     times.push(seconds);
