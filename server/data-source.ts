@@ -19,6 +19,7 @@ import { Thread } from './entities/Thread.ts';
 import { User } from './entities/User.ts';
 import type { DatabaseConnection } from './env.ts';
 
+/** Every table there is. */
 export const ENTITIES = [
   User,
   Production,

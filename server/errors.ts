@@ -56,6 +56,7 @@ export function problemOf(error: AppError): Problem {
   };
 }
 
+/** @param what as it stands in the sentence: "take" gives "There is no such take." */
 export function notFound(what: string): AppError {
   return new AppError('not_found', `There is no such ${what}.`);
 }

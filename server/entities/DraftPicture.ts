@@ -1,6 +1,7 @@
 import { Column, Entity, JoinColumn, ManyToOne, PrimaryColumn, type Relation } from 'typeorm';
 import { Draft } from './Draft.ts';
 
+/** A picture of a post that is being put together. */
 @Entity('draft_pictures')
 export class DraftPicture {
   @PrimaryColumn({ type: 'uuid' })
@@ -10,7 +11,7 @@ export class DraftPicture {
   @PrimaryColumn({ type: 'varchar', length: 255, charset: 'utf8mb4', collation: 'utf8mb4_bin' })
   name!: string;
 
-  /** Our own name for the file in the draft's folder, without its ending. */
+  /** Our own name for the file in the draft's folder; never the name it was chosen under. */
   @Column({ type: 'varchar', length: 40 })
   file!: string;
 

@@ -3,6 +3,7 @@ import type { Role } from '../../shared/api/people.ts';
 import { Production } from './Production.ts';
 import { User } from './User.ts';
 
+/** Who is on a production, and as what. */
 @Entity('memberships')
 export class Membership {
   @PrimaryColumn({ type: 'uuid' })

@@ -2,6 +2,7 @@ import { Column, Entity, Index, JoinColumn, ManyToOne, PrimaryColumn, type Relat
 import { Thread } from './Thread.ts';
 import { User } from './User.ts';
 
+/** Something said in a thread: the note that was pinned, or a reply. */
 @Entity('notes')
 export class Note {
   @PrimaryColumn({ type: 'uuid' })

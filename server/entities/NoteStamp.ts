@@ -3,6 +3,7 @@ import type { StampKind } from '../../shared/api/stamps.ts';
 import { Note } from './Note.ts';
 import { User } from './User.ts';
 
+/** One kind of stamp by one person on a note. */
 @Entity('note_stamps')
 export class NoteStamp {
   @PrimaryColumn({ type: 'uuid' })

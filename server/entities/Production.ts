@@ -1,6 +1,7 @@
 import { Column, Entity, PrimaryColumn } from 'typeorm';
 import type { Tolerances } from '../../shared/reading/tolerances.ts';
 
+/** A production; everything but people belongs to one. */
 @Entity('productions')
 export class Production {
   @PrimaryColumn({ type: 'uuid' })

@@ -2,6 +2,7 @@ import { Column, Entity, JoinColumn, OneToOne, PrimaryColumn, type Relation } fr
 import type { Sketch } from '../../shared/api/takes.ts';
 import { Take } from './Take.ts';
 
+/** The newest reading of a take. */
 @Entity('readings')
 export class Reading {
   @PrimaryColumn({ type: 'uuid' })

@@ -1,6 +1,7 @@
 import { Column, Entity, JoinColumn, ManyToOne, PrimaryColumn, type Relation, Unique } from 'typeorm';
 import { Production } from './Production.ts';
 
+/** A shot: what takes are takes of. */
 @Entity('shots')
 @Unique(['productionId', 'number'])
 export class Shot {

@@ -7,6 +7,7 @@ import { User } from './User.ts';
 
 export type ReadingStatus = 'queued' | 'reading' | 'read' | 'failed';
 
+/** A strip as it was posted, with what became of it. */
 @Entity('takes')
 @Unique(['shotId', 'number'])
 @Unique(['productionId', 'postedSeq'])

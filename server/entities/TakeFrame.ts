@@ -1,6 +1,7 @@
 import { Column, Entity, JoinColumn, ManyToOne, PrimaryColumn, type Relation } from 'typeorm';
 import { Take } from './Take.ts';
 
+/** A frame of a take that has a picture; one that was missing in the post has no row. */
 @Entity('take_frames')
 export class TakeFrame {
   @PrimaryColumn({ type: 'uuid' })

@@ -3,6 +3,7 @@ import type { StampKind } from '../../shared/api/stamps.ts';
 import { Take } from './Take.ts';
 import { User } from './User.ts';
 
+/** One kind of stamp by one person on a take. */
 @Entity('take_stamps')
 export class TakeStamp {
   @PrimaryColumn({ type: 'uuid' })

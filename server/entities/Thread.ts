@@ -1,6 +1,7 @@
 import { Column, Entity, Index, JoinColumn, ManyToOne, PrimaryColumn, type Relation } from 'typeorm';
 import { Take } from './Take.ts';
 
+/** A talk pinned to a frame of a take. Its first note is what was pinned. */
 @Entity('threads')
 export class Thread {
   @PrimaryColumn({ type: 'uuid' })

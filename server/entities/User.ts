@@ -1,5 +1,6 @@
 import { Column, Entity, PrimaryColumn } from 'typeorm';
 
+/** Someone who can sign in. */
 @Entity('users')
 export class User {
   @PrimaryColumn({ type: 'uuid' })

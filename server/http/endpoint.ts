@@ -4,15 +4,10 @@ import type { z } from 'zod';
 import type { Contract, Parsed } from '../../shared/api/contract.ts';
 import { AppError, notFound } from '../errors.ts';
 import type { PersonParts } from '../presenters/people.presenter.ts';
+import type { PictureFile } from '../services/pictures.service.ts';
 import { requireUser } from './requireUser.ts';
 
 type ObjectSchema = z.ZodObject;
-
-/** A file of ours that answers a request: its absolute path and media type. The client never names a path. */
-export interface FileAnswer {
-  path: string;
-  mediaType: string;
-}
 
 /** What a handler is given: the parsed values, never the raw ones. */
 export interface Call<Params, Query, Body> {
@@ -29,7 +24,7 @@ type Answer<C> =
   C extends Contract<infer _P, infer _Q, infer _B, infer R>
     ? R extends z.ZodType
       ? z.input<R>
-      : void | FileAnswer
+      : void | PictureFile
     : never;
 
 export interface Endpoint {
@@ -95,7 +90,7 @@ function parseParams(schema: z.ZodType | undefined, value: unknown): unknown {
 }
 
 async function send(res: Response, contract: Contract, answer: unknown): Promise<void> {
-  if (contract.binary) return sendPicture(res, answer as FileAnswer);
+  if (contract.binary) return sendPicture(res, answer as PictureFile);
   res.set('Cache-Control', 'no-store');
   if (!contract.response) {
     res.status(contract.status ?? 204).end();
@@ -106,7 +101,7 @@ async function send(res: Response, contract: Contract, answer: unknown): Promise
 }
 
 /** A frame never changes under its address, and only those who may see it get it: private, for good. */
-function sendPicture(res: Response, { path, mediaType }: FileAnswer): Promise<void> {
+function sendPicture(res: Response, { path, mediaType }: PictureFile): Promise<void> {
   return new Promise((resolve, reject) => {
     const headers = { 'Content-Type': mediaType, 'Cache-Control': 'private, max-age=31536000, immutable' };
     res.sendFile(path, { dotfiles: 'allow', cacheControl: false, headers }, (error) => {

@@ -8,21 +8,14 @@ import type { Request, Response } from 'express';
 import multer from 'multer';
 import { MAX_PICTURE_BYTES, MAX_PICTURES_PER_BATCH } from '../../shared/api/drafts.ts';
 import { AppError, codeOf } from '../errors.ts';
-
-/** A file that arrived: under a name of ours on disk, with the name the person knows it by. */
-export interface ReceivedFile {
-  path: string;
-  name: string;
-  /** Also what lay beyond the limit and was not stored. */
-  bytes: number;
-}
+import type { ArrivedFile } from '../services/draftPictures.service.ts';
 
 /** Writes the pictures of a multipart request into a folder. A file that is too large is cut off and counted on. */
 export async function receivePictures(
   req: Request,
   res: Response,
   { field, folder }: { field: string; folder: string },
-): Promise<ReceivedFile[]> {
+): Promise<ArrivedFile[]> {
   const upload = multer({
     storage: storeIn(folder),
     limits: { files: MAX_PICTURES_PER_BATCH, fields: 0, parts: MAX_PICTURES_PER_BATCH + 1, fieldNameSize: 100 },

@@ -6,6 +6,7 @@ import type { DatabaseConnection } from '../env.ts';
 
 type StorePool = ConstructorParameters<ReturnType<typeof mysqlSession>>[1];
 
+/** Name of the cookie that carries the session. */
 export const SESSION_COOKIE = 'spandrel.sid';
 const TWO_WEEKS = 14 * 24 * 60 * 60 * 1000;
 const TOUCH_EVERY = 60 * 1000;

@@ -13,6 +13,7 @@ export interface DraftParts {
   ready: boolean;
 }
 
+/** A draft as its owner sees it; file names of ours stay here. */
 export function presentDraft({ draft, pictures, ...rest }: DraftParts): WireDraft {
   return {
     id: draft.id,

@@ -10,6 +10,7 @@ export interface CardParts extends TakeParts {
   talk: { note: Note; role: Role | undefined }[];
 }
 
+/** A take as a card of the feed. */
 export function presentFeedCard(parts: CardParts): FeedCard {
   const { take } = parts;
   return {

@@ -4,6 +4,7 @@ import type { Membership } from '../entities/Membership.ts';
 /** What a person needs to be shown; a `User` has it, and so does whoever is signed in. */
 export type PersonParts = Pick<Person, 'id' | 'name' | 'initials'>;
 
+/** A person without their address and password. */
 export function presentPerson(user: PersonParts): Person {
   return { id: user.id, name: user.name, initials: user.initials };
 }
@@ -13,6 +14,7 @@ export function presentMember(user: PersonParts, role: Role | undefined): Member
   return { ...presentPerson(user), role: role ?? 'animator' };
 }
 
+/** A member with their role. `user` is loaded. */
 export function presentMembership(membership: Membership): Member {
   return presentMember(membership.user, membership.role);
 }

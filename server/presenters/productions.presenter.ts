@@ -5,6 +5,7 @@ import type { Membership } from '../entities/Membership.ts';
 import type { Production } from '../entities/Production.ts';
 import { presentMembership } from './people.presenter.ts';
 
+/** A production as one of its members sees it. `user` of each membership is loaded. */
 export function presentProduction(production: Production, memberships: Membership[], myRole: Role): WireProduction {
   return {
     id: production.id,

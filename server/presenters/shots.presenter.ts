@@ -15,6 +15,7 @@ export interface ShotParts {
   lastDecision: Decision | null;
 }
 
+/** The line of a shot, without its takes. */
 export function presentShot({ shot, latest, lastDecision }: ShotParts): WireShot {
   return {
     id: shot.id,

@@ -17,6 +17,7 @@ export interface TakeParts {
   noteCount: number;
 }
 
+/** A take as it goes over the wire, without the document of its reading. */
 export function presentTake({ take, decision, reading, stamps, noteCount }: TakeParts): WireTake {
   return {
     id: take.id,

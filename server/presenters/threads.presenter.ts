@@ -13,6 +13,7 @@ export interface NoteParts {
   stamps: NoteStamp[];
 }
 
+/** A note with its stamps. */
 export function presentNote({ note, role, stamps }: NoteParts): WireNote {
   return {
     id: note.id,

@@ -21,6 +21,7 @@ export interface Broadcast {
   endSession(sessionId: string): void;
 }
 
+/** What the services may say, over this socket server. */
 export function createBroadcast(io: LiveServer): Broadcast {
   return {
     event(productionId, slug, event) {

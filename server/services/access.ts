@@ -56,6 +56,7 @@ export async function accessByTake(
   return { ...refuseStranger(await accessTo(manager, userId, take.production)), take };
 }
 
+/** @throws {AppError} `not_found` for an unknown thread, `not_allowed` for a stranger to its production. */
 export async function accessByThread(
   manager: EntityManager,
   userId: string,
@@ -69,6 +70,7 @@ export async function accessByThread(
   return { ...refuseStranger(await accessTo(manager, userId, thread.take.production)), thread };
 }
 
+/** @throws {AppError} `not_found` for an unknown note, `not_allowed` for a stranger to its production. */
 export async function accessByNote(
   manager: EntityManager,
   userId: string,

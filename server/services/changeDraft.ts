@@ -19,6 +19,7 @@ export function changeDraft<Answer>(
   });
 }
 
+/** The refusal of a change to a draft that was posted. */
 export function draftClosed(): AppError {
   return new AppError('draft_closed', 'This strip is posted already; nothing was posted twice.');
 }

@@ -19,6 +19,7 @@ import { proposeGrid } from './proposeGrid.ts';
 export interface ArrivedFile {
   path: string;
   name: string;
+  /** Also what lay beyond the limit and was not stored. */
   bytes: number;
 }
 

@@ -82,6 +82,7 @@ export async function showDraft(manager: EntityManager, draftId: string): Promis
   return presentDraft(viewDraft(draft, await manager.findBy(DraftPicture, { draftId })));
 }
 
+/** Removes a picture and its thumbnail from disk; what is gone already is no error. */
 export async function removePictureFiles(deps: Deps, draftId: string, picture: DraftPicture): Promise<void> {
   const folder = draftFolder(deps.dataDir, draftId);
   for (const file of [picture.file, thumbnailName(picture.file)]) await rm(path.join(folder, file), { force: true });

@@ -30,6 +30,7 @@ export async function loadThreads(
     .map((thread) => presentThread(thread, notesOf.get(thread.id) ?? []));
 }
 
+/** One note with its stamps. It is there: whoever calls has just written it. */
 export async function loadNote(manager: EntityManager, productionId: string, noteId: string): Promise<WireNote> {
   const note = await manager.findOneOrFail(Note, { where: { id: noteId }, relations: { author: true } });
   const stamps = await stampsOfNotes(manager, [note]);

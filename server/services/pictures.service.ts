@@ -6,7 +6,7 @@ import { notFound } from '../errors.ts';
 import { takeFolder, thumbnailName } from '../storage/folders.ts';
 import { accessByTake } from './access.ts';
 
-/** A picture as it lies on disk: absolute path and media type. */
+/** A picture as it lies on disk: absolute path and media type. The client never names a path. */
 export interface PictureFile {
   path: string;
   mediaType: string;

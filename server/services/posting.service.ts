@@ -15,7 +15,7 @@ import { aboutTake } from './takes.service.ts';
 
 /** The pictures of a post, in order, all of one size in px. */
 export interface Strip {
-  kind: 'frames' | 'strip';
+  kind: Take['kind'];
   frames: FrameFile[];
   width: number;
   height: number;

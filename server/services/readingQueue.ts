@@ -35,6 +35,7 @@ interface QueueOptions {
 const PROGRESS_EVERY = 120;
 const FAILED = 'Reading this take failed. The frames are kept; have it read again.';
 
+/** Reads takes in the order they came, `lanes` at a time. A reading that fails is told as an event like one that worked. */
 export function createReadingQueue(deps: QueueDeps, { analysis, lanes }: QueueOptions): ReadingQueue {
   const waiting: string[] = [];
   const running = new Set<Promise<void>>();

@@ -16,6 +16,7 @@ const placesOf = (slug: string) => [
   { to: paths.people(slug), label: 'People', end: false },
 ];
 
+/** The way around a production, who is here, and posting. */
 export function Header({ slug }: { slug: string }) {
   const { data: production } = useSuspenseQuery(productionOptions(slug));
   const { data: session } = useSuspenseQuery(sessionOptions());

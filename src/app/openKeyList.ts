@@ -5,6 +5,7 @@ export function openKeyList(): void {
   listeners.forEach((listener) => listener());
 }
 
+/** Listens for the list of keys being asked for; answers with what ends it. */
 export function onOpenKeyList(listener: () => void): () => void {
   listeners.add(listener);
   return () => {

@@ -9,6 +9,7 @@ export function setSessionEnded(next: boolean): void {
   listeners.forEach((listener) => listener());
 }
 
+/** Whether the session is over; redraws the caller when that changes. */
 export function useSessionEnded(): boolean {
   return useSyncExternalStore(
     (listener) => {

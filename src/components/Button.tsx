@@ -31,6 +31,7 @@ export interface ButtonProps extends ComponentProps<'button'> {
   busy?: string | false;
 }
 
+/** A button that submits nothing unless it says so. */
 export function Button({ kind, size, busy, className, children, disabled, ...rest }: ButtonProps) {
   return (
     <button

@@ -1,3 +1,4 @@
+/** The cross that closes. */
 export function CrossGlyph() {
   return (
     <svg viewBox="0 0 20 20" className="pencil size-4" aria-hidden="true">

@@ -10,6 +10,7 @@ export interface FieldFrameProps {
   className?: string;
 }
 
+/** The look that every field shares. */
 export const FIELD_CLASS =
   'w-full min-h-9 touch:min-h-11 rounded-control border border-graphite bg-sheet px-3 py-1.5 text-base text-ink aria-invalid:border-2 aria-invalid:border-ink disabled:opacity-55';
 

@@ -10,6 +10,7 @@ export interface SelectProps extends ComponentProps<'select'> {
   fieldClassName?: string;
 }
 
+/** A choice from a list, with its label, hint and error. */
 export function Select({ label, hint, error, className, fieldClassName, id, ...rest }: SelectProps) {
   const own = useId();
   const fieldId = id ?? own;

@@ -1,6 +1,7 @@
 import clsx from 'clsx';
 import type { StampKind } from '../../shared/api/stamps.ts';
 
+/** What each stamp says. */
 export const STAMP_WORDS: Record<StampKind, string> = {
   agree: 'Agree',
   'on-it': 'On it',

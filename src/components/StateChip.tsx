@@ -3,6 +3,7 @@ import type { ReviewState } from '../../shared/api/takes.ts';
 import { Chip } from './Chip.tsx';
 import { FlightGlyph } from './FlightGlyph.tsx';
 
+/** What each state of review is called. */
 export const STATE_WORDS: Record<ReviewState, string> = {
   waiting: 'Waiting',
   'another-pass': 'Another pass',

@@ -10,6 +10,7 @@ export interface TextAreaProps extends ComponentProps<'textarea'> {
   fieldClassName?: string;
 }
 
+/** Text of several lines, with its label, hint and error. */
 export function TextArea({ label, hint, error, className, fieldClassName, id, ...rest }: TextAreaProps) {
   const own = useId();
   const fieldId = id ?? own;

@@ -10,6 +10,7 @@ export interface TextFieldProps extends ComponentProps<'input'> {
   fieldClassName?: string;
 }
 
+/** Text of one line, with its label, hint and error. */
 export function TextField({ label, hint, error, className, fieldClassName, id, ...rest }: TextFieldProps) {
   const own = useId();
   const fieldId = id ?? own;

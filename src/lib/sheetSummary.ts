@@ -14,6 +14,7 @@ export interface SheetSummary {
   steps: { at: string; through: number }[];
 }
 
+/** Whether a shot in this state needs nobody any more. */
 export const isThrough = (state: ReviewState | null) => state === 'cleared' || state === 'waived';
 
 /** What a producer asks of a sheet first. Pure. */

@@ -27,6 +27,7 @@ const WORDS: Record<FeedFilter, { title: string; says: string; next: 'post' | 'e
   },
 };
 
+/** What a tab of the feed is for, while nothing is in it, and the next step. */
 export function FeedEmpty({ slug, filter }: { slug: string; filter: FeedFilter }) {
   const { title, says, next } = WORDS[filter];
   return (

@@ -5,7 +5,9 @@ import type { ShotWithTakes } from '../../../shared/api/shots.ts';
 import type { Hold } from '../../../shared/reading/document.ts';
 import { FRAME_RATES, parseFrameRate } from '../../lib/frameRates.ts';
 
+/** The choice of a rate that is not on the list. */
 export const OTHER_RATE = 'other';
+/** The choice to have the hold found from the drawings. */
 export const FIND_HOLD = 'find';
 
 /** What the form holds: texts as they are written. */
@@ -21,6 +23,7 @@ export interface PostValues {
   intended: string;
 }
 
+/** The form before anything is written. */
 export const EMPTY_POST: PostValues = {
   shotNumber: '',
   shotTitle: '',
@@ -32,6 +35,7 @@ export const EMPTY_POST: PostValues = {
   intended: '',
 };
 
+/** A frame rate as the form holds it. */
 export const rateValue = ({ num, den }: { num: number; den: number }) => `${num}/${den}`;
 
 const HOLDS: Record<string, Hold | null> = { [FIND_HOLD]: null, '1': 1, '2': 2, '3': 3, mixed: 'mixed' };

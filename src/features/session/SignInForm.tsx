@@ -7,6 +7,7 @@ import { sentenceOf } from '../../lib/ApiProblem.ts';
 import { schemaResolver } from '../../lib/schemaResolver.ts';
 import { useSignIn } from './useSignIn.ts';
 
+/** Address and password. `onSignedIn` decides where to go. */
 export function SignInForm({ onSignedIn }: { onSignedIn: (session: Session) => void }) {
   const signIn = useSignIn();
   const { register, handleSubmit, formState } = useForm<SignIn>({

@@ -3,6 +3,7 @@ import { type SignIn, sessionContracts } from '../../../shared/api/session.ts';
 import { call } from '../../lib/call.ts';
 import { sessionOptions } from '../../lib/queries/session.ts';
 
+/** Signs in and keeps who that is. */
 export function useSignIn() {
   const client = useQueryClient();
   return useMutation({
