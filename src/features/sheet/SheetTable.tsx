@@ -19,7 +19,7 @@ export function SheetTable({ slug, groups }: { slug: string; groups: SequenceRow
         <thead>
           <tr className="border-b border-rule text-left text-graphite">
             {HEADINGS.map((heading) => (
-              <th key={heading} scope="col" className="px-3.5 py-2 font-medium">
+              <th key={heading} scope="col" className="px-2 py-2 font-medium first:pl-3.5 last:pr-3.5 xl:px-3.5">
                 {heading}
               </th>
             ))}
@@ -49,7 +49,7 @@ export function SheetTable({ slug, groups }: { slug: string; groups: SequenceRow
 
 function Row({ slug, shot }: { slug: string; shot: ShotWithTakes }) {
   const latest = shot.takes.at(-1);
-  const cell = 'px-3.5 py-1.5 align-middle';
+  const cell = 'px-2 py-1.5 align-middle first:pl-3.5 last:pr-3.5 xl:px-3.5';
   return (
     <tr className="border-b border-rule last:border-0">
       <th scope="row" className={`${cell} text-left font-normal`}>
