@@ -1,6 +1,6 @@
 import type { Band } from '../reading/tolerances.ts';
 import { errorOf } from './errors.ts';
-import type { Knots } from './path.ts';
+import type { Knots } from './follow.ts';
 import type { FlightView, TrackView } from './view.ts';
 
 interface Number {

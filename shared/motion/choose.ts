@@ -1,10 +1,11 @@
 import type { Account, Field } from './account.ts';
-import { fitOnce } from './account.ts';
+import { fitOnce } from './trim.ts';
 import type { Contest } from './compete.ts';
 import { compete } from './compete.ts';
 import { honour } from './honour.ts';
 import type { Sketch } from './sketch.ts';
-import { oneFlight, pathOf, restFirst, restLast, sketchFrom, sketchOf } from './sketch.ts';
+import { oneFlight, restFirst, restLast } from './sketchEdits.ts';
+import { pathOf, sketchFrom, sketchOf } from './sketch.ts';
 import type { Stretch } from './spans.ts';
 import { isDoubtful, restructure } from './structure.ts';
 

@@ -1,5 +1,5 @@
 import type { Account, Fault, Field } from './account.ts';
-import { fitOnce, trim } from './account.ts';
+import { fitOnce, trim } from './trim.ts';
 import { promising } from './faults.ts';
 import { SHAPE_NAMES, SHAPE_STARTS } from './shapes.ts';
 import type { Sketch } from './sketch.ts';

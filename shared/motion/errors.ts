@@ -1,6 +1,6 @@
 import type { Account } from './account.ts';
-import type { Knots } from './path.ts';
-import { makeKnotsFor, placeKnots } from './path.ts';
+import type { Knots } from './follow.ts';
+import { makeKnotsFor, placeKnots } from './follow.ts';
 
 /**
  * Standard deviation of a number that follows from the parameters of a fit, by the first order of its slopes (delta method).

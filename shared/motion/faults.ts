@@ -1,5 +1,5 @@
 import type { Account, Fault, Field } from './account.ts';
-import { PRIOR_FREEDOM } from './account.ts';
+import { PRIOR_FREEDOM } from './judge.ts';
 import { fitStep } from './fit.ts';
 import type { ShapeName } from './shapes.ts';
 import { scoreBase, scoreGravity, scoreShape } from './score.ts';

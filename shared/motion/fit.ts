@@ -1,5 +1,6 @@
-import type { Knots, Path } from './path.ts';
-import { follow, makeKnotsFor as makeKnots, placeKnots } from './path.ts';
+import type { Knots } from './follow.ts';
+import type { Path } from './path.ts';
+import { follow, makeKnotsFor as makeKnots, placeKnots } from './follow.ts';
 import { factorCholesky, solveCholesky, substitute } from './solve.ts';
 import type { Slopes } from './slopes.ts';
 import { differentiate, gather, roomFor } from './slopes.ts';

@@ -3,8 +3,8 @@ import { metresPerSecond2 } from './units.ts';
 import { errorOf } from './errors.ts';
 import { measuresOf } from './measures.ts';
 import { truePlaces } from './mend.ts';
-import type { Knots } from './path.ts';
-import { follow } from './path.ts';
+import type { Knots } from './follow.ts';
+import { follow } from './follow.ts';
 import type { FlightView, TrackView } from './view.ts';
 import { frameOf } from './view.ts';
 

@@ -2,7 +2,7 @@ import type { Field } from './account.ts';
 import type { Honoured } from './hand.ts';
 import type { Span } from './path.ts';
 import type { Sketch } from './sketch.ts';
-import { withoutKnot } from './sketch.ts';
+import { withoutKnot } from './sketchEdits.ts';
 
 /** A sketch with the contacts that someone set, and without those that someone took away. */
 export function honour(sketch: Sketch, field: Field): Sketch {

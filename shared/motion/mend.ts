@@ -1,8 +1,10 @@
 import type { Finding } from '../reading/document.ts';
 import { reboundOf } from './bounces.ts';
 import type { Draft } from './findings/rule.ts';
-import type { Knots, Span } from './path.ts';
-import { follow, layOut, makeKnotsFor, placeKnots } from './path.ts';
+import type { Knots } from './follow.ts';
+import type { Span } from './path.ts';
+import { follow, makeKnotsFor, placeKnots } from './follow.ts';
+import { layOut } from './path.ts';
 import type { FlightView, TrackView } from './view.ts';
 import { frameOf } from './view.ts';
 

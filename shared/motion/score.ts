@@ -1,5 +1,5 @@
 import type { PathFit, Samples } from './fit.ts';
-import { follow } from './path.ts';
+import { follow } from './follow.ts';
 import type { Shape, ShapeName } from './shapes.ts';
 import { SHAPE_NOTHING } from './shapes.ts';
 import { differentiate, gather, roomFor } from './slopes.ts';

@@ -1,6 +1,7 @@
 import type { Samples } from './fit.ts';
-import type { Knots, Path } from './path.ts';
-import { follow, makeKnotsFor, placeKnots } from './path.ts';
+import type { Knots } from './follow.ts';
+import type { Path } from './path.ts';
+import { follow, makeKnotsFor, placeKnots } from './follow.ts';
 
 /** Working room of a fit, used again from fit to fit: slopes of every place by every parameter, and the normal equations. */
 export interface Slopes {

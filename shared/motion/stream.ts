@@ -9,8 +9,8 @@ import { measureOf } from './measures.ts';
 import type { Drawing } from './drawings.ts';
 import { prepare } from './prepare.ts';
 import { SHAPE_NOTHING } from './shapes.ts';
-import { oneFlight } from './sketch.ts';
-import { follow } from './path.ts';
+import { oneFlight } from './sketchEdits.ts';
+import { follow } from './follow.ts';
 import type { Track } from './types.ts';
 import { digits } from './words.ts';
 

@@ -1,9 +1,10 @@
 import type { Account, Fault, Field } from './account.ts';
-import { fitOnce, trim } from './account.ts';
+import { fitOnce, trim } from './trim.ts';
 import { keepsHand } from './honour.ts';
 import { SHAPE_NAMES, SHAPE_STARTS } from './shapes.ts';
 import type { Sketch } from './sketch.ts';
-import { flightLast, pathOf, recast, restFirst, restLast, rollFirst, sketchFrom, withoutKnot } from './sketch.ts';
+import { flightLast, recast, restFirst, restLast, rollFirst, withoutKnot } from './sketchEdits.ts';
+import { pathOf, sketchFrom } from './sketch.ts';
 
 interface Option {
   sketch: Sketch;
