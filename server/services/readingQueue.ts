@@ -12,6 +12,7 @@ import { TakeFrame } from '../entities/TakeFrame.ts';
 import type { Deps } from '../deps.ts';
 import { presentSketch } from '../presenters/sketch.presenter.ts';
 import { takeFolder } from '../storage/folders.ts';
+import { readingId } from './readings.service.ts';
 import { record } from './record.ts';
 import { aboutTake } from './takes.service.ts';
 
@@ -110,7 +111,7 @@ async function requestFor(deps: QueueDeps, take: Take): Promise<AnalysisRequest>
   });
   const folder = takeFolder(deps.dataDir, take.id);
   return {
-    id: `${take.shot.number}/${take.number}`,
+    id: readingId(take.shot, take.number),
     framePaths: frames.map(({ file }) => path.join(folder, file)),
     ...(take.missingFrames.length > 0 ? { frameNumbers: frames.map(({ frame }) => frame) } : {}),
     kind: take.kind,

@@ -1,6 +1,7 @@
 import type { Take as WireTake } from '../../shared/api/takes.ts';
 import { type Reading as ReadingDocument, readingSchema } from '../../shared/reading/document.ts';
 import { Reading } from '../entities/Reading.ts';
+import { Shot } from '../entities/Shot.ts';
 import { Take } from '../entities/Take.ts';
 import type { Deps } from '../deps.ts';
 import { AppError } from '../errors.ts';
@@ -8,13 +9,19 @@ import { accessByTake, allow } from './access.ts';
 import { record } from './record.ts';
 import { aboutTake } from './takes.service.ts';
 
-/** The reading of a take as a document. */
+/** What a reading is called: the shot and the take it is of. */
+export function readingId(shot: Shot, takeNumber: number): string {
+  return `${shot.number}/${takeNumber}`;
+}
+
+/** The reading of a take as a document, under the take's present name: a take that moved is not read again. */
 export async function readReading(deps: Deps, userId: string, takeId: string): Promise<ReadingDocument> {
   const { manager } = deps.dataSource;
-  await accessByTake(manager, userId, takeId);
+  const { take } = await accessByTake(manager, userId, takeId);
   const reading = await manager.findOne(Reading, { where: { takeId }, select: { takeId: true, document: true } });
   if (!reading) throw new AppError('not_found', 'This take has not been read yet.');
-  return readingSchema.parse(JSON.parse(reading.document));
+  const shot = await manager.findOneByOrFail(Shot, { id: take.shotId });
+  return { ...readingSchema.parse(JSON.parse(reading.document)), id: readingId(shot, take.number) };
 }
 
 /** Puts a take in the queue once more. Until the new reading is there, the old one stays. */

@@ -73,6 +73,10 @@ describe('a strip with a thing in flight', () => {
       source: { kind: 'frames', frames: 20, width: 480, height: 270, firstFrame: 1001, fps: { num: 24, den: 1 } },
     });
     expect(reading.engine).toMatch(/^\d+\.\d+/);
+
+    await client.post(`/takes/${take.id}/move`, { shotNumber: '300-0011', shotTitle: 'Elsewhere' }).expect(200);
+    const moved = await client.get(`/takes/${take.id}/reading`).expect(200);
+    expect(moved.body).toEqual({ ...body, id: '300-0011/1' });
   });
 
   test('is read again when someone asks, and only once at a time', async () => {
