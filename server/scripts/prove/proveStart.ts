@@ -7,10 +7,13 @@ import { leftRunning } from './processes.ts';
 import { endAll, type StartProcess, startSpandrel } from './startProcess.ts';
 
 const secondStartWithin = 3;
+/** The suite proves what a start does; how fast it is depends on what else the machine does, so only the hand run judges it. */
+const untimed = process.argv.includes('--untimed');
 
 /**
  * Proves `npm start` on what is committed: clones the repository to a new folder with an empty data folder, starts it,
  * waits for the page, stops it as Ctrl-C does and looks for anything left; then again to time it, and again after a change.
+ * `--untimed` prints the times without judging them.
  */
 export async function main({ root, stop }: { root: string; stop: AbortController }): Promise<number> {
   const folder = await mkdtemp(path.join(tmpdir(), 'spandrel-prove-'));
@@ -43,7 +46,7 @@ async function quickStart(place: Place): Promise<void> {
   const times: number[] = [];
   while (times.length < 5) {
     const seconds = await startAndStop('second start', place, { not: ['Installing', 'Building'] });
-    if (seconds <= secondStartWithin) return;
+    if (untimed || seconds <= secondStartWithin) return;
     times.push(seconds);
   }
   throw new Error(`The second start took ${Math.min(...times).toFixed(1)} s; ${secondStartWithin} s are allowed.`);
