@@ -3,6 +3,7 @@ import type { Pose } from './align.ts';
 import { type Candidate, candidateOf, foreignIn, ontoPicture, regionsOf, windowOf, withoutDust } from './candidates.ts';
 import { coarseFactor, reduce } from './coarse.ts';
 import { difference, looseDifference, noiseThreshold } from './difference.ts';
+import { restsFromGhosts } from './ghosts.ts';
 import { type Ground, learnGround } from './ground.ts';
 import { extend } from './extend.ts';
 import { joinParts } from './joinParts.ts';
@@ -114,7 +115,8 @@ export class Finder {
       rest = rest.map((candidates) => candidates.filter((candidate) => !taken.has(candidate)));
       tracks.push(trackOf(path));
     }
-    const { named, cautions } = this.#choose(joinParts(tracks));
+    const joined = joinParts(tracks);
+    const { named, cautions } = this.#choose(joined);
     const things = named.map((thing) => {
       const others = new Set(named.filter((other) => other !== thing).flatMap((other) => other.path));
       return extend(
@@ -123,10 +125,24 @@ export class Finder {
       );
     });
     return {
-      tracks: things.map((thing, k) => ({ id: NAMES[k], marks: marksOf(thing) })),
+      tracks: things.map((thing, k) => ({ id: NAMES[k], marks: this.#marksOf(thing, joined) })),
       camera: this.#cameraMove(),
       cautions,
     };
+  }
+
+  #marksOf(thing: FoundTrack, tracks: FoundTrack[]): Mark[] {
+    const settled = settle(thing);
+    // On a moving stage nothing rests in the picture, so there is no ghost to ask.
+    const placed = this.#ground?.moves ? settled : restsFromGhosts(settled, tracks, this.#frames.length);
+    return placed.map(({ candidate, x, y, radius, support }) => ({
+      frame: candidate.index + 1,
+      x: round(x),
+      y: round(y),
+      radius: round(radius),
+      origin: 'found',
+      confidence: Math.round(100 * Math.min(0.99, support * Math.min(1, candidate.contrast / 40))) / 100,
+    }));
   }
 
   /** The things that are to be followed: what someone pointed at, or what is in flight. */
@@ -170,17 +186,6 @@ function trackAt(tracks: FoundTrack[], point: PointAt): FoundTrack | null {
     if (!best || distance < best.distance) best = { track, distance };
   }
   return best?.track ?? null;
-}
-
-function marksOf(track: FoundTrack): Mark[] {
-  return settle(track).map(({ candidate, x, y, radius, support }) => ({
-    frame: candidate.index + 1,
-    x: round(x),
-    y: round(y),
-    radius: round(radius),
-    origin: 'found',
-    confidence: Math.round(100 * Math.min(0.99, support * Math.min(1, candidate.contrast / 40))) / 100,
-  }));
 }
 
 function round(value: number, digits = 3): number {

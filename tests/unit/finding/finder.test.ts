@@ -61,6 +61,14 @@ describe('a disc in flight', { timeout: 60_000 }, () => {
     expect(Math.max(...errorsOf(found, 0, found.places))).toBeLessThan(0.3);
   });
 
+  it('keeps its marks where it rests for most of the take and the background takes it in', () => {
+    const rests = (frame: number): Place => toss(Math.max(0, frame - 26));
+    const found = findInTake({ frames: 44, discs: [rests] });
+    const errors = errorsOf(found, 0, found.places);
+    expect(errors.length).toBeGreaterThanOrEqual(42);
+    expect(errors.filter((error) => error < 0.6).length).toBeGreaterThanOrEqual(41);
+  });
+
   it('has no mark on frames that do not show it, and goes on afterwards', () => {
     const hides = (frame: number): Place | null => (frame >= 7 && frame <= 9 ? null : toss(frame));
     const found = findInTake({ discs: [hides] });

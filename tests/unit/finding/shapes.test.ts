@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { reduce } from '../../../shared/finding/coarse.ts';
 import { medianBytes } from '../../../shared/finding/median.ts';
 import { labelRegions } from '../../../shared/finding/components.ts';
 import { discOutline, fitOutline } from '../../../shared/finding/outline.ts';
@@ -83,6 +84,18 @@ describe('an outline', () => {
       [0],
     );
     expect(Math.hypot(fit.x - 131.4, fit.y - 77.7)).toBeLessThan(0.8);
+  });
+});
+
+describe('a reduced picture', () => {
+  it.each([2, 3])('is the average of squares of %i px', (factor) => {
+    const side = 2 * factor;
+    const data = Uint8Array.from({ length: side * side * 3 }, (_, at) =>
+      Math.floor(at / 3) % side < factor ? 40 : 90,
+    );
+    const small = reduce({ width: side, height: side, data }, factor);
+    expect([small.width, small.height]).toEqual([2, 2]);
+    expect([...small.data]).toEqual([40, 40, 40, 90, 90, 90, 40, 40, 40, 90, 90, 90]);
   });
 });
 
