@@ -27,6 +27,7 @@ export function presentShot({ shot, latest, lastDecision }: ShotParts): WireShot
     animator: latest && presentPerson(latest.postedBy),
     mentor: lastDecision && presentPerson(lastDecision.by),
     waitingSince: latest?.review === 'waiting' ? latest.postedAt.toISOString() : null,
+    nextTakeNumber: shot.lastTakeNumber + 1,
   };
 }
 

@@ -19,6 +19,8 @@ export const shotSchema = z
     mentor: personSchema.nullable(),
     /** When the latest take was posted, while it waits. */
     waitingSince: z.iso.datetime().nullable(),
+    /** Number of the take that is posted next; a number that was moved away is not given again. */
+    nextTakeNumber: z.int().positive(),
   })
   .meta({ id: 'Shot' });
 export type Shot = z.infer<typeof shotSchema>;

@@ -131,6 +131,7 @@ describe('moving', () => {
     await people.producer.client
       .post(`/takes/${second.id}/move`, { shotNumber: `${first.shotNumber}-B`, shotTitle: 'Elsewhere' })
       .expect(200);
+    expect((await people.animator.client.get(at(first.shotNumber))).body.nextTakeNumber).toBe(3);
     expect((await post(first.shotNumber)).number).toBe(3);
   });
 

@@ -92,6 +92,7 @@ export function buildShot(given: Partial<ShotWithTakes> = {}): ShotWithTakes {
     animator: BRITTA,
     mentor: null,
     waitingSince: takes.at(-1)?.review === 'waiting' ? takes.at(-1)!.postedAt : null,
+    nextTakeNumber: Math.max(0, ...takes.map((take) => take.number)) + 1,
     ...given,
     takes,
   };

@@ -17,7 +17,6 @@ import { keepValues, keptValues } from './keptValues.ts';
 import {
   EMPTY_POST,
   FIND_HOLD,
-  nextTakeOf,
   OTHER_RATE,
   postFormSchema,
   postOf,
@@ -82,7 +81,7 @@ export function PostForm({ slug, shots, draft, shotNumber, notYet, posting, prob
       <ShotField
         shots={shots}
         shot={shot}
-        takeNumber={nextTakeOf(shot)}
+        takeNumber={shot?.nextTakeNumber ?? 1}
         error={errors.shotNumber?.message}
         field={register('shotNumber')}
       />
@@ -152,7 +151,7 @@ export function PostForm({ slug, shots, draft, shotNumber, notYet, posting, prob
         aria-describedby={notYet ? 'not-yet' : undefined}
         busy={posting && 'Posting…'}
       >
-        {shot ? `Post take ${nextTakeOf(shot)} of ${shot.number}` : 'Post the strip'}
+        {shot ? `Post take ${shot.nextTakeNumber} of ${shot.number}` : 'Post the strip'}
       </Button>
       {notYet && !posting && (
         <p id="not-yet" className="text-center text-sm text-graphite">

@@ -46,11 +46,6 @@ export function shotOf(shots: readonly ShotWithTakes[], number: string): ShotWit
   return wanted ? shots.find((shot) => shot.number.toLowerCase() === wanted) : undefined;
 }
 
-/** Which take of a shot comes next. */
-export function nextTakeOf(shot: ShotWithTakes | undefined): number {
-  return Math.max(0, ...(shot?.takes.map((take) => take.number) ?? [])) + 1;
-}
-
 /** The rate that is chosen or written; null while it is none. */
 export function rateOf(values: Pick<PostValues, 'rate' | 'otherRate'>) {
   return parseFrameRate(values.rate === OTHER_RATE ? values.otherRate : values.rate);

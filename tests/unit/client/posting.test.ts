@@ -4,7 +4,7 @@ import { MAX_FRAMES, MAX_PICTURE_BYTES, MAX_PICTURES_PER_BATCH } from '../../../
 import { gridSchema } from '../../../shared/finding/grid.ts';
 import { nextBatch, sortOut } from '../../../src/features/posting/batches.ts';
 import { cellsOf, firstCut, gridProblem, withField } from '../../../src/features/posting/gridEdit.ts';
-import { EMPTY_POST, nextTakeOf, postFormSchema, postOf, shotOf } from '../../../src/features/posting/postValues.ts';
+import { EMPTY_POST, postFormSchema, postOf, shotOf } from '../../../src/features/posting/postValues.ts';
 import { parseFrameRate } from '../../../src/lib/frameRates.ts';
 import { buildShot, buildTake } from '../../support/wire.ts';
 
@@ -152,10 +152,8 @@ describe('the shot of a post', () => {
     return parsed.success ? [] : parsed.error.issues.map((issue) => issue.path[0]);
   };
 
-  test('is found however its letters are written, and names its next take', () => {
+  test('is found however its letters are written', () => {
     expect(shotOf(shots, ' 020-0140A ')).toBe(shots[0]);
-    expect(nextTakeOf(shots[0])).toBe(4);
-    expect(nextTakeOf(undefined)).toBe(1);
     expect(shotOf(shots, '')).toBeUndefined();
   });
 
