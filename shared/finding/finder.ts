@@ -151,7 +151,9 @@ export class Finder {
     const pointed = object && trackAt(tracks, object);
     if (pointed) return { named: [pointed], cautions: [] };
     const named = thingsAmong(tracks);
-    const cautions = named.length === 0 ? ['Nothing moves in these frames, so there is no flight to read.'] : [];
+    const cautions: string[] = [];
+    if (named.length === 0) cautions.push('Nothing moves in these frames, so there is no flight to read.');
+    if (named.length > 1) cautions.push(`${listed(named.map((_, k) => NAMES[k]))} move here; each is read on its own.`);
     if (object) cautions.unshift('Nothing stands out where you pointed, so what moves most was followed.');
     return { named, cautions };
   }
@@ -190,4 +192,9 @@ function trackAt(tracks: FoundTrack[], point: PointAt): FoundTrack | null {
 
 function round(value: number, digits = 3): number {
   return Number(value.toFixed(digits));
+}
+
+/** "A and B", "A, B and C". */
+function listed(names: string[]): string {
+  return `${names.slice(0, -1).join(', ')} and ${names.at(-1)}`;
 }

@@ -124,6 +124,7 @@ test('a strip in which two things move has both read', async () => {
     ['read', 24],
     ['read', 24],
   ]);
+  expect(body.cautions).toContain('A and B move here; each is read on its own.');
 });
 
 test('a take that waits has no reading yet, and that is said', async () => {

@@ -104,6 +104,7 @@ it('reads a strip in which two things move, each as its own', async () => {
   );
   await see(desk.page.getByRole('heading', { name: /^24 frames/ }));
   await postShot(desk.page, { number: '010-0040', title: 'Two balls' });
+  await see(desk.page.getByText('A and B move here; each is read on its own.'));
   await see(desk.page.getByRole('button', { name: 'Thing B' }));
   await see(desk.page.getByRole('heading', { name: /Flight A1/ }));
   await see(desk.page.getByRole('heading', { name: /Flight B1/ }));

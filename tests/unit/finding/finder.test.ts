@@ -93,6 +93,7 @@ describe('what moves in a take', { timeout: 60_000 }, () => {
     const other = (frame: number): Place => ({ x: 290 - 9 * frame, y: 60 + 0.4 * frame * frame });
     const found = findInTake({ discs: [toss, other], radius: 7 });
     expect(found.tracks.map((track) => track.id)).toEqual(['A', 'B']);
+    expect(found.cautions).toEqual(['A and B move here; each is read on its own.']);
     const near = [0, 1].map((track) =>
       Math.min(...[0, 1].map((disc) => mean(errorsOf(found, track, found.places, disc)))),
     );
