@@ -15,7 +15,11 @@ export default defineConfig({
   },
   test: {
     projects: [
-      { extends: true, test: { name: 'unit', include: ['tests/unit/**/*.test.ts'], environment: 'node' } },
+      {
+        extends: true,
+        // Nothing here changes the world, so files share their workers: a third of the time went into loading alone.
+        test: { name: 'unit', include: ['tests/unit/**/*.test.ts'], environment: 'node', isolate: false },
+      },
       {
         extends: true,
         test: { name: 'outside', include: ['tests/outside/**/*.test.ts'], environment: 'node', testTimeout: 60_000 },

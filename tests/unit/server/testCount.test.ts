@@ -1,8 +1,9 @@
-import { describe, expect, it, vi } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
 import { conclude } from '../../../server/scripts/test/checks.ts';
 import { count } from '../../../server/scripts/test/vitest.ts';
 
-vi.spyOn(console, 'log').mockImplementation(() => {});
+beforeAll(() => void vi.spyOn(console, 'log').mockImplementation(() => {}));
+afterAll(() => void vi.restoreAllMocks());
 
 const passing = (project: string) => ({
   name: `/repo/tests/${project}/a.test.ts`,
