@@ -1,4 +1,5 @@
-import type { Flight } from '../reading/document.ts';
+import type { Finding, Flight } from '../reading/document.ts';
+import { agreed } from './agree.ts';
 import { metresPerSecond2 } from './units.ts';
 import { errorOf } from './errors.ts';
 import { measuresOf } from './measures.ts';
@@ -8,8 +9,16 @@ import { follow } from './follow.ts';
 import type { FlightView, TrackView } from './view.ts';
 import { frameOf } from './view.ts';
 
-/** A flight as the document tells it: limits, apex as drawn, gravity without its shape fault, measures and the true arc. */
-export function describeFlight(view: TrackView, flight: FlightView, centre: { x: number; y: number }): Flight {
+/**
+ * A flight as the document tells it: limits, apex as drawn, gravity without its shape fault, the true arc, and measures that agree
+ * with the findings of the track.
+ */
+export function describeFlight(
+  view: TrackView,
+  flight: FlightView,
+  centre: { x: number; y: number },
+  findings: readonly Finding[],
+): Flight {
   const { account } = view;
   const { fit } = account;
   const g = fit.path.spans[flight.span]!.gravity;
@@ -40,7 +49,10 @@ export function describeFlight(view: TrackView, flight: FlightView, centre: { x:
     gravity: { ...gravity, metric },
     residual: residualOf(view, flight),
     model: account.depth ? 'depth' : 'flat',
-    measures: measuresOf(view, flight),
+    measures: agreed(
+      measuresOf(view, flight),
+      findings.filter((finding) => finding.flight === flight.id),
+    ),
     trueArc: arcOf(view, flight, centre),
   };
 }

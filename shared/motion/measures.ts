@@ -1,22 +1,14 @@
 import type { Measure } from '../reading/document.ts';
 import type { FindingKind, MeasureName } from '../reading/kinds.ts';
-import type { Account } from './account.ts';
 import { boundsOf, reboundOf } from './bounces.ts';
 import { errorOf } from './errors.ts';
 import { metresPerSecond2 } from './units.ts';
 import { offArc, repeatsOf, stepScatter } from './scatter.ts';
-import type { ScoreBase } from './score.ts';
-import { scoreBase, scoreGravity, scoreShape } from './score.ts';
-import type { ShapeName } from './shapes.ts';
-import { SHAPE_NOTHING } from './shapes.ts';
+import { scoreGravity } from './score.ts';
+import type { Estimated } from './shapeNumber.ts';
+import { acrossDrift, noiseAfter, scoresOf, shapeNumber } from './shapeNumber.ts';
 import { Z95, Z99_ONE, studentQuantile } from './statistics.ts';
 import type { FlightView, TrackView } from './view.ts';
-
-/** Value and standard deviation of one number. */
-export interface Estimated {
-  value: number;
-  se: number;
-}
 
 interface Against {
   expected: number;
@@ -57,9 +49,8 @@ export function measuresOf(view: TrackView, flight: FlightView): Measure[] {
     if (!estimate || ![estimate.value, estimate.se].every(Number.isFinite)) return;
     out.push(measureOf(name, estimate, freedom, against));
   };
-  if (flight.apex > 1 && flight.apex < flight.length - 1) shapesOfArc(view, flight, add);
-  const ease = shapeNumber(view, flight, 'ease');
-  add('across-drift', ease && { value: 2 * ease.value, se: 2 * ease.se }, {
+  if (flight.apex > 1 && flight.apex < flight.length - 1) out.push(...shapesOfArc(view, flight));
+  add('across-drift', acrossDrift(view, flight), {
     expected: 0,
     tolerance: tolerances.acrossDrift.from,
     kind: 'across-uneven',
@@ -89,26 +80,34 @@ export function measuresOf(view: TrackView, flight: FlightView): Measure[] {
 
 type Add = (name: MeasureName, estimate: Estimated | null, against: Against | null) => void;
 
-function shapesOfArc(view: TrackView, flight: FlightView, add: Add): void {
-  const { tolerances } = view;
+/** What the two sides of an arc tell: those of a side with too few drawings are left out. */
+function shapesOfArc(view: TrackView, flight: FlightView): Measure[] {
+  const { account, tolerances } = view;
+  const out: Measure[] = [];
   const apex = shapeNumber(view, flight, 'apex');
-  add('apex-time', apex && { value: 0.5 + apex.value, se: apex.se }, {
-    expected: 0.5,
-    tolerance: tolerances.apexTime.from,
-    kind: 'apex-off-centre',
-  });
+  if (apex) {
+    const time = { value: 0.5 + apex.value, se: apex.se };
+    const against = { expected: 0.5, tolerance: tolerances.apexTime.from, kind: 'apex-off-centre' as const };
+    out.push(measureOf('apex-time', time, account.freedom, against));
+  }
   for (const side of ['rise', 'fall'] as const) {
     const power = shapeNumber(view, flight, `power-${side}`);
-    if (!power) continue;
-    const kind = power.value < 2 ? 'too-straight' : 'hang';
-    add(`exponent-${side}`, power, { expected: 2, tolerance: tolerances.exponent.from, kind });
-    const share = 0.5 ** power.value;
-    add(
-      side === 'rise' ? 'quarter-drop-before' : 'quarter-drop-after',
-      { value: share, se: share * Math.LN2 * power.se },
-      { expected: 0.25, tolerance: 0.25 * Math.LN2 * tolerances.exponent.from, kind },
-    );
+    if (!power || !Number.isFinite(power.se)) continue;
+    const kind = power.value < 2 ? ('too-straight' as const) : ('hang' as const);
+    const tolerance = tolerances.exponent.from;
+    const exponent = measureOf(`exponent-${side}`, power, account.freedom, { expected: 2, tolerance, kind });
+    out.push(exponent, {
+      ...exponent,
+      name: side === 'rise' ? 'quarter-drop-before' : 'quarter-drop-after',
+      // The drop at half the time is 0.5 to the exponent: the interval goes over with it, turned round, and so does the verdict.
+      value: 0.5 ** exponent.value,
+      low: 0.5 ** exponent.high,
+      high: 0.5 ** exponent.low,
+      expected: 0.25,
+      tolerance: 0.25 * Math.LN2 * tolerance,
+    });
   }
+  return out;
 }
 
 function gravityOf(view: TrackView, flight: FlightView, add: Add): void {
@@ -145,38 +144,4 @@ function gravityRatio(view: TrackView, flight: FlightView): Estimated | null {
   const score = scores && scoreGravity(scores, flight.span);
   const others = account.fit.theta[0]!;
   return score && { value: 1 + score.step / others, se: (score.unit * noiseAfter(view, account, score.gain)) / others };
-}
-
-/** One shape number of a flight: the fitted one when the chosen account carries it, else one step away from that account. */
-function shapeNumber(view: TrackView, flight: FlightView, name: ShapeName): Estimated | null {
-  const { account, contest } = view;
-  const { fault, fit } = account;
-  const here = fault?.kind === 'shape' && fault.span === flight.span;
-  if (here && (fault.name === name || (fault.name === 'power' && name.startsWith('power')))) {
-    return { value: fit.theta[fit.path.shapeAt]!, se: errorOf(account, (theta) => theta[fit.path.shapeAt]!) };
-  }
-  const base = here ? contest.clean : account;
-  const scores = scoresOf(view, base);
-  if (!scores || base.fit.path.spans[flight.span]?.kind !== 'flight') return null;
-  const score = scoreShape(scores, name, flight.span);
-  if (!score) return null;
-  return { value: SHAPE_NOTHING[name] + score.step, se: score.unit * noiseAfter(view, base, score.gain) };
-}
-
-/** The score tests of an account, worked out once a view. */
-function scoresOf(view: TrackView, account: Account): ScoreBase | null {
-  const known = view.scores.get(account);
-  if (known !== undefined) return known;
-  const scores = scoreBase(account.fit, { ...view.field.samples, weight: account.weight });
-  view.scores.set(account, scores);
-  return scores;
-}
-
-/**
- * Noise that is left once a number is let go where its step takes it: the step's own gain is no noise, and left in it would widen
- * the interval just where the estimate is far off. A balance point's own error comes on top.
- */
-function noiseAfter(view: TrackView, base: Account, gain: number): number {
-  const body = view.account.noise2 - view.account.squares / view.account.freedom;
-  return Math.sqrt(Math.max(0, base.squares - gain) / Math.max(1, base.freedom - 1) + Math.max(0, body));
 }

@@ -152,7 +152,7 @@ function readTrack(track: Track, input: MotionInput, options: MotionOptions): Tr
     view = viewOf(contest.clean);
     findings = findingsOf(view);
   }
-  const flights = view.flights.map((flight) => describeFlight(view, flight, local.centre));
+  const flights = view.flights.map((flight) => describeFlight(view, flight, local.centre, findings));
   const cautions = unplaced
     ? [`${track.id} is a body: place its points (head, hips and feet at least), and it is judged at its balance point.`]
     : cautionsOf(view);

@@ -10,16 +10,14 @@ import { frameOf, framesOf } from './view.ts';
 export function findingsOf(view: TrackView): Finding[] {
   return standing(FINDING_RULES.flatMap((rule) => rule.find(view)).filter((draft) => draft.flight.judged)).map(
     (draft) => {
-      const whole = framesOf(view, draft.flight);
-      const from = Math.max(whole.from, Math.floor(frameOf(view, draft.from)));
-      const to = Math.min(whole.to, Math.ceil(frameOf(view, draft.to)));
+      const { from, to } = placeOf(view, draft);
       return {
         id: `${draft.flight.id}-${draft.kind}-${from}`,
         kind: draft.kind,
         object: view.id,
         flight: draft.flight.id,
         fromFrame: from,
-        toFrame: Math.max(from, to),
+        toFrame: to,
         severity: draft.severity,
         title: draft.title,
         detail: draft.detail,
@@ -28,6 +26,21 @@ export function findingsOf(view: TrackView): Finding[] {
       };
     },
   );
+}
+
+/**
+ * First and last frame of a finding. What lies on one drawing stays there, also just beyond a landing; what lies on a stretch is
+ * kept within its flight, so that it never ends before it begins.
+ */
+function placeOf(view: TrackView, draft: Draft): { from: number; to: number } {
+  if (draft.from === draft.to) {
+    const frame = Math.round(frameOf(view, draft.from));
+    return { from: frame, to: frame };
+  }
+  const whole = framesOf(view, draft.flight);
+  const within = (frame: number) => Math.min(whole.to, Math.max(whole.from, frame));
+  const from = within(Math.floor(frameOf(view, draft.from)));
+  return { from, to: Math.max(from, within(Math.ceil(frameOf(view, draft.to)))) };
 }
 
 /**

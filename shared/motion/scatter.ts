@@ -1,15 +1,6 @@
 import { unexplained } from './compete.ts';
 import type { FlightView, TrackView } from './view.ts';
-
-/** Index of the drawings of a flight that its account uses. */
-function drawingsOf(view: TrackView, flight: FlightView): number[] {
-  const { t } = view.field.samples;
-  const out: number[] = [];
-  for (let i = 0; i < t.length; i += 1) {
-    if (t[i]! >= flight.start && t[i]! <= flight.end && view.account.weight[i]! > 0) out.push(i);
-  }
-  return out;
-}
+import { drawingsOf } from './view.ts';
 
 /**
  * Scatter of the steps across over their mean, with what the noise of the marks accounts for taken out. Null where the thing
@@ -39,15 +30,22 @@ export function stepScatter(view: TrackView, flight: FlightView): { value: numbe
   };
 }
 
-/** Farthest drawing off the arc, as a share of the local step; its error is the noise over that step. */
+/** Fewest drawings whose arc one of them can be off. */
+const LEAST_ARC = 5;
+
+/**
+ * Farthest drawing off the arc, as a share of the local step; its error is the noise over that step. Null where too few drawings
+ * make the arc. A repeat is measured as a repeat.
+ */
 export function offArc(view: TrackView, flight: FlightView): { value: number; se: number } | null {
   const { samples } = view.field;
   const { xs, ys } = view.account.fit;
+  if (drawingsOf(view, flight).length < LEAST_ARC) return null;
   let value = 0;
   let se = 0;
   for (const i of view.account.left) {
     const t = samples.t[i]!;
-    if (t < flight.start || t > flight.end || !standsAlone(view, i)) continue;
+    if (t < flight.start || t > flight.end || !standsAlone(view, i) || isRepeat(view, i)) continue;
     const step = Math.max(1, localStep(view, i));
     const off = Math.hypot(samples.x[i]! - xs[i]!, samples.y[i]! - ys[i]!) / step;
     if (off > value) {

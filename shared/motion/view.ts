@@ -95,3 +95,13 @@ export function flightsOf(id: string, account: Account, field: Field): FlightVie
   });
   return out;
 }
+
+/** Indices of the drawings of a flight that its account uses. */
+export function drawingsOf(view: TrackView, flight: FlightView): number[] {
+  const { t } = view.field.samples;
+  const out: number[] = [];
+  for (let i = 0; i < t.length; i += 1) {
+    if (t[i]! >= flight.start && t[i]! <= flight.end && view.account.weight[i]! > 0) out.push(i);
+  }
+  return out;
+}
