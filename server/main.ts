@@ -31,6 +31,8 @@ export interface RunningServer {
 export interface StartOptions {
   env: Pick<Env, 'HOST' | 'PORT' | 'DATA_DIR' | 'PUBLIC_ORIGIN' | 'LOG_LEVEL' | 'DEMO'> & { SESSION_SECRET: string };
   database: DatabaseConnection;
+  /** Tells whoever started the server what takes long. */
+  announce?: (sentence: string) => void;
 }
 
 const CLOSING_PATIENCE = 2_000;
@@ -39,7 +41,7 @@ const CLOSING_PATIENCE = 2_000;
  * Boots the server: data source, migrations, the demo where the database is empty, app, sockets, listen; then goes on
  * with readings an earlier run left. Whatever fails, everything that was opened before is closed again.
  */
-export async function startServer({ env, database }: StartOptions): Promise<RunningServer> {
+export async function startServer({ env, database, announce }: StartOptions): Promise<RunningServer> {
   const opened: (() => Promise<unknown>)[] = [];
   const closeAll = async () => {
     const failures: unknown[] = [];
@@ -59,7 +61,7 @@ export async function startServer({ env, database }: StartOptions): Promise<Runn
 
     const io = createLiveServer(env.PUBLIC_ORIGIN);
     const parts = { dataSource, dataDir: env.DATA_DIR, broadcast: createBroadcast(io), log, now: () => new Date() };
-    const demoSignIns = env.DEMO ? await seedDemo({ ...parts, analysis }) : [];
+    const demoSignIns = env.DEMO ? await seedDemo({ ...parts, analysis, announce }) : [];
     const lanes = Math.max(1, availableParallelism() - 1);
     const readings = createReadingQueue(parts, { analysis, lanes });
     opened.push(() => readings.close());

@@ -15,8 +15,3 @@ export function frames(value: number): string {
 export function percent(share: number): string {
   return `${Math.round(Math.abs(share) * 100)} %`;
 }
-
-/** "frame 1011" or "frames 1011 to 1023", in the production's numbers. */
-export function frameSpan(from: number, to: number): string {
-  return from === to ? `frame ${from}` : `frames ${from} to ${to}`;
-}

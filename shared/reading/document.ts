@@ -57,7 +57,6 @@ export const measureSchema = z.object({
 export type Measure = z.infer<typeof measureSchema>;
 
 const estimateSchema = z.object({ value: z.number(), se: z.number().nonnegative() });
-export type Estimate = z.infer<typeof estimateSchema>;
 
 const arcPointSchema = pointSchema.extend({ frame: z.number() });
 

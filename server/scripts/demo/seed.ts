@@ -23,7 +23,10 @@ export interface DemoSignIn {
   password: string;
 }
 
-export type SeedDeps = Pick<Deps, 'dataSource' | 'dataDir' | 'log'> & { analysis: Pick<AnalysisPool, 'analyse'> };
+export type SeedDeps = Pick<Deps, 'dataSource' | 'dataDir' | 'log'> & {
+  analysis: Pick<AnalysisPool, 'analyse'>;
+  announce?: ((sentence: string) => void) | undefined;
+};
 
 const EMAILS = Object.values(DEMO_PEOPLE).map(({ email }) => email);
 const HOUR = 3_600_000;
@@ -43,7 +46,7 @@ export async function seedDemo(deps: SeedDeps): Promise<DemoSignIn[]> {
 
 async function fill(deps: SeedDeps): Promise<void> {
   const began = Date.now();
-  deps.log.info(`Filling the empty database with a demo production, “${DEMO_PRODUCTION.name}”. This happens once.`);
+  deps.announce?.(`Filling the empty database with a demo production, “${DEMO_PRODUCTION.name}”. This happens once.`);
   const cast = await invite(deps, new Date(began - 240 * HOUR));
   const clock = { now: new Date(began) };
   const readings = followReadings();

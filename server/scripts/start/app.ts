@@ -55,7 +55,7 @@ async function serve(root: string, stop: AbortController, cleanup: Cleanup, repo
     ensureClientBuilt(root, signal),
   ]);
   signal.throwIfAborted();
-  const server = await unlessStopped(startServer({ env, database }), signal).catch((error) => {
+  const server = await unlessStopped(startServer({ env, database, announce: console.log }), signal).catch((error) => {
     // Another program may have taken the port since it was checked.
     throw listenFault(error, env.HOST, env.PORT);
   });
