@@ -10,9 +10,10 @@ const checks: Record<string, string[]> = {
   types: ['tsc', '--noEmit'],
   lint: ['oxlint', '--deny-warnings'],
   formatting: ['biome', 'format', '.'],
+  unused: ['knip', '--no-progress'],
 };
 
-/** Runs types, lint and formatting; each counts as one, and one that fails shows what its tool said. */
+/** Runs types, lint, formatting and the search for what nothing uses; each counts as one, and one that fails shows what its tool said. */
 export async function runChecks(root: string, signal: AbortSignal): Promise<Count> {
   const results = await Promise.all(Object.entries(checks).map(([name, words]) => runCheck(root, name, words, signal)));
   const passed = results.filter(Boolean).length;
