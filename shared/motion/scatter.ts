@@ -2,34 +2,6 @@ import { unexplained } from './compete.ts';
 import type { FlightView, TrackView } from './view.ts';
 import { drawingsOf } from './view.ts';
 
-/**
- * Scatter of the steps across over their mean, with what the noise of the marks accounts for taken out. Null where the thing
- * hardly moves across.
- */
-export function stepScatter(view: TrackView, flight: FlightView): { value: number; se: number } | null {
-  const used = drawingsOf(view, flight);
-  const { samples } = view.field;
-  const { xs } = view.account.fit;
-  const noise2 = view.account.noise2;
-  let sum = 0;
-  let count = 0;
-  let mean = 0;
-  for (let k = 1; k < used.length; k += 1) {
-    const a = used[k - 1]!;
-    const b = used[k]!;
-    const off = samples.x[b]! - xs[b]! - (samples.x[a]! - xs[a]!);
-    sum += off * off - noise2 * (1 / samples.weight[a]! + 1 / samples.weight[b]!);
-    mean += Math.abs(xs[b]! - xs[a]!);
-    count += 1;
-  }
-  if (count < 4 || mean / count < 2 * Math.sqrt(noise2)) return null;
-  mean /= count;
-  return {
-    value: Math.sqrt(Math.max(0, sum / count)) / mean,
-    se: Math.sqrt((2 * noise2) / Math.sqrt(count)) / mean / 2,
-  };
-}
-
 /** Fewest drawings whose arc one of them can be off. */
 const LEAST_ARC = 5;
 

@@ -1,15 +1,19 @@
 import { digits, percent } from '../words.ts';
 import type { FlightView, TrackView } from '../view.ts';
-import type { FindingRule } from './rule.ts';
+import { scatterAcross } from '../stepScatter.ts';
+import type { Draft, FindingRule } from './rule.ts';
 import { severityOf, shapeOn } from './rule.ts';
 
-/** Horizontal spacing drifts: the thing slows in or out to a side, where nothing in the air pushes it. */
+/**
+ * Horizontal spacing is not uniform: it drifts (the thing slows in or out to a side, where nothing in the air pushes it), or its
+ * steps scatter.
+ */
 export const acrossUneven: FindingRule = {
   kind: 'across-uneven',
   find(view) {
     return view.flights.flatMap((flight) => {
       const shape = shapeOn(view.account, flight, ['ease']);
-      if (!shape) return [];
+      if (!shape) return scattered(view, flight);
       const drift = 2 * shape.value;
       const severity = severityOf(drift, 2 * shape.error, view.account.freedom, view.tolerances.acrossDrift);
       if (!severity || explainedByTilt(view, flight, shape.value)) return [];
@@ -32,6 +36,37 @@ export const acrossUneven: FindingRule = {
     });
   },
 };
+
+/** The steps across scatter: every drawing moves sideways to its place on the arc, its height stays. */
+function scattered(view: TrackView, flight: FlightView): Draft[] {
+  const { account, field, tolerances } = view;
+  const scatter = scatterAcross(view, flight);
+  const severity = scatter && severityOf(scatter.value, scatter.se, account.freedom, tolerances.acrossSpread);
+  if (!severity) return [];
+  const { samples } = field;
+  const { knots, xs, ys } = account.fit;
+  const across = Math.abs(knots.x[flight.span + 1]! - knots.x[flight.span]!) / flight.length;
+  const move = field.drawings.flatMap((_, drawing) => {
+    const t = samples.t[drawing]!;
+    if (t < flight.start || t > flight.end) return [];
+    const stray = account.left.includes(drawing);
+    return [{ drawing, dx: xs[drawing]! - samples.x[drawing]!, dy: stray ? ys[drawing]! - samples.y[drawing]! : 0 }];
+  });
+  return [
+    {
+      kind: 'across-uneven',
+      flight,
+      from: flight.start,
+      to: flight.end,
+      severity,
+      title: 'Steps across scatter',
+      detail:
+        `The steps across are wider and closer by turns, by ${percent(scatter.value)} of their mean; in the air they are all alike. ` +
+        `Slide the drawings sideways to ${digits(across * view.hold)} px every ${view.hold > 1 ? 'drawing' : 'frame'}; their heights stay.`,
+      move,
+    },
+  ];
+}
 
 /** Sideways pull as a share of gravity that a camera tilted by half a degree shows as well. */
 const TILT = 0.01;

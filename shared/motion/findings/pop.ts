@@ -1,6 +1,7 @@
 import { digits, percent } from '../words.ts';
 import { shownAt } from '../view.ts';
 import { isRepeat, localStep, standsAlone } from '../scatter.ts';
+import { scatterAcross } from '../stepScatter.ts';
 import type { Draft, FindingRule } from './rule.ts';
 import { severityOf } from './rule.ts';
 
@@ -22,7 +23,8 @@ export const pop: FindingRule = {
       const off = Math.hypot(dx, dy);
       const step = localStep(view, i);
       const noise = Math.sqrt(account.noise2);
-      const bent = account.fault?.kind === 'shape' && account.fault.span === flight.span;
+      const bent =
+        (account.fault?.kind === 'shape' && account.fault.span === flight.span) || scatterAcross(view, flight) !== null;
       const least = Math.max(1, (bent ? 9 : 4) * noise, (bent ? tolerances.pop.visible : tolerances.pop.from) * step);
       if (off < least) continue;
       const severity = severityOf(off / Math.max(step, 1), 0, account.freedom, tolerances.pop) ?? 'minor';

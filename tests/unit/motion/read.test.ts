@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Hold } from '../../../shared/reading/document.ts';
 import { readingSchema } from '../../../shared/reading/document.ts';
-import { bounceMarks, onHold, readMarks, throwMarks } from './factories.ts';
+import { bounceMarks, mended, normalFrom, onHold, readMarks, throwMarks } from './factories.ts';
 
 const plain = { takeOff: 3.4, landing: 23.4, frames: 27, height: 220, noise: 0.3 };
 
@@ -131,6 +131,32 @@ describe('one fault gives one finding, named as an animator would', () => {
     expect(right.findings).toEqual([]);
     expect(wrong.findings).toMatchObject([{ kind: 'gravity-off-scale', title: 'Floats for its size' }]);
     expect(right.objects[0]!.flights[0]!.gravity.metric!.value).toBeCloseTo(9.8, 0);
+  });
+});
+
+describe('steps across that scatter', () => {
+  const scattered = (share: number, noise = 0.2) => {
+    const normal = normalFrom(77);
+    return throwMarks({ ...plain, noise }).map((mark) =>
+      mark.frame > 3 && mark.frame < 24 ? { ...mark, x: mark.x + 18 * share * Math.SQRT1_2 * normal() } : mark,
+    );
+  };
+  it('are told once, with a mend that slides the drawings sideways and then reads true', () => {
+    const marks = scattered(0.25);
+    const reading = readMarks(marks);
+    expect(reading.findings).toMatchObject([{ kind: 'across-uneven', title: 'Steps across scatter' }]);
+    expect(reading.findings[0]!.mend.length).toBeGreaterThan(15);
+    const spread = reading.objects[0]!.flights[0]!.measures.find((measure) => measure.name === 'across-spread')!;
+    expect(spread.verdict).toBe('off');
+    expect(spread.low).toBeLessThan(0.25);
+    expect(spread.high).toBeGreaterThan(0.25);
+    expect(readMarks(mended(marks, reading)).findings).toEqual([]);
+  });
+  it('are left alone within the tolerance', () => {
+    expect(readMarks(scattered(0.04)).findings).toEqual([]);
+  });
+  it('are left alone where noise scatters the heights as much', () => {
+    expect(readMarks(throwMarks({ ...plain, speed: 9, noise: 1.5 })).findings).toEqual([]);
   });
 });
 
