@@ -1,4 +1,5 @@
 import type { Hold, Mark } from '../reading/document.ts';
+import { findMix } from './mix.ts';
 
 /** How long each drawing is shown, and on which frame the pattern starts. */
 export interface HoldPattern {
@@ -11,7 +12,10 @@ export interface HoldPattern {
 
 /** The pattern as told, with its phase found; or found altogether when nothing is told. */
 export function holdOf(marks: readonly Mark[], told: Hold | undefined): HoldPattern {
-  if (told === undefined) return findHold(marks);
+  if (told === undefined) {
+    const starts = findMix(marks);
+    return starts ? { hold: 'mixed', phase: 1, starts, caution: MIXED } : findHold(marks);
+  }
   if (told === 'mixed') return { hold: told, phase: 1, starts: exposureOf(marks), caution: MIXED };
   return { hold: told, phase: told === 1 ? 1 : findPhase(marks, told), starts: [] };
 }
