@@ -41,6 +41,9 @@ export function measureOf(name: MeasureName, estimate: Estimated, freedom: numbe
   };
 }
 
+/** Measures that are lengths over lengths: their intervals end at nothing. */
+const NEVER_BELOW_NOTHING: readonly MeasureName[] = ['across-spread', 'off-arc'];
+
 /** The measures of one flight, by name. Those that its marks cannot decide at all are left out. */
 export function measuresOf(view: TrackView, flight: FlightView): Measure[] {
   const { account, tolerances } = view;
@@ -48,7 +51,8 @@ export function measuresOf(view: TrackView, flight: FlightView): Measure[] {
   const out: Measure[] = [];
   const add = (name: MeasureName, estimate: Estimated | null, against: Against | null) => {
     if (!estimate || ![estimate.value, estimate.se].every(Number.isFinite)) return;
-    out.push(measureOf(name, estimate, freedom, against));
+    const measure = measureOf(name, estimate, freedom, against);
+    out.push(NEVER_BELOW_NOTHING.includes(name) ? { ...measure, low: Math.max(0, measure.low) } : measure);
   };
   if (flight.apex > 1 && flight.apex < flight.length - 1) out.push(...shapesOfArc(view, flight));
   add('across-drift', acrossDrift(view, flight), {
