@@ -118,7 +118,7 @@ describe('the layers', () => {
     await user.keyboard('12');
     expect(layer(container, 'marks')).toBeNull();
     expect(layer(container, 'arc')).toBeNull();
-    await waitFor(() => expect(address()).toContain('layers=findings%2Cladders%2Cnumbers'));
+    await waitFor(() => expect(address()).toContain('layers=findings,ladders,numbers'));
     await user.click(screen.getByRole('button', { name: 'Marks' }));
     await user.keyboard('2');
     expect(layer(container, 'marks')).toBeTruthy();
@@ -325,6 +325,22 @@ describe('deciding', () => {
     await user.click(screen.getAllByRole('button', { name: 'Another pass…' })[0]!);
     await user.click(screen.getByRole('button', { name: 'Ask for another pass' }));
     expect(screen.getByRole('alert').textContent).toContain('Say in a sentence why');
+  });
+
+  test('is not offered on a take that has a later one', async () => {
+    const { client, take } = showTake({ take: theirs, role: 'mentor' });
+    act(() => {
+      client.setQueryData(
+        shotOptions(SLUG, take.shotNumber).queryKey,
+        buildShot({
+          number: take.shotNumber,
+          revision: 9,
+          takes: [take, buildTake({ number: take.number + 1, revision: 9 })],
+        }),
+      );
+    });
+    expect(await screen.findByRole('link', { name: `Take ${take.number + 1} is newer` })).toBeTruthy();
+    expect(screen.queryByRole('button', { name: /Clear|Another pass|Waive/ })).toBeNull();
   });
 
   test('is not offered to an animator, nor to a mentor for their own take, who is told why', () => {

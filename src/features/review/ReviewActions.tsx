@@ -11,6 +11,8 @@ interface ReviewActionsProps {
   slug: string;
   take: Take;
   actor: Actor;
+  /** Whether the shot has no later take: only that one is decided on. */
+  newest: boolean;
   /** Under the thumb of a phone: wide buttons with short words; waiving is seldom and stands in the take's menu. */
   thumb?: boolean;
 }
@@ -23,10 +25,10 @@ export function whyNot(actor: Actor, take: Take): string | null {
 }
 
 /** Clear, another pass, waive: for those who may, and never for their own take. */
-export function ReviewActions({ slug, take, actor, thumb = false }: ReviewActionsProps) {
+export function ReviewActions({ slug, take, actor, newest, thumb = false }: ReviewActionsProps) {
   const decide = useDecide(slug, take.id);
   const [asked, setAsked] = useState<'another-pass' | 'waived' | null>(null);
-  if (!can(actor, 'take:decide', { postedById: take.postedBy.id })) return null;
+  if (!newest || !can(actor, 'take:decide', { postedById: take.postedBy.id })) return null;
   const close = () => {
     setAsked(null);
     decide.reset();

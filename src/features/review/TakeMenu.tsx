@@ -14,12 +14,14 @@ interface TakeMenuProps {
   slug: string;
   take: Take;
   actor: Actor;
+  /** Whether the shot has no later take: only that one is decided on. */
+  newest: boolean;
   onReadAgain: () => void;
   onMoved: (take: Take) => void;
 }
 
 /** What is seldom done to a take: reading it again, moving it to another shot. */
-export function TakeMenu({ slug, take, actor, onReadAgain, onMoved }: TakeMenuProps) {
+export function TakeMenu({ slug, take, actor, newest, onReadAgain, onMoved }: TakeMenuProps) {
   const [moving, setMoving] = useState(false);
   const [waiving, setWaiving] = useState(false);
   const narrow = useMediaQuery('(max-width: 47.99rem)');
@@ -28,7 +30,7 @@ export function TakeMenu({ slug, take, actor, onReadAgain, onMoved }: TakeMenuPr
   const sheet = useQuery({ ...sheetOptions(slug), enabled: moving });
   const underWay = take.reading.status === 'queued' || take.reading.status === 'reading';
   const items: MenuItem[] = [
-    ...(narrow && can(actor, 'take:decide', { postedById: take.postedBy.id })
+    ...(narrow && newest && can(actor, 'take:decide', { postedById: take.postedBy.id })
       ? [{ label: 'Waive what is off…', run: () => setWaiving(true) }]
       : []),
     ...(can(actor, 'take:readAgain') && !underWay ? [{ label: 'Read again', run: onReadAgain }] : []),

@@ -87,6 +87,7 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
   ]);
 
   const latest = Math.max(take.number, ...(shot?.takes.map((one) => one.number) ?? []));
+  const newest = take.number === latest;
   return (
     <div className={DESK}>
       <TakeHead
@@ -100,12 +101,13 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
             slug={slug}
             take={take}
             actor={actor}
+            newest={newest}
             onReadAgain={() => readAgain.mutate()}
             onMoved={(moved) => void navigate(paths.take(slug, moved.shotNumber, moved.number), { replace: true })}
           />
         }
       >
-        {!narrow && <TakeActions slug={slug} take={take} actor={actor} onWrite={startNote} />}
+        {!narrow && <TakeActions slug={slug} take={take} actor={actor} newest={newest} onWrite={startNote} />}
       </TakeHead>
       {readAgain.error && <ErrorNote className="mb-3">{sentenceOf(readAgain.error)}</ErrorNote>}
       <div className={GRID}>
@@ -181,7 +183,9 @@ export function TakeDesk({ slug, take, shot }: TakeDeskProps) {
           )}
         </div>
       </div>
-      {narrow && !talk.isWriting && <ThumbBar slug={slug} take={take} actor={actor} onWrite={startNote} />}
+      {narrow && !talk.isWriting && (
+        <ThumbBar slug={slug} take={take} actor={actor} newest={newest} onWrite={startNote} />
+      )}
     </div>
   );
 }

@@ -1,5 +1,5 @@
 import { useCallback, useEffect, useRef, useState } from 'react';
-import { useLocation, useSearchParams } from 'react-router';
+import { useLocation, useNavigate, useSearchParams } from 'react-router';
 import { type Layer, layersFromAddress, layersToAddress, switchLayer } from '../../features/layers/layerChoice.ts';
 import type { Playhead } from '../../lib/playhead.ts';
 
@@ -22,7 +22,8 @@ export function frameOfAddress(search: URLSearchParams, firstFrame: number): num
  * the address, so that "back" leaves the take. What comes by the address, as from a link, is taken over.
  */
 export function useTakeAddress(playhead: Playhead, firstFrame: number) {
-  const [search, setSearch] = useSearchParams();
+  const [search] = useSearchParams();
+  const navigate = useNavigate();
   const [layers, setLayers] = useState(() => layersFromAddress(search.get('layers')));
   // The router answers a moment later; until then this is what the address will say.
   const said = useRef({ frame: search.get('frame'), layers: search.get('layers') });
@@ -40,9 +41,11 @@ export function useTakeAddress(playhead: Playhead, firstFrame: number) {
         if (value === null) next.delete(name);
         else next.set(name, value);
       }
-      setSearch(next, { replace: true, preventScrollReset: true, state: OWN });
+      // A comma needs no escape in a query, and people read this address.
+      const words = next.toString().replaceAll('%2C', ',');
+      void navigate({ search: words && `?${words}` }, { replace: true, preventScrollReset: true, state: OWN });
     },
-    [setSearch],
+    [navigate],
   );
   const latest = useRef(write);
   useEffect(() => {
