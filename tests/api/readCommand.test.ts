@@ -6,8 +6,8 @@ import sharp from 'sharp';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { readingSchema } from '../../shared/reading/document.ts';
 import { mountStrip } from '../unit/finding/mountStrip.ts';
-import { paintTake, toss } from '../unit/finding/paintTake.ts';
-import { drawTake } from '../unit/analysis/drawTake.ts';
+import { paintTake, toss } from '../support/paintTake.ts';
+import { drawTake } from '../support/drawTake.ts';
 
 const ROOT = join(import.meta.dirname, '../..');
 let folder: string;

@@ -6,7 +6,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { inspectPicture } from '../../../server/analysis/inspect.ts';
 import { makeThumbnail } from '../../../server/analysis/thumbnail.ts';
 import { blankPng, pngChunk } from '../../support/pngBytes.ts';
-import { paintTake } from '../finding/paintTake.ts';
+import { paintTake } from '../../support/paintTake.ts';
 
 let folder: string;
 const at = (name: string): string => join(folder, name);

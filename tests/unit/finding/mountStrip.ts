@@ -1,6 +1,6 @@
 import { type Grid, gridCells } from '../../../shared/finding/grid.ts';
 import type { Picture } from '../../../shared/finding/types.ts';
-import { paintTake } from './paintTake.ts';
+import { paintTake } from '../../support/paintTake.ts';
 
 export interface MountOptions {
   columns: number;

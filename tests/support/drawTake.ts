@@ -1,6 +1,6 @@
 import { join } from 'node:path';
 import sharp from 'sharp';
-import { paintTake, type PaintOptions } from '../finding/paintTake.ts';
+import { paintTake, type PaintOptions } from './paintTake.ts';
 
 /** Writes a painted take to a folder as PNG files and answers their paths in order. */
 export async function drawTake(folder: string, options: Partial<PaintOptions>): Promise<string[]> {

@@ -1,12 +1,12 @@
 import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
-import { analyseFrames } from '../../server/analysis/analyseFrames.ts';
-import type { FindingKind } from '../../shared/reading/kinds.ts';
+import { analyseFrames } from '../../../server/analysis/analyseFrames.ts';
+import type { FindingKind } from '../../../shared/reading/kinds.ts';
 
 // Source: the shelf's footage with known truth (footage/README.md, sections A and D): what was drawn is in truth.json,
 // and the floor of eight sequences is the first slice's. Skipped where the shelf is not there.
-const SEQUENCES = join(import.meta.dirname, '../../../shared/footage/open/sequences');
+const SEQUENCES = join(import.meta.dirname, '../../../../shared/footage/open/sequences');
 
 const FLOOR: [string, FindingKind[]][] = [
   ['o01-pencil-toss-clean', []],

@@ -1,4 +1,4 @@
-import type { Picture } from '../../../shared/finding/types.ts';
+import type { Picture } from '../../shared/finding/types.ts';
 
 export interface Place {
   x: number;

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { type Found, Finder, type FinderOptions } from '../../../shared/finding/finder.ts';
 import { ontoStage } from '../../../shared/finding/cameraMove.ts';
 import type { Picture } from '../../../shared/finding/types.ts';
-import { paintTake, type PaintOptions, type Place, toss } from './paintTake.ts';
+import { paintTake, type PaintOptions, type Place, toss } from '../../support/paintTake.ts';
 
 function findIn(pictures: Picture[], options: Partial<FinderOptions> = {}): Found {
   const { width, height } = pictures[0];

@@ -3,11 +3,11 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
-import { type AnalysisPool, type AnalysisPoolOptions, createAnalysisPool } from '../../../server/analysis/pool.ts';
-import type { AnalysisProgress, AnalysisRequest } from '../../../shared/finding/types.ts';
-import { drawTake } from './drawTake.ts';
+import { type AnalysisPool, type AnalysisPoolOptions, createAnalysisPool } from '../../server/analysis/pool.ts';
+import type { AnalysisProgress, AnalysisRequest } from '../../shared/finding/types.ts';
+import { drawTake } from '../support/drawTake.ts';
 
-const entry = (name: string): string => fileURLToPath(new URL(`./entries/${name}.ts`, import.meta.url));
+const entry = (name: string): string => fileURLToPath(new URL(`./analysisEntries/${name}.ts`, import.meta.url));
 const quiet = (): void => undefined;
 
 let folder: string;

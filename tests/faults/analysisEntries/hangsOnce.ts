@@ -1,4 +1,4 @@
-import type { AnalysisTask } from '../../../../server/analysis/messages.ts';
+import type { AnalysisTask } from '../../../server/analysis/messages.ts';
 
 /** A worker that says one word and then never lets go of its thread, unless it is asked for an answer. */
 export async function analyse({ request, progress }: AnalysisTask): Promise<unknown> {

@@ -1,4 +1,4 @@
-import type { AnalysisTask } from '../../../../server/analysis/messages.ts';
+import type { AnalysisTask } from '../../../server/analysis/messages.ts';
 
 /** A worker that breaks in the way it is told to. */
 export async function analyse({ request }: AnalysisTask): Promise<unknown> {

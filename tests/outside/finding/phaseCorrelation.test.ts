@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { type Spectrum, transform } from '../../shared/finding/fourier.ts';
-import { phaseShift } from '../../shared/finding/phaseCorrelation.ts';
+import { type Spectrum, transform } from '../../../shared/finding/fourier.ts';
+import { phaseShift } from '../../../shared/finding/phaseCorrelation.ts';
 
 const SIZE = 128;
 
