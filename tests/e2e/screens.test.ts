@@ -85,6 +85,8 @@ describe.each([
 
     it('so are the list of keys and the dialog of a decision', async () => {
       const { page } = desk;
+      // The shot's only take, so that it is still to be decided on.
+      await page.goto(`${AT}/shots/020-0090/takes/1`);
       await page.getByRole('button', { name: 'Another pass…' }).locator('visible=true').click();
       await see(page.getByRole('dialog', { name: 'Another pass' }));
       expect(await violations(page)).toEqual([]);
