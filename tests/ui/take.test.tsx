@@ -221,6 +221,12 @@ describe('the reading in the margin', () => {
     expect(screen.queryByText(/Reads true/)).toBeNull();
   });
 
+  test('counts nothing while a reading that is done is only being fetched', () => {
+    showTake({ reading: null });
+    expect(screen.getByText('The reading is being fetched')).toBeTruthy();
+    expect(screen.queryByRole('progressbar')).toBeNull();
+  });
+
   test('counts the frames while it is under way, and keeps picture and notes at work', async () => {
     const { client, take } = showTake({
       take: { reading: { status: 'reading', message: null }, sketch: null },

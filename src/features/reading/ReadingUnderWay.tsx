@@ -14,7 +14,7 @@ const PHASES: Record<ReadingProgress['phase'], string> = {
   reading: 'Reading the flight',
 };
 
-/** The margin while there is no reading: how far it is, or why there will be none. */
+/** The margin while there is no reading: how far it is, why there will be none, or its shape while it is fetched. */
 export function ReadingUnderWay({ take, slug }: { take: Take; slug: string }) {
   const { data: progress } = useQuery(progressOptions(take.id));
   if (take.reading.status === 'failed') {
@@ -25,18 +25,21 @@ export function ReadingUnderWay({ take, slug }: { take: Take; slug: string }) {
       </ErrorNote>
     );
   }
+  const onItsWay = take.reading.status === 'read';
   return (
     <Card className="px-4 py-3">
       <h2 className="mb-2 text-md">
         {take.reading.status === 'queued' && !progress ? 'Waiting to be read' : 'Reading'}
       </h2>
-      <Loading what="The reading is under way">
-        <ProgressCount
-          label={progress ? PHASES[progress.phase] : 'In line'}
-          done={progress?.done ?? 0}
-          total={progress?.total ?? take.frames}
-          unit="frames"
-        />
+      <Loading what={onItsWay ? 'The reading is being fetched' : 'The reading is under way'}>
+        {!onItsWay && (
+          <ProgressCount
+            label={progress ? PHASES[progress.phase] : 'In line'}
+            done={progress?.done ?? 0}
+            total={progress?.total ?? take.frames}
+            unit="frames"
+          />
+        )}
         <div className="mt-4 space-y-2.5">
           {[0, 1, 2, 3, 4].map((row) => (
             <div key={row} className="flex gap-3">
