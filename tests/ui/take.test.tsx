@@ -281,6 +281,15 @@ describe('the score', () => {
 });
 
 describe('writing a note', () => {
+  test('gives the focus back to the button it was begun with', async () => {
+    const { user } = showTake({ search: '?frame=1007' });
+    const button = screen.getAllByRole('button', { name: 'Write a note' })[0]!;
+    await user.click(button);
+    expect(document.activeElement).toBe(screen.getByRole('textbox', { name: 'Note on frame 1007' }));
+    await user.keyboard('{Escape}');
+    expect(document.activeElement).toBe(button);
+  });
+
   test('begins with N on the chosen frame, and Escape keeps the words for later', async () => {
     const { user } = showTake({ search: '?frame=1007' });
     await user.keyboard('n');

@@ -22,8 +22,13 @@ export function NoteBox({ draft, label, placeholder, send, focused = false, onSe
   const id = useId();
   useEffect(() => {
     if (!focused) return;
+    const before = document.activeElement;
     box.current?.focus({ preventScroll: true });
     box.current?.form?.scrollIntoView({ block: 'nearest' });
+    // Whoever came from a button goes on from there.
+    return () => {
+      if (before instanceof HTMLElement) before.focus({ preventScroll: true });
+    };
   }, [focused]);
 
   const submit = (event?: FormEvent) => {
